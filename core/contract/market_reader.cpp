@@ -1,0 +1,214 @@
+#include "contract/market_reader.hpp"
+
+#include "contract/asset_reader.hpp"
+#include "contract/curve_reader.hpp"
+#include "contract/rate_reader.hpp"
+
+#include <chrono>
+#include <utility>
+
+namespace forwright::contract {
+
+using dates::Date;
+using discounting::CurvePtr;
+using forward::AssetKind;
+using forward::Market;
+using income::TwoWay;
+
+namespace {
+
+/// Where the request names no day that the market is of.
+constexpr Date beforeAllDates = dates::earliest - std::chrono::days{1};
+
+/// One number for both sides, or `bid` and `offer`.
+std::optional<TwoWay<double>> readTwoWay(const Value& value, const Range& range, std::string_view what) {
+    if (!value.isObject()) {
+        if (value.present() && !value.isNumber()) {
+            value.wrongType(std::string{what} + " (a number for both sides, or an object with bid and offer)");
+            return std::nullopt;
+        }
+        const std::optional<double> both = value.number(range);
+        return both ? std::optional{TwoWay<double>{*both, *both}} : std::nullopt;
+    }
+    Reader object{value};
+    const std::optional<double> bid = object.required("bid", std::string{what} + " on the bid").number(range);
+    const std::optional<double> offer = object.required("offer", std::string{what} + " on the offer").number(range);
+    return bid && offer ? std::optional{TwoWay<double>{*bid, *offer}} : std::nullopt;
+}
+
+std::optional<TwoWay<double>> readSpot(const Value& value) {
+    const std::optional<TwoWay<double>> spot = readTwoWay(value, positive, "a spot price");
+    if (spot && spot->bid > spot->offer) {
+        value.findings().fault(value.place().member("bid"), "bid-above-offer",
+                               "The bid, " + numberText(spot->bid) + ", has to be at most the offer, " +
+                                   numberText(spot->offer) + ".");
+        return std::nullopt;
+    }
+    return spot;
+}
+
+/// Spreads cost the dealer something; a gain is told.
+void reviewSpreads(const Reader& funding, double lendSpread, double borrowSpread) {
+    if (lendSpread > 0.0) {
+        funding.findings().notice(funding.at("lendSpread"), "unusual-sign",
+                                  "The dealer would lend above the curve; a lend spread is normally 0 or below.");
+    }
+    if (borrowSpread < 0.0) {
+        funding.findings().notice(funding.at("borrowSpread"), "unusual-sign",
+                                  "The dealer would borrow below the curve; a borrow spread is normally 0 or above.");
+    }
+}
+
+std::optional<forward::Funding> readFunding(const Value& value, const CurveContext& context) {
+    Reader object{value};
+    forward::Funding funding;
+    funding.curve = readCurve(object.required("curve", "the curve: a rate, pillars or a random model"), context);
+    funding.lendSpread = object.number("lendSpread", rateRange, 0.0);
+    funding.borrowSpread = object.number("borrowSpread", rateRange, 0.0);
+    reviewSpreads(object, funding.lendSpread, funding.borrowSpread);
+    return funding.curve ? std::optional{std::move(funding)} : std::nullopt;
+}
+
+/// `amount` (or `fraction`), with `low` and `high` around it.
+std::optional<income::Estimate> readEstimate(Reader& row, std::string_view name, std::string_view what, const Range& range) {
+    const std::optional<double> amount = row.required(name, what).number(range);
+    const std::string fallback = numberText(amount.value_or(0.0));
+    const Value lowValue = row.optional("low", fallback);
+    const Value highValue = row.optional("high", fallback);
+    const std::optional<double> low = lowValue.present() ? lowValue.number(range) : amount;
+    const std::optional<double> high = highValue.present() ? highValue.number(range) : amount;
+    if (!amount || !low || !high) {
+        return std::nullopt;
+    }
+    const std::string figure = std::string{name} + ", " + numberText(*amount);
+    if (*low > *amount) {
+        lowValue.fault("out-of-order", "It has to be at most the " + figure + "; it is " + numberText(*low) + ".");
+    }
+    if (*high < *amount) {
+        highValue.fault("out-of-order", "It has to be at least the " + figure + "; it is " + numberText(*high) + ".");
+    }
+    return income::Estimate{*amount, *low, *high};
+}
+
+std::optional<income::CashDistribution> readCash(const Value& value) {
+    Reader row{value};
+    const std::optional<Date> ex = row.required("ex", "the ex date").date();
+    const Value payValue = row.optional("pay", quotedText(ex ? dates::toIso(*ex) : ""));
+    const std::optional<Date> pay = payValue.present() ? payValue.date() : ex;
+    const auto amount = readEstimate(row, "amount", "the amount a unit", anyNumber);
+    if (ex && pay && *pay < *ex) {
+        payValue.fault("pay-before-ex", "The day of payment has to be the ex date, " + dates::toIso(*ex) + ", or later; it is " +
+                                            dates::toIso(*pay) + ".");
+    }
+    if (!ex || !pay || !amount) {
+        return std::nullopt;
+    }
+    return income::CashDistribution{value.place().pointer(), *ex, *pay, *amount};
+}
+
+std::optional<income::ProportionalDistribution> readProportional(const Value& value) {
+    Reader row{value};
+    const std::optional<Date> ex = row.required("ex", "the ex date").date();
+    const auto fraction = readEstimate(row, "fraction", "the fraction of the price", fractionRange);
+    if (!ex || !fraction) {
+        return std::nullopt;
+    }
+    return income::ProportionalDistribution{value.place().pointer(), *ex, *fraction};
+}
+
+income::Income readIncome(const Value& value, const dates::BusinessCalendar& calendar) {
+    Reader object{value};
+    income::Income income;
+    object.optional("cash", "[]").rows([&](const Value& row, std::size_t /*index*/) {
+        if (auto cash = readCash(row)) {
+            income.cash.push_back(std::move(*cash));
+        }
+    });
+    object.optional("proportional", "[]").rows([&](const Value& row, std::size_t /*index*/) {
+        if (auto proportional = readProportional(row)) {
+            income.proportional.push_back(std::move(*proportional));
+        }
+    });
+    if (const auto yield = readRate(object.optional("yield", "0"), calendar)) {
+        income.yield = *yield;
+    }
+    if (const auto share = readTwoWay(object.optional("passThrough", "1"), shareRange, "a share from 0 to 1")) {
+        income.passThrough = *share;
+    }
+    return income;
+}
+
+forward::HedgeCost readHedgeCost(const Value& value) {
+    Reader object{value};
+    return {object.number("buy", costRange, 0.0), object.number("sell", costRange, 0.0)};
+}
+
+/// What a currency pair has instead of income and fee, and nothing else has.
+void readPair(Reader& market, const CurveContext& context, Market& result) {
+    market.forbid("income", "A currency pair has no income; what the base currency earns is its curve, in base.");
+    market.forbid("lendingFee", "A currency pair has no lending fee; what borrowing the base currency costs is in base.");
+    result.base = readFunding(market.required("base", "the curve of the base currency, {curve, lendSpread, borrowSpread}"), context);
+}
+
+void readHolding(Reader& market, const CurveContext& context, Market& result) {
+    market.forbid("base", "Only a currency pair has a base curve; what this asset earns is its income.");
+    result.income = readIncome(market.optional("income"), context.calendar);
+    if (const auto fee = readTwoWayRate(market.optional("lendingFee", "0"), context.calendar)) {
+        result.lendingFee = *fee;
+    }
+}
+
+/// Where the kind of the asset is not known it is not known either which of these belong.
+void passOverKind(Reader& market) {
+    for (const std::string_view name : {"income", "lendingFee", "base"}) {
+        (void)market.optional(name);
+    }
+}
+
+} // namespace
+
+std::optional<Market> readMarket(const Value& value) {
+    Reader object{value};
+    Market market;
+    market.at = value.place().pointer();
+    market.asOf = object.required("asOf", "the market's date, YYYY-MM-DD").date().value_or(beforeAllDates);
+    const std::optional<AssetKind> kind =
+        readAsset(object.required("asset", "what is dealt, {kind, currency, …}"), market.asset);
+    const CurveContext context{market.asOf, market.asset.calendar};
+
+    const auto spot = readSpot(object.required("spot", "the spot price, a number or {bid, offer}"));
+    const auto funding = readFunding(object.required("funding", "what cash costs, {curve, lendSpread, borrowSpread}"), context);
+    const Value discount = object.optional("discount", quotedText(market.at + "/funding/curve"));
+    const CurvePtr discountCurve = readCurve(discount, context);
+    market.hedgeCost = readHedgeCost(object.optional("hedgeCost"));
+    if (!kind) {
+        passOverKind(object);
+    } else if (*kind == AssetKind::currencyPair) {
+        readPair(object, context, market);
+    } else {
+        readHolding(object, context, market);
+    }
+    if (!object.findings().ok() || !spot || !funding) {
+        return std::nullopt;
+    }
+    market.spot = *spot;
+    market.funding = *funding;
+    market.discount = discountCurve ? discountCurve : funding->curve;
+    return market;
+}
+
+void reviewCalendars(const Market& market, Date last, Findings& findings) {
+    const auto yearOf = [](Date date) { return static_cast<int>(std::chrono::year_month_day{date}.year()); };
+    std::size_t index = 0;
+    for (const std::string& code : market.asset.calendar.centres()) {
+        const dates::Centre* centre = dates::findCentre(code);
+        if (centre != nullptr && (yearOf(market.asOf) < centre->firstYear || yearOf(last) > centre->lastYear)) {
+            findings.notices(Place{}, {{market.at + "/asset/calendars/" + std::to_string(index), "calendar-years",
+                              "The holidays of " + code + " are known from " + std::to_string(centre->firstYear) + " to " +
+                                  std::to_string(centre->lastYear) + "; outside of these years they follow the same rules and may change."}});
+        }
+        ++index;
+    }
+}
+
+} // namespace forwright::contract

@@ -1,0 +1,116 @@
+#pragma once
+
+#include "discounting/rate.hpp"
+#include "outcome/outcome.hpp"
+
+#include <memory>
+#include <optional>
+#include <span>
+#include <string>
+#include <vector>
+
+namespace forwright::discounting {
+
+/// A number that a curve was made from and to which sensitivities are taken.
+struct Parameter {
+    enum class Kind {
+        pillar, ///< a pillar or the quote of an instrument
+        model,  ///< a parameter of a random model, or the one rate of a flat curve
+    };
+    /// Pointer below the curve: `/pillars/2/value`, `/meanReversion`, `/scenarios/0/curve/rate`; "" for a bare number.
+    std::string at;
+    Kind kind = Kind::model;
+    double value = 0.0; ///< in its own convention; of a pillar quoted as a factor, the continuous zero rate that it makes
+};
+
+/// One quantile of a random discount factor.
+struct Quantile {
+    double probability = 0.0;
+    double factor = 0.0;
+};
+
+/// The law of a random discount factor at one date, told in its logarithm.
+class LogLaw {
+  public:
+    virtual ~LogLaw() = default;
+    /// P(ln D ≤ x).
+    [[nodiscard]] virtual double probabilityAtMost(double x) const = 0;
+    /// The smallest x whose probability reaches `probability`, which lies inside (0, 1). Where outcomes are single points a sum of
+    /// probabilities that misses by no more than `probabilityRounding` reaches it all the same.
+    [[nodiscard]] virtual double quantile(double probability) const = 0;
+    /// How long one `probabilityAtMost` takes, in units of a normal law's (about 0.1 µs); mixtures refuse to grow without end.
+    [[nodiscard]] virtual double work() const { return 1.0; }
+};
+using LogLawPtr = std::shared_ptr<const LogLaw>;
+
+/// Sums of probabilities are compared with this much room for their rounding: 0.1 + 0.4 reaches 0.5.
+inline constexpr double probabilityRounding = 1e-12;
+
+/// What a random curve knows of the law of D(u), the discount factor that will have been realised from its `asOf` to u.
+class RandomDiscount {
+  public:
+    virtual ~RandomDiscount() = default;
+    /// E[ln D(u)].
+    [[nodiscard]] virtual double meanLog(Date u) const = 0;
+    /// Var[ln D(u)] where it is known in closed form.
+    [[nodiscard]] virtual std::optional<double> varianceLog(Date u) const = 0;
+    /// The law of ln D(u); a fault `too-many-outcomes` where it can't be had.
+    [[nodiscard]] virtual outcome::Outcome<LogLawPtr> law(Date u) const = 0;
+    /// The bound of the quantiles' error, relative to the factor; 0 where they are exact but for rounding.
+    [[nodiscard]] virtual double quantileError() const { return 0.0; }
+    /// For a curve that is the mean of simulated paths: how many there are; else 0.
+    [[nodiscard]] virtual long paths() const { return 0; }
+    /// For such a curve: the standard error of Σ weights[i] · P(dates[i]), by the delta method over whole paths, so that the dates'
+    /// common movement counts; nothing for the others and for a single path.
+    [[nodiscard]] virtual std::optional<double> standardError(std::span<const Date> dates, std::span<const double> weights) const;
+
+    /// Quantiles of D(u) at `probabilities` (rising, inside (0, 1)); a fault where they can't be had: `too-many-outcomes`, or
+    /// `not-finite` where one is beyond what a number holds.
+    [[nodiscard]] outcome::Outcome<std::vector<Quantile>> quantiles(Date u, std::span<const double> probabilities) const;
+};
+
+/// The largest |ln P| that is accepted; e^±700 are the last whole hundreds that double precision holds in full.
+inline constexpr double largestLogFactor = 700.0;
+
+/// P(u): the value at `asOf` of one unit paid at u, the expectation under the pricing measure of the discount factor D(u).
+/// P(asOf) = 1. Immutable; every u asked for is from `asOf` on. In curves t(u) is ACT/365.FIXED years from `asOf`.
+/// ln P is never NaN, whatever the parameters. A factor outside e^±`largestLogFactor` is refused by `review`, with the code `not-finite`:
+/// beyond it double precision ends.
+class Curve {
+  public:
+    virtual ~Curve() = default;
+
+    [[nodiscard]] Date asOf() const { return asOf_; }
+
+    /// ln P(u). Finite wherever `review` of a date not before u has no fault.
+    [[nodiscard]] virtual double logFactor(Date u) const = 0;
+    /// P(u) = e^(ln P(u)).
+    [[nodiscard]] double factor(Date u) const;
+
+    /// The numbers the curve was made from, in the order of the request.
+    [[nodiscard]] virtual std::vector<Parameter> parameters() const = 0;
+    /// ∂ ln P(u) / ∂ parameter, exact, in the order of `parameters`; one-sided at the kinks of a monotone cubic.
+    [[nodiscard]] virtual std::vector<double> logFactorGradient(Date u) const = 0;
+
+    /// What stands against asking for factors up to `last`, and what the person should know of them (the curve's end passed).
+    [[nodiscard]] virtual outcome::Review review(Date last) const = 0;
+
+    /// How the curve is made, in plain words for the working: "3 pillars, zero rates annual ACT/365.FIXED, log-linear",
+    /// "Vasicek model, expected discount factor". No number of it is repeated.
+    [[nodiscard]] virtual std::string convention() const = 0;
+
+    /// What is known of D(u) where discounting is random; null where it is not.
+    [[nodiscard]] virtual const RandomDiscount* random() const { return nullptr; }
+
+  protected:
+    explicit Curve(Date asOf) : asOf_(asOf) {}
+    Curve(const Curve&) = default;
+    Curve& operator=(const Curve&) = delete;
+
+  private:
+    Date asOf_;
+};
+
+using CurvePtr = std::shared_ptr<const Curve>;
+
+} // namespace forwright::discounting

@@ -1,0 +1,82 @@
+#include "income/income.hpp"
+
+#include "numeric/elementary.hpp"
+
+#include <algorithm>
+
+namespace forwright::income {
+
+double Estimate::on(Side side) const {
+    switch (side) {
+    case Side::bid:
+        return high;
+    case Side::offer:
+        return low;
+    case Side::fair:
+        break;
+    }
+    return amount;
+}
+
+double Income::passThroughOn(Side side) const {
+    switch (side) {
+    case Side::bid:
+        return passThrough.bid;
+    case Side::offer:
+        return passThrough.offer;
+    case Side::fair:
+        break;
+    }
+    return 0.5 * (passThrough.bid + passThrough.offer);
+}
+
+bool counts(Date ex, Date holdFrom, Date maturity) {
+    return holdFrom < ex && ex <= maturity;
+}
+
+UnitsToHold::UnitsToHold(const Income& income, const Rate& fee, Side side, Date holdFrom, Date maturity)
+    : yield_(income.yield), fee_(fee), maturity_(maturity) {
+    const double passed = income.passThroughOn(side);
+    for (const ProportionalDistribution& row : income.proportional) {
+        if (counts(row.ex, holdFrom, maturity)) {
+            const double fraction = row.fraction.on(side);
+            reinvestments_.push_back(
+                {row.at, row.ex, fraction, (1.0 - fraction) / (1.0 - (1.0 - passed) * fraction)});
+        }
+    }
+    std::stable_sort(reinvestments_.begin(), reinvestments_.end(),
+                     [](const Reinvestment& one, const Reinvestment& other) { return one.ex < other.ex; });
+    productFrom_.assign(reinvestments_.size() + 1, 1.0);
+    for (std::size_t i = reinvestments_.size(); i-- > 0;) {
+        productFrom_[i] = reinvestments_[i].kept * productFrom_[i + 1];
+    }
+}
+
+double UnitsToHold::proportionalAfter(Date u) const {
+    const auto later =
+        std::upper_bound(reinvestments_.begin(), reinvestments_.end(), u,
+                         [](Date date, const Reinvestment& reinvestment) { return date < reinvestment.ex; });
+    return productFrom_[static_cast<std::size_t>(later - reinvestments_.begin())];
+}
+
+double UnitsToHold::after(Date u) const {
+    return proportionalAfter(u) * yieldFactor(u) * feeFactor(u);
+}
+
+double UnitsToHold::yieldFactor(Date u) const {
+    return numeric::exp(discounting::logFactor(yield_, u, maturity_));
+}
+
+double UnitsToHold::feeFactor(Date u) const {
+    return numeric::exp(discounting::logFactor(fee_, u, maturity_));
+}
+
+double UnitsToHold::yieldSlope(Date u) const {
+    return discounting::logFactorSlope(yield_, u, maturity_);
+}
+
+double UnitsToHold::feeSlope(Date u) const {
+    return discounting::logFactorSlope(fee_, u, maturity_);
+}
+
+} // namespace forwright::income

@@ -1,0 +1,80 @@
+/** The shape of a draft as it is kept and saved. */
+import { models } from '../model/draft';
+import type { Shape } from './shape';
+
+const text = 'text';
+const members = (of: Readonly<Record<string, Shape>>): Shape => ({ members: of });
+const texts = (...names: readonly string[]): Readonly<Record<string, Shape>> =>
+  Object.fromEntries(names.map((name) => [name, text]));
+const rows = (of: Readonly<Record<string, Shape>>): Shape => ({ list: members({ id: 'number', ...of }) });
+
+const compounding: Shape = { oneOf: ['continuous', 'simple', 'annual', 'semiannual', 'quarterly', 'monthly'] };
+const convention = { compounding, dayCount: text } as const;
+const rate = members({ rate: text, ...convention });
+const pillars = members({
+  quote: { oneOf: ['zero', 'factor'] },
+  ...convention,
+  interpolation: { oneOf: ['log-linear', 'linear-zero', 'monotone-cubic'] },
+  rows: rows(texts('at', 'value')),
+});
+const fixedKind: Shape = { oneOf: ['flat', 'pillars'] };
+const fixedCurve = members({ kind: fixedKind, flat: rate, pillars });
+const shortRate = members(texts('r0', 'meanReversion', 'longRun', 'volatility'));
+const curve = members({
+  kind: { oneOf: ['flat', 'pillars', 'random'] },
+  model: { oneOf: models },
+  flat: rate,
+  pillars,
+  vasicek: shortRate,
+  coxIngersollRoss: shortRate,
+  hoLee: members({ volatility: text, fit: fixedKind }),
+  hullWhite: members({ meanReversion: text, volatility: text, fit: fixedKind }),
+  meetings: members({ overnight: text, rows: rows({ date: text, moves: rows(texts('by', 'probability')) }) }),
+  scenarios: members({ rows: rows({ weight: text, curve: fixedCurve }) }),
+  samples: members({ text }),
+});
+const funding = members({ curve, lendSpread: text, borrowSpread: text });
+const bothSides = members(texts('bid', 'offer'));
+
+const market = members({
+  asOf: text,
+  asset: members({
+    kind: { oneOf: ['share', 'index', 'currency-pair', 'commodity'] },
+    ...texts('name', 'currency', 'base', 'lag', 'calendars', 'lagCalendars', 'holidays', 'openDays', 'tick'),
+    laterLags: rows(texts('from', 'lag')),
+  }),
+  spot: bothSides,
+  funding,
+  discount: members({ same: 'flag', curve }),
+  income: members({
+    cash: rows(texts('ex', 'pay', 'amount', 'low', 'high')),
+    proportional: rows(texts('ex', 'fraction', 'low', 'high')),
+    yield: rate,
+    passThrough: bothSides,
+  }),
+  fee: members({ ...texts('bid', 'offer'), ...convention }),
+  hedgeCost: members(texts('buy', 'sell')),
+  base: funding,
+});
+
+const inquiry = members({
+  client: { oneOf: ['two-way', 'buys', 'sells'] },
+  quantity: text,
+  maturity: text,
+  roll: { oneOf: ['', 'following', 'modified-following', 'preceding'] },
+  margin: members({ unit: { oneOf: ['price', 'bp-of-spot', 'bp-per-year'] }, amount: text }),
+});
+
+export const draftShape: Shape = members({
+  current: text,
+  deals: { named: members({ inquiry, market, madeAt: text, validUntil: text, demonstration: 'flag' }) },
+  tenors: members({ maturities: text }),
+  agreed: rows({
+    market: text,
+    reference: text,
+    client: { oneOf: ['bought', 'sold'] },
+    price: text,
+    quantity: text,
+    maturity: text,
+  }),
+});

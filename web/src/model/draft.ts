@@ -1,0 +1,270 @@
+/**
+ * What the person has typed, as typed. Every value is text; each kind of funding keeps its own draft, so that
+ * switching to another and back loses nothing. Values are never changed in place.
+ */
+import type { AssetKind, Compounding, MarginUnit } from "./request";
+import type { Client } from "./answer";
+
+export interface RateDraft {
+  readonly rate: string;
+  readonly compounding: Compounding;
+  readonly dayCount: string;
+}
+export interface PillarRow {
+  readonly id: number;
+  readonly at: string;
+  readonly value: string;
+}
+export type Interpolation = "log-linear" | "linear-zero" | "monotone-cubic";
+export interface PillarsDraft {
+  readonly quote: "zero" | "factor";
+  readonly compounding: Compounding;
+  readonly dayCount: string;
+  readonly interpolation: Interpolation;
+  readonly rows: readonly PillarRow[];
+}
+/** A curve that is not random: one rate, or pillars. */
+export interface FixedCurveDraft {
+  readonly kind: "flat" | "pillars";
+  readonly flat: RateDraft;
+  readonly pillars: PillarsDraft;
+}
+export interface ShortRateDraft {
+  readonly r0: string;
+  readonly meanReversion: string;
+  readonly longRun: string;
+  readonly volatility: string;
+}
+export interface MoveRow {
+  readonly id: number;
+  readonly by: string;
+  readonly probability: string;
+}
+export interface MeetingRow {
+  readonly id: number;
+  readonly date: string;
+  readonly moves: readonly MoveRow[];
+}
+export interface ScenarioRow {
+  readonly id: number;
+  readonly weight: string;
+  readonly curve: FixedCurveDraft;
+}
+export const models = [
+  "vasicek",
+  "cox-ingersoll-ross",
+  "ho-lee",
+  "hull-white",
+  "policy-meetings",
+  "scenarios",
+  "samples",
+] as const;
+export type ModelName = (typeof models)[number];
+export type CurveKind = "flat" | "pillars" | "random";
+
+export interface CurveDraft {
+  readonly kind: CurveKind;
+  readonly model: ModelName;
+  readonly flat: RateDraft;
+  readonly pillars: PillarsDraft;
+  readonly vasicek: ShortRateDraft;
+  readonly coxIngersollRoss: ShortRateDraft;
+  /** `fit` says which of this draft's own fixed curves the model is fitted to. */
+  readonly hoLee: { readonly volatility: string; readonly fit: "flat" | "pillars" };
+  readonly hullWhite: {
+    readonly meanReversion: string;
+    readonly volatility: string;
+    readonly fit: "flat" | "pillars";
+  };
+  readonly meetings: { readonly overnight: string; readonly rows: readonly MeetingRow[] };
+  readonly scenarios: { readonly rows: readonly ScenarioRow[] };
+  /** A heading of dates, then one row of factors a path, as pasted. */
+  readonly samples: { readonly text: string };
+}
+export interface FundingDraft {
+  readonly curve: CurveDraft;
+  readonly lendSpread: string;
+  readonly borrowSpread: string;
+}
+export interface CashRow {
+  readonly id: number;
+  readonly ex: string;
+  readonly pay: string;
+  readonly amount: string;
+  readonly low: string;
+  readonly high: string;
+}
+export interface ProportionalRow {
+  readonly id: number;
+  readonly ex: string;
+  readonly fraction: string;
+  readonly low: string;
+  readonly high: string;
+}
+export interface LagRow {
+  readonly id: number;
+  readonly from: string;
+  readonly lag: string;
+}
+export interface MarketDraft {
+  readonly asOf: string;
+  readonly asset: {
+    readonly kind: AssetKind;
+    readonly name: string;
+    readonly currency: string;
+    readonly base: string;
+    readonly lag: string;
+    readonly laterLags: readonly LagRow[];
+    readonly calendars: string;
+    readonly lagCalendars: string;
+    /** Further days without business, and days with business whatever the calendars say, apart by semicolons. */
+    readonly holidays: string;
+    readonly openDays: string;
+    readonly tick: string;
+  };
+  readonly spot: { readonly bid: string; readonly offer: string };
+  readonly funding: FundingDraft;
+  /** Whether what is already agreed is discounted at the funding curve. */
+  readonly discount: { readonly same: boolean; readonly curve: CurveDraft };
+  readonly income: {
+    readonly cash: readonly CashRow[];
+    readonly proportional: readonly ProportionalRow[];
+    readonly yield: RateDraft;
+    readonly passThrough: { readonly bid: string; readonly offer: string };
+  };
+  readonly fee: {
+    readonly bid: string;
+    readonly offer: string;
+    readonly compounding: Compounding;
+    readonly dayCount: string;
+  };
+  readonly hedgeCost: { readonly buy: string; readonly sell: string };
+  readonly base: FundingDraft;
+}
+export interface InquiryDraft {
+  readonly client: Client;
+  readonly quantity: string;
+  readonly maturity: string;
+  readonly roll: "" | "following" | "modified-following" | "preceding";
+  readonly margin: { readonly unit: MarginUnit; readonly amount: string };
+}
+/** One asset's market and what is asked of it. */
+export interface DealDraft {
+  readonly inquiry: InquiryDraft;
+  readonly market: MarketDraft;
+  /** When the market was taken down, `2026-12-01T08:40`, and until when it may be used; empty where not said. */
+  readonly madeAt: string;
+  readonly validUntil: string;
+  readonly demonstration: boolean;
+}
+export interface AgreedRow {
+  readonly id: number;
+  /** Which of the deals' markets it stands in. */
+  readonly market: string;
+  readonly reference: string;
+  readonly client: "bought" | "sold";
+  readonly price: string;
+  readonly quantity: string;
+  readonly maturity: string;
+}
+/** Everything that is kept, undone and saved. */
+export interface Draft {
+  readonly current: string;
+  readonly deals: Readonly<Record<string, DealDraft>>;
+  readonly tenors: { readonly maturities: string };
+  readonly agreed: readonly AgreedRow[];
+}
+
+export const emptyRate: RateDraft = { rate: "", compounding: "continuous", dayCount: "ACT/365.FIXED" };
+export const emptyPillars: PillarsDraft = {
+  quote: "zero",
+  compounding: "continuous",
+  dayCount: "ACT/365.FIXED",
+  interpolation: "log-linear",
+  rows: [],
+};
+export const emptyFixedCurve: FixedCurveDraft = { kind: "flat", flat: emptyRate, pillars: emptyPillars };
+const emptyShortRate: ShortRateDraft = { r0: "", meanReversion: "", longRun: "", volatility: "" };
+export const emptyCurve: CurveDraft = {
+  kind: "flat",
+  model: "vasicek",
+  flat: emptyRate,
+  pillars: emptyPillars,
+  vasicek: emptyShortRate,
+  coxIngersollRoss: emptyShortRate,
+  hoLee: { volatility: "", fit: "flat" },
+  hullWhite: { meanReversion: "", volatility: "", fit: "flat" },
+  meetings: { overnight: "", rows: [] },
+  scenarios: { rows: [] },
+  samples: { text: "" },
+};
+export const emptyFunding: FundingDraft = { curve: emptyCurve, lendSpread: "", borrowSpread: "" };
+export const emptyDeal: DealDraft = {
+  inquiry: {
+    client: "two-way",
+    quantity: "",
+    maturity: "",
+    roll: "",
+    margin: { unit: "bp-of-spot", amount: "" },
+  },
+  market: {
+    asOf: "",
+    asset: {
+      kind: "share",
+      name: "",
+      currency: "",
+      base: "",
+      lag: "",
+      laterLags: [],
+      calendars: "",
+      lagCalendars: "",
+      holidays: "",
+      openDays: "",
+      tick: "",
+    },
+    spot: { bid: "", offer: "" },
+    funding: emptyFunding,
+    discount: { same: true, curve: emptyCurve },
+    income: {
+      cash: [],
+      proportional: [],
+      yield: emptyRate,
+      passThrough: { bid: "", offer: "" },
+    },
+    fee: { bid: "", offer: "", compounding: "continuous", dayCount: "ACT/365.FIXED" },
+    hedgeCost: { buy: "", sell: "" },
+    base: emptyFunding,
+  },
+  madeAt: "",
+  validUntil: "",
+  demonstration: false,
+};
+
+/** One row of each list, to tell what belongs where when a draft is read back from a file. */
+export const draftShape: Draft = {
+  current: "",
+  deals: {},
+  tenors: { maturities: "" },
+  agreed: [{ id: 0, market: "", reference: "", client: "bought", price: "", quantity: "", maturity: "" }],
+};
+
+/** An id that no row of the list has. */
+export function nextId(rows: readonly { readonly id: number }[]): number {
+  return rows.reduce((largest, row) => Math.max(largest, row.id), 0) + 1;
+}
+
+/** Whether nothing stands in a row: such a row is not sent. */
+export function isBlank(row: object): boolean {
+  return Object.entries(row).every(([name, value]) => {
+    if (name === "id") return true;
+    if (typeof value === "string") return value.trim() === "";
+    if (Array.isArray(value)) return value.every((inner) => isBlank(inner as object));
+    return false;
+  });
+}
+
+/** The index in the request of each row, blank rows having none. */
+export function sentIndexes(rows: readonly object[]): readonly (number | null)[] {
+  let sent = 0;
+  return rows.map((row) => (isBlank(row) ? null : sent++));
+}
