@@ -119,8 +119,8 @@ std::string asJson(const std::vector<std::string>& texts) {
 void readCalendars(Reader& object, Asset& asset) {
     const std::vector<std::string> centres = readCentres(object.optional("calendars", "[]"));
     const Value lagValue = object.optional("lagCalendars", asJson(centres));
-    const std::vector<Date> holidays = readDates(object.optional("holidays", "[]"));
-    const std::vector<Date> openDays = readDates(object.optional("openDays", "[]"));
+    const std::vector<Date> holidays = readDates(object.optional("holidays"));
+    const std::vector<Date> openDays = readDates(object.optional("openDays"));
     asset.calendar = BusinessCalendar{centres, holidays, openDays};
     asset.lagCalendar = lagValue.present() ? BusinessCalendar{readCentres(lagValue), holidays, openDays} : asset.calendar;
 }

@@ -199,17 +199,15 @@ void readPath(const Value& row, std::size_t columns, std::vector<double>& factor
         return;
     }
     if (row.json().size() != columns) {
-        row.fault("wrong-length", "A path has one discount factor for each of the " + std::to_string(columns) +
+        row.fault("row-length", "A path has one discount factor for each of the " + std::to_string(columns) +
                                       " dates; this one has " + std::to_string(row.json().size()) + ".");
         return;
     }
-    row.rows(
-        [&factors](const Value& factor, std::size_t /*index*/) {
-            if (const auto number = factor.number(anyNumber)) {
-                factors.push_back(*number);
-            }
-        },
-        mostSampleNumbers);
+    row.rows([&factors](const Value& factor, std::size_t /*index*/) {
+        if (const auto number = factor.number(anyNumber)) {
+            factors.push_back(*number);
+        }
+    });
 }
 
 CurvePtr readSamples(Reader& object, const CurveContext& context) {
@@ -226,9 +224,9 @@ CurvePtr readSamples(Reader& object, const CurveContext& context) {
         return nullptr;
     }
     const std::size_t columns = paths.dates.size();
-    const std::size_t mostPaths = mostSampleNumbers / (columns == 0 ? 1 : columns);
+    // How many numbers there may be is the samples' own to check; no request has more paths than values.
     const bool haveRows = rows.rows(
-        [&](const Value& row, std::size_t /*index*/) { readPath(row, columns, paths.factors); }, mostPaths);
+        [&](const Value& row, std::size_t /*index*/) { readPath(row, columns, paths.factors); }, mostValues);
     if (!haveRows || paths.factors.size() != columns * rows.json().size()) {
         return nullptr;
     }

@@ -13,7 +13,7 @@
 namespace forwright::contract {
 
 /// Limits of a request, beyond those of its members.
-inline constexpr std::size_t largestRequest = 64 * 1024 * 1024; ///< bytes
+inline constexpr std::size_t largestRequest = std::size_t{64} * 1024 * 1024; ///< bytes
 inline constexpr std::size_t deepestNesting = 32;               ///< objects and lists within each other
 inline constexpr std::size_t mostValues = 5'000'000;            ///< values and member names in all
 
@@ -61,15 +61,16 @@ class Document {
   private:
     friend class Json;
     friend class DocumentBuilder;
+    struct Extent {
+        std::uint32_t begin; ///< of text, in `text_`
+        std::uint32_t size;  ///< of text, in bytes; of lists and objects, in items and members
+    };
     struct Cell {
         Json::Kind kind = Json::Kind::null;
-        std::uint32_t next = 0;   ///< the cell after this value and all that is in it
+        std::uint32_t next = 0; ///< the cell after this value and all that is in it
         union {
             double number = 0.0;
-            struct {
-                std::uint32_t begin; ///< of text, in `text_`
-                std::uint32_t size;  ///< of text, in bytes; of lists and objects, in items and members
-            } extent;
+            Extent extent;
         };
     };
     std::vector<Cell> cells_;

@@ -35,7 +35,6 @@ inline constexpr Range costRange{0.0, 1.0, false, true};
 
 inline constexpr std::size_t mostRows = 10'000;          ///< of any list
 inline constexpr std::size_t longestName = 200;          ///< characters
-inline constexpr std::size_t mostSampleNumbers = 2'000'000;
 
 class Reader;
 

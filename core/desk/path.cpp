@@ -1,6 +1,9 @@
 #include "desk/path.hpp"
 
+#include "forward/carry_table.hpp"
+
 #include <algorithm>
+#include <optional>
 #include <set>
 
 namespace forwright::desk {
@@ -51,6 +54,47 @@ std::set<Date> datesOf(const Market& market, const Schedule& schedule, const std
     return all;
 }
 
+/// One side's forward by maturity: from a table where the market allows one, else each price by itself.
+class SidePrices {
+  public:
+    SidePrices(const Market& market, const Schedule& longest, Side side) : market_(market), side_(side) {
+        if (forward::CarryTable::separates(market)) {
+            table_.emplace(market, longest, side);
+        }
+    }
+    [[nodiscard]] outcome::Outcome<double> forward(const Schedule& schedule) const {
+        forward::Price price;
+        if (table_) {
+            price.forward = table_->forward(schedule.maturity, schedule.settlement);
+        } else {
+            price = forward::price(market_, schedule, side_);
+        }
+        const outcome::Outcome<forward::Price> checked = forward::checked(market_, std::move(price), side_);
+        if (!checked) {
+            return checked.faults();
+        }
+        return checked.value().forward;
+    }
+
+  private:
+    const Market& market_;
+    Side side_;
+    std::optional<forward::CarryTable> table_;
+};
+
+/// What each distribution of `date` does to the fair forward.
+std::vector<PathStep> stepsOn(const Market& market, const Schedule& until, Date last) {
+    std::vector<PathStep> steps;
+    const forward::SideInputs fair = forward::inputsOf(market, until, Side::fair);
+    for (const forward::IncomeLine& line :
+         forward::incomeLines(market, until, fair, forward::price(market, until, fair))) {
+        if (line.counted && std::min(firstCounting(market, line.ex), last) == until.maturity) {
+            steps.push_back({line.at, until.maturity, -line.atSettlement});
+        }
+    }
+    return steps;
+}
+
 } // namespace
 
 outcome::Outcome<Path> path(const Market& market, const forward::Inquiry& inquiry) {
@@ -61,42 +105,37 @@ outcome::Outcome<Path> path(const Market& market, const forward::Inquiry& inquir
     }
     const Schedule& schedule = whole.value().schedule;
     const std::set<Date> distributions = daysOfDistributions(market, schedule);
+    const SidePrices fair(market, schedule, Side::fair);
+    const SidePrices bid(market, schedule, Side::bid);
+    const SidePrices offer(market, schedule, Side::offer);
 
     Path result;
     result.notices = whole.value().notices;
-    outcome::Faults faults;
     for (const Date date : datesOf(market, schedule, distributions)) {
+        if (date == schedule.maturity) {
+            // The end is the quote itself, to the last digit.
+            result.points.push_back(
+                {date, whole.value().fair.forward, whole.value().bid.forward, whole.value().offer.forward});
+        }
         const outcome::Outcome<Schedule> until =
             forward::schedule(market, {date, std::nullopt}, places.maturity);
         if (!until) {
             return until.faults();
         }
-        PathPoint point{date};
-        const auto put = [&](double& into, Side side) {
-            const outcome::Outcome<forward::Price> price =
-                forward::checked(market, forward::price(market, until.value(), side), side);
-            if (price) {
-                into = price.value().forward;
-            } else {
-                outcome::append(faults, "", price.faults());
+        if (date != schedule.maturity) {
+            const auto fairHere = fair.forward(until.value());
+            const auto bidHere = bid.forward(until.value());
+            const auto offerHere = offer.forward(until.value());
+            for (const auto* price : {&fairHere, &bidHere, &offerHere}) {
+                if (!*price) {
+                    return price->faults();
+                }
             }
-        };
-        put(point.fair, Side::fair);
-        put(point.bid, Side::bid);
-        put(point.offer, Side::offer);
-        if (!faults.empty()) {
-            return faults;
+            result.points.push_back({date, fairHere.value(), bidHere.value(), offerHere.value()});
         }
-        result.points.push_back(point);
-        if (distributions.count(date) == 0) {
-            continue;
-        }
-        const forward::SideInputs fair = forward::inputsOf(market, until.value(), Side::fair);
-        for (const forward::IncomeLine& line :
-             forward::incomeLines(market, until.value(), fair, forward::price(market, until.value(), fair))) {
-            if (line.counted && std::min(firstCounting(market, line.ex), schedule.maturity) == date) {
-                result.steps.push_back({line.at, date, -line.atSettlement});
-            }
+        if (distributions.count(date) != 0) {
+            std::vector<PathStep> steps = stepsOn(market, until.value(), schedule.maturity);
+            result.steps.insert(result.steps.end(), steps.begin(), steps.end());
         }
     }
     return result;

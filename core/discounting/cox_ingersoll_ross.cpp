@@ -3,6 +3,7 @@
 #include "discounting/checks.hpp"
 #include "discounting/curves.hpp"
 #include "discounting/mean_reversion.hpp"
+#include "discounting/path_makers.hpp"
 
 #include "dates/date.hpp"
 
@@ -72,6 +73,11 @@ class CoxIngersollRossCurve final : public Curve, public RandomDiscount {
     }
 
     [[nodiscard]] double quantileError() const override { return 1e-9; }
+
+    [[nodiscard]] outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates, std::size_t target) const override {
+        return detail::coxIngersollRossPaths(model_, detail::yearsTo(*this, dates), target);
+    }
+    [[nodiscard]] double pathBias() const override { return detail::coxIngersollRossPathBias; }
 
   private:
     /// Whether κ and σ are so small that they move nothing that a double could show, while their squares would underflow.

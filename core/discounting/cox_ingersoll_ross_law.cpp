@@ -1,7 +1,7 @@
 #include "discounting/complex.hpp"
 #include "discounting/cox_ingersoll_ross.hpp"
 #include "discounting/laws.hpp"
-#include "discounting/normal.hpp"
+#include "numeric/normal.hpp"
 
 #include <algorithm>
 #include <cmath>
@@ -121,7 +121,7 @@ class IntegratedRateLaw final : public LogLaw {
             low = nothing;
         }
         const double logVariance = numeric::log1p(variance_ / (mean_ * mean_));
-        double y = mean_ * numeric::exp(std::sqrt(logVariance) * normalQuantile(below) - logVariance / 2.0);
+        double y = mean_ * numeric::exp(std::sqrt(logVariance) * numeric::normalQuantile(below) - logVariance / 2.0);
         for (int steps = 0; steps < 200; ++steps) {
             if (!(y > low && y < high)) {
                 y = high > 4.0 * low ? std::sqrt(low) * std::sqrt(high) : low + (high - low) / 2.0;

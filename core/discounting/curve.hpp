@@ -1,5 +1,6 @@
 #pragma once
 
+#include "discounting/paths.hpp"
 #include "discounting/rate.hpp"
 #include "outcome/outcome.hpp"
 
@@ -46,6 +47,13 @@ using LogLawPtr = std::shared_ptr<const LogLaw>;
 /// Sums of probabilities are compared with this much room for their rounding: 0.1 + 0.4 reaches 0.5.
 inline constexpr double probabilityRounding = 1e-12;
 
+/// A normal short rate about its mean: it returns to it with the speed κ and has the volatility σ.
+struct NormalRate {
+    double meanReversion = 0.0;
+    double volatility = 0.0;
+    bool fitted = false; ///< to a curve given: expected discount factors are that curve's, whatever κ and σ are
+};
+
 /// What a random curve knows of the law of D(u), the discount factor that will have been realised from its `asOf` to u.
 class RandomDiscount {
   public:
@@ -63,6 +71,14 @@ class RandomDiscount {
     /// For such a curve: the standard error of Σ weights[i] · P(dates[i]), by the delta method over whole paths, so that the dates'
     /// common movement counts; nothing for the others and for a single path.
     [[nodiscard]] virtual std::optional<double> standardError(std::span<const Date> dates, std::span<const double> weights) const;
+
+    /// What makes paths of ln D through `dates`, which rise and are after `asOf`; that of `dates[target]` is to be known best. A fault
+    /// `too-much-work` where there are so many parts and dates that memory would not hold them.
+    [[nodiscard]] virtual outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates, std::size_t target) const = 0;
+    /// How far the mean of D(u) over such paths can be from P(u), relative to it, however many there are; 0 where paths are exact.
+    [[nodiscard]] virtual double pathBias() const { return 0.0; }
+    /// How the short rate moves, where it is normal.
+    [[nodiscard]] virtual std::optional<NormalRate> normalRate() const { return std::nullopt; }
 
     /// Quantiles of D(u) at `probabilities` (rising, inside (0, 1)); a fault where they can't be had: `too-many-outcomes`, or
     /// `not-finite` where one is beyond what a number holds.

@@ -2,6 +2,7 @@
 #include "discounting/curves.hpp"
 #include "discounting/laws.hpp"
 #include "discounting/mean_reversion.hpp"
+#include "discounting/path_makers.hpp"
 
 #include "dates/date.hpp"
 
@@ -53,6 +54,12 @@ class FittedCurve final : public Curve, public RandomDiscount {
     [[nodiscard]] std::optional<double> varianceLog(Date u) const override { return variance(u); }
     [[nodiscard]] outcome::Outcome<LogLawPtr> law(Date u) const override {
         return detail::normalLaw(meanLog(u), variance(u));
+    }
+    [[nodiscard]] outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates, std::size_t target) const override {
+        return detail::normalPaths(*this, dates, target);
+    }
+    [[nodiscard]] std::optional<NormalRate> normalRate() const override {
+        return NormalRate{meanReversion_, volatility_, true};
     }
 
   private:

@@ -1,6 +1,6 @@
 #include "discounting/laws.hpp"
 
-#include "discounting/normal.hpp"
+#include "numeric/normal.hpp"
 
 #include <algorithm>
 #include <cmath>
@@ -15,9 +15,9 @@ class NormalLaw final : public LogLaw {
   public:
     NormalLaw(double mean, double deviation) : mean_(mean), deviation_(deviation) {}
 
-    [[nodiscard]] double probabilityAtMost(double x) const override { return normalProbability((x - mean_) / deviation_); }
+    [[nodiscard]] double probabilityAtMost(double x) const override { return numeric::normalProbability((x - mean_) / deviation_); }
     [[nodiscard]] double quantile(double probability) const override {
-        return mean_ + deviation_ * normalQuantile(probability);
+        return mean_ + deviation_ * numeric::normalQuantile(probability);
     }
 
   private:

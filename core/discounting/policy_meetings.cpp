@@ -1,6 +1,7 @@
 #include "discounting/checks.hpp"
 #include "discounting/curves.hpp"
 #include "discounting/laws.hpp"
+#include "discounting/path_makers.hpp"
 
 #include "dates/date.hpp"
 #include "numeric/elementary.hpp"
@@ -43,6 +44,67 @@ struct Meeting {
 
     /// What it adds to ln P(u).
     [[nodiscard]] double logOfExpectation(Date u) const { return detail::logOfMean(odds, moves, -inForce(u)); }
+};
+
+/// One word a meeting.
+class MeetingPaths final : public PathMaker {
+  public:
+    MeetingPaths(Date asOf, double overnight, std::span<const Meeting> meetings, std::span<const Date> dates)
+        : years_(dates.size()), overnight_(overnight) {
+        Date from = asOf;
+        for (std::size_t i = 0; i < dates.size(); ++i) {
+            years_[i] = dates::years(from, dates[i]);
+            from = dates[i];
+        }
+        for (const Meeting& meeting : meetings) {
+            const auto next = std::upper_bound(dates.begin(), dates.end(), meeting.date);
+            Decision decision{static_cast<std::size_t>(next - dates.begin()), meeting.inForce(*next), meeting.moves, {}};
+            double sum = 0.0;
+            for (const double odds : meeting.odds) {
+                sum += odds;
+                decision.upTo.push_back(sum);
+            }
+            decision.upTo.back() = 1.0;
+            decisions_.push_back(std::move(decision));
+        }
+    }
+
+    [[nodiscard]] std::size_t numbers() const override { return decisions_.size(); }
+    [[nodiscard]] double work() const override { return 3.0 * static_cast<double>(decisions_.size() + years_.size()); }
+
+    void make(const std::uint32_t* words, std::size_t count, double* logFactors) const override {
+        for (std::size_t path = 0; path < count; ++path) {
+            double rate = overnight_;
+            double log = 0.0;
+            std::size_t decision = 0;
+            for (std::size_t date = 0; date < years_.size(); ++date) {
+                log -= rate * years_[date];
+                for (; decision < decisions_.size() && decisions_[decision].before == date; ++decision) {
+                    const double move = decisions_[decision].moveOf(detail::evenly(words[decision * tilePaths + path]));
+                    log -= move * decisions_[decision].inForce;
+                    rate += move;
+                }
+                logFactors[date * tilePaths + path] = log;
+            }
+        }
+    }
+
+  private:
+    struct Decision {
+        std::size_t before = 0; ///< the first date after it
+        double inForce = 0.0;   ///< years from it to that date
+        std::vector<double> moves;
+        std::vector<double> upTo; ///< the probability of each move and those before it
+
+        [[nodiscard]] double moveOf(double probability) const {
+            const auto found = std::lower_bound(upTo.begin(), upTo.end(), probability);
+            return moves[static_cast<std::size_t>(found - upTo.begin())];
+        }
+    };
+
+    std::vector<double> years_; ///< from the date before
+    std::vector<Decision> decisions_;
+    double overnight_;
 };
 
 class PolicyMeetingsCurve final : public Curve, public RandomDiscount {
@@ -132,6 +194,13 @@ class PolicyMeetingsCurve final : public Curve, public RandomDiscount {
             half = everySum(half, effect);
         }
         return detail::sumLaw(std::move(one), std::move(other));
+    }
+
+    [[nodiscard]] outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates, std::size_t /*target*/) const override {
+        const auto after = std::partition_point(meetings_.begin(), meetings_.end(),
+                                                [&](const Meeting& meeting) { return meeting.date < dates.back(); });
+        return PathMakerPtr(std::make_shared<MeetingPaths>(
+            asOf(), overnight_, std::span(meetings_.begin(), after), dates));
     }
 
   private:

@@ -1,11 +1,13 @@
 #include "discounting/checks.hpp"
 #include "discounting/curves.hpp"
+#include "discounting/path_makers.hpp"
 
 #include "dates/date.hpp"
 #include "numeric/elementary.hpp"
 
 #include <algorithm>
 #include <cmath>
+#include <cstdint>
 
 namespace forwright::discounting {
 
@@ -70,6 +72,29 @@ struct Place {
     double share = 0.0;
 };
 
+/// One word a path: which of the given paths it is.
+class ResampledPaths final : public PathMaker {
+  public:
+    /// `logs` lies path by path.
+    ResampledPaths(std::vector<double> logs, std::size_t dates) : logs_(std::move(logs)), dates_(dates) {}
+
+    [[nodiscard]] std::size_t numbers() const override { return 1; }
+    [[nodiscard]] double work() const override { return 2.0 * static_cast<double>(dates_); }
+    void make(const std::uint32_t* words, std::size_t count, double* logFactors) const override {
+        const std::uint64_t given = logs_.size() / dates_;
+        for (std::size_t path = 0; path < count; ++path) {
+            const auto row = static_cast<std::size_t>((words[path] * given) >> 32U);
+            for (std::size_t date = 0; date < dates_; ++date) {
+                logFactors[date * tilePaths + path] = logs_[row * dates_ + date];
+            }
+        }
+    }
+
+  private:
+    std::vector<double> logs_;
+    std::size_t dates_;
+};
+
 class SampleCurve final : public Curve, public RandomDiscount {
   public:
     SampleCurve(Date asOf, SamplePaths paths)
@@ -117,15 +142,26 @@ class SampleCurve final : public Curve, public RandomDiscount {
     [[nodiscard]] long paths() const override { return static_cast<long>(count_); }
 
     [[nodiscard]] outcome::Outcome<LogLawPtr> law(Date u) const override {
-        const Place place = placeOf(u);
-        std::vector<double> logs(count_);
-        for (std::size_t path = 0; path < count_; ++path) {
-            const double right = place.share == 0.0 ? 0.0 : numeric::log(factorAt(path, place.right));
-            const double left =
-                place.share == 1.0 || place.left == Place::start ? 0.0 : numeric::log(factorAt(path, place.left));
-            logs[path] = (1.0 - place.share) * left + place.share * right;
+        return LogLawPtr(std::make_shared<SampleLaw>(pathLogs(u)));
+    }
+
+    /// Paths are drawn from those given, each as likely as the other. Between two columns ln D of a path is linear in t like the curve's, and
+    /// all paths are moved alike so that their mean is the curve's there too.
+    [[nodiscard]] outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates, std::size_t /*target*/) const override {
+        if (std::uint64_t{dates.size()} * count_ > mostDrawnFrom) {
+            return outcome::Fault{"/factors", "too-much-work",
+                                  "So many paths over so many dates are too much to draw from; use fewer paths."};
         }
-        return LogLawPtr(std::make_shared<SampleLaw>(std::move(logs)));
+        std::vector<double> all(dates.size() * count_);
+        const std::vector<double> alike(count_, 1.0);
+        for (std::size_t date = 0; date < dates.size(); ++date) {
+            const std::vector<double> logs = pathLogs(dates[date]);
+            const double shift = logFactor(dates[date]) - detail::logOfMean(alike, logs);
+            for (std::size_t path = 0; path < count_; ++path) {
+                all[path * dates.size() + date] = logs[path] + shift;
+            }
+        }
+        return PathMakerPtr(std::make_shared<ResampledPaths>(std::move(all), dates.size()));
     }
 
     /// A path moves P(u) = e^((1−w) ln m₁ + w ln m₂), m the columns' means, by P(u)·((1−w)·x₁/m₁ + w·x₂/m₂)/n to first order: the standard error is
@@ -157,6 +193,21 @@ class SampleCurve final : public Curve, public RandomDiscount {
     }
 
   private:
+    static constexpr std::uint64_t mostDrawnFrom = 8'000'000;
+
+    /// ln D(u) of every path.
+    [[nodiscard]] std::vector<double> pathLogs(Date u) const {
+        const Place place = placeOf(u);
+        std::vector<double> logs(count_);
+        for (std::size_t path = 0; path < count_; ++path) {
+            const double right = place.share == 0.0 ? 0.0 : numeric::log(factorAt(path, place.right));
+            const double left =
+                place.share == 1.0 || place.left == Place::start ? 0.0 : numeric::log(factorAt(path, place.left));
+            logs[path] = (1.0 - place.share) * left + place.share * right;
+        }
+        return logs;
+    }
+
     [[nodiscard]] double factorAt(std::size_t path, std::size_t column) const {
         return paths_.factors[path * paths_.dates.size() + column];
     }

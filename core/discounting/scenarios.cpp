@@ -1,6 +1,7 @@
 #include "discounting/checks.hpp"
 #include "discounting/curves.hpp"
 #include "discounting/laws.hpp"
+#include "discounting/path_makers.hpp"
 
 #include "numeric/elementary.hpp"
 
@@ -11,6 +12,62 @@
 namespace forwright::discounting {
 
 namespace {
+
+/// The first word says which scenario, the others make a path of it; scenarios share their words.
+class ScenarioPaths final : public PathMaker {
+  public:
+    ScenarioPaths(std::vector<double> upTo, std::vector<PathMakerPtr> makers, std::size_t dates)
+        : upTo_(std::move(upTo)), makers_(std::move(makers)), dates_(dates) {
+        for (const PathMakerPtr& maker : makers_) {
+            longest_ = std::max(longest_, maker->numbers());
+            work_ = std::max(work_, maker->work());
+        }
+    }
+
+    [[nodiscard]] std::size_t numbers() const override { return 1 + longest_; }
+    [[nodiscard]] double work() const override {
+        // Of each scenario whole lanes are made, however few paths it has in a tile.
+        const double parts = static_cast<double>(std::min(makers_.size(), tilePaths));
+        return 3.0 + (work_ + static_cast<double>(longest_)) * (1.0 + 4.0 * parts / static_cast<double>(tilePaths));
+    }
+
+    void make(const std::uint32_t* words, std::size_t count, double* logFactors) const override {
+        std::vector<std::vector<std::size_t>> pathsOf(makers_.size());
+        std::vector<std::size_t> met;
+        for (std::size_t path = 0; path < count; ++path) {
+            const auto found = std::lower_bound(upTo_.begin(), upTo_.end(), detail::evenly(words[path]));
+            const auto scenario = static_cast<std::size_t>(found - upTo_.begin());
+            if (pathsOf[scenario].empty()) {
+                met.push_back(scenario);
+            }
+            pathsOf[scenario].push_back(path);
+        }
+        std::vector<std::uint32_t> own(longest_ * tilePaths);
+        std::vector<double> made(dates_ * tilePaths);
+        for (const std::size_t scenario : met) {
+            const std::vector<std::size_t>& paths = pathsOf[scenario];
+            const PathMaker& maker = *makers_[scenario];
+            for (std::size_t number = 0; number < maker.numbers(); ++number) {
+                for (std::size_t i = 0; i < paths.size(); ++i) {
+                    own[number * tilePaths + i] = words[(1 + number) * tilePaths + paths[i]];
+                }
+            }
+            maker.make(own.data(), paths.size(), made.data());
+            for (std::size_t date = 0; date < dates_; ++date) {
+                for (std::size_t i = 0; i < paths.size(); ++i) {
+                    logFactors[date * tilePaths + paths[i]] = made[date * tilePaths + i];
+                }
+            }
+        }
+    }
+
+  private:
+    std::vector<double> upTo_; ///< the weight of each scenario and those before it
+    std::vector<PathMakerPtr> makers_;
+    std::size_t dates_;
+    std::size_t longest_ = 0; ///< the most words that a scenario takes
+    double work_ = 0.0;
+};
 
 class ScenarioCurve final : public Curve, public RandomDiscount {
   public:
@@ -140,6 +197,41 @@ class ScenarioCurve final : public Curve, public RandomDiscount {
         return detail::mixtureLaw(std::move(weights), std::move(laws));
     }
 
+    [[nodiscard]] outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates, std::size_t target) const override {
+        std::vector<double> upTo;
+        std::vector<PathMakerPtr> makers;
+        double sum = 0.0;
+        double kept = 0.0;
+        for (std::size_t s = 0; s < curves_.size(); ++s) {
+            outcome::Outcome<PathMakerPtr> maker = pathMakerOf(*curves_[s], dates, target);
+            if (!maker.ok()) {
+                outcome::Faults faults;
+                outcome::append(faults, placeOf(s), maker.faults());
+                return faults;
+            }
+            sum += weights_[s];
+            kept += maker.value()->work();
+            if (kept > mostKept) {
+                return outcome::Fault{"/scenarios", "too-much-work",
+                                      "So many scenarios over so many dates are too much to simulate; use fewer of them."};
+            }
+            upTo.push_back(sum);
+            makers.push_back(std::move(maker).value());
+        }
+        upTo.back() = 1.0;
+        return PathMakerPtr(std::make_shared<ScenarioPaths>(std::move(upTo), std::move(makers), dates.size()));
+    }
+
+    [[nodiscard]] double pathBias() const override {
+        double largest = 0.0;
+        for (const CurvePtr& curve : curves_) {
+            if (curve->random() != nullptr) {
+                largest = std::max(largest, curve->random()->pathBias());
+            }
+        }
+        return largest;
+    }
+
     [[nodiscard]] double quantileError() const override {
         double largest = 0.0;
         for (const CurvePtr& curve : curves_) {
@@ -152,6 +244,19 @@ class ScenarioCurve final : public Curve, public RandomDiscount {
 
   private:
     static std::string placeOf(std::size_t scenario) { return detail::place("/scenarios", scenario) + "/curve"; }
+
+    static constexpr double mostKept = 4e6; ///< numbers in all scenarios' makers, about
+
+    static outcome::Outcome<PathMakerPtr> pathMakerOf(const Curve& curve, std::span<const Date> dates, std::size_t target) {
+        if (curve.random() != nullptr) {
+            return curve.random()->pathMaker(dates, target);
+        }
+        std::vector<double> logs;
+        for (const Date date : dates) {
+            logs.push_back(curve.logFactor(date));
+        }
+        return detail::certainPaths(std::move(logs));
+    }
 
     static double meanLogOf(const Curve& curve, Date u) {
         return curve.random() == nullptr ? curve.logFactor(u) : curve.random()->meanLog(u);

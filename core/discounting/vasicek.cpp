@@ -3,6 +3,7 @@
 #include "discounting/decay.hpp"
 #include "discounting/laws.hpp"
 #include "discounting/mean_reversion.hpp"
+#include "discounting/path_makers.hpp"
 
 #include "dates/date.hpp"
 
@@ -65,6 +66,12 @@ class VasicekCurve final : public Curve, public RandomDiscount {
     [[nodiscard]] std::optional<double> varianceLog(Date u) const override { return variance(u); }
     [[nodiscard]] outcome::Outcome<LogLawPtr> law(Date u) const override {
         return detail::normalLaw(meanLog(u), variance(u));
+    }
+    [[nodiscard]] outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates, std::size_t target) const override {
+        return detail::normalPaths(*this, dates, target);
+    }
+    [[nodiscard]] std::optional<NormalRate> normalRate() const override {
+        return NormalRate{model_.meanReversion, model_.volatility, false};
     }
 
   private:

@@ -61,19 +61,6 @@ CurvePtr baseOn(const Funding& base, Side side) {
     return base.curve;
 }
 
-/// A holder lends at the fee's bid; a short seller borrows at its offer.
-discounting::Rate feeOn(const TwoWay<discounting::Rate>& fee, Side side) {
-    switch (side) {
-    case Side::bid:
-        return fee.offer;
-    case Side::offer:
-        return fee.bid;
-    case Side::fair:
-        break;
-    }
-    return mid(fee);
-}
-
 std::vector<std::size_t> countedRows(const std::vector<income::CashDistribution>& rows,
                                      const Schedule& schedule) {
     std::vector<std::size_t> counted;
@@ -261,6 +248,18 @@ double unitsHeld(const Schedule& schedule, const SideInputs& inputs, const Price
 }
 
 } // namespace
+
+discounting::Rate feeOn(const TwoWay<discounting::Rate>& fee, Side side) {
+    switch (side) {
+    case Side::bid:
+        return fee.offer;
+    case Side::offer:
+        return fee.bid;
+    case Side::fair:
+        break;
+    }
+    return mid(fee);
+}
 
 SideInputs inputsOf(const Market& market, const Schedule& schedule, Side side) {
     return {side,

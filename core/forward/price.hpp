@@ -24,6 +24,9 @@ struct SideInputs {
     std::vector<std::size_t> cashRows; ///< indices of the market's cash rows that count, by ex date
 };
 
+/// The lending fee of a side: a holder lends at its bid, a short seller borrows at its offer, the fair price
+/// takes the mean.
+[[nodiscard]] discounting::Rate feeOn(const TwoWay<discounting::Rate>& fee, Side side);
 [[nodiscard]] SideInputs inputsOf(const Market& market, const Schedule& schedule, Side side);
 
 /// One cash distribution that counts, as it enters the price.

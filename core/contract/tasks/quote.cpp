@@ -128,7 +128,7 @@ void writeChange(Writer& writer, const std::string& at, double change) {
 }
 
 /// The parameters of one kind, as a list where there are any.
-void writeParameters(Writer& writer, std::string_view name, Parameter::Kind kind, const std::string& curveAt,
+void writeParameters(Writer& writer, std::string_view name, Parameter::Kind kind,
                      const forward::CurveSensitivity& sensitivity) {
     bool begun = false;
     for (const forward::ParameterSensitivity& entry : sensitivity.parameters) {
@@ -139,28 +139,27 @@ void writeParameters(Writer& writer, std::string_view name, Parameter::Kind kind
             writer.key(name).beginList();
             begun = true;
         }
-        writeChange(writer, curveAt + entry.parameter.at, entry.change);
+        writeChange(writer, entry.parameter.at, entry.change);
     }
     if (begun) {
         writer.endList();
     }
 }
 
-void writeCurve(Writer& writer, std::string_view name, const std::string& curveAt,
-                const forward::CurveSensitivity& sensitivity) {
+void writeCurve(Writer& writer, std::string_view name, const forward::CurveSensitivity& sensitivity) {
     writer.key(name).beginObject();
     writer.member("parallel", sensitivity.parallel);
-    writeParameters(writer, "pillars", Parameter::Kind::pillar, curveAt, sensitivity);
-    writeParameters(writer, "parameters", Parameter::Kind::model, curveAt, sensitivity);
+    writeParameters(writer, "pillars", Parameter::Kind::pillar, sensitivity);
+    writeParameters(writer, "parameters", Parameter::Kind::model, sensitivity);
     writer.endObject();
 }
 
-void writeSensitivities(Writer& writer, const Market& market, const forward::Sensitivities& sensitivities) {
+void writeSensitivities(Writer& writer, const forward::Sensitivities& sensitivities) {
     writer.key("sensitivities").beginObject();
     writer.member("spot", sensitivities.spot);
-    writeCurve(writer, "funding", market.at + "/funding/curve", sensitivities.funding);
+    writeCurve(writer, "funding", sensitivities.funding);
     if (sensitivities.base) {
-        writeCurve(writer, "base", market.at + "/base/curve", *sensitivities.base);
+        writeCurve(writer, "base", *sensitivities.base);
     }
     writer.member("fee", sensitivities.fee);
     writer.member("yield", sensitivities.yield);
@@ -311,7 +310,7 @@ void writeBlocks(Writer& writer, Findings& findings, const Market& market, const
         needSensitivities ? forward::sensitivities(market, quote.schedule, quote.fairInputs, quote.fair)
                           : forward::Sensitivities{};
     if (blocks.has(Block::sensitivities)) {
-        writeSensitivities(writer, market, sensitivities);
+        writeSensitivities(writer, sensitivities);
     }
     if (blocks.has(Block::ledger)) {
         writeLedgers(writer, market, quote);

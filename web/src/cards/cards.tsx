@@ -27,8 +27,8 @@ const listed: readonly Listed[] = [
   { id: 'fee', view: FeeCard, covers: ['market/lendingFee', 'market/fee'] },
   { id: 'hedge-cost', view: HedgeCostCard, covers: ['market/hedgeCost'] },
   { id: 'margin', view: MarginCard, covers: ['inquiry/margin'] },
-  { id: 'conventions', view: ConventionsCard, covers: ['market/asset', 'inquiry/roll', 'market'] },
   { id: 'discount', view: DiscountCard, covers: ['market/discount'] },
+  { id: 'conventions', view: ConventionsCard, covers: ['market', 'inquiry/roll'] },
 ];
 
 /** The card in which the field of a request member or draft path lies. */

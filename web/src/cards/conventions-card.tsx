@@ -74,6 +74,7 @@ export function ConventionsCard({ alwaysOpen }: CardView) {
         path="market/asset/laterLags"
         at="/market/asset/settlementLag"
         columns={lagColumns}
+        before={1}
       />
     </Card>
   );

@@ -7,7 +7,7 @@ import { Card, type CardView } from './card';
 import { CurveEditor } from './curve-editor';
 import { curveValue, curveWords, spreadWords } from './words';
 
-/** What switching funding did to the fair forward. */
+/** What switching funding did to the fair forward, where the quote that says so is not on screen. */
 function Switched() {
   const before = previous.value;
   const { good, stale } = quoteAnswer.value;
@@ -42,7 +42,7 @@ export function FundingCard({ alwaysOpen }: CardView) {
     >
       <CurveEditor label="Funding" path="market/funding/curve" at="/market/funding/curve" />
       <Spreads path="market/funding" />
-      <Switched />
+      {alwaysOpen && <Switched />}
     </Card>
   );
 }

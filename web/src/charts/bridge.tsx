@@ -12,8 +12,6 @@ import { useWidth } from './use-width';
 
 const size = 13;
 const row = 29;
-/** The rows a bridge has at most of one kind of asset; fewer leave room below, so that a switch of sides moves nothing. */
-const usualRows = 9;
 
 interface Row {
   readonly step: BridgeStep;
@@ -37,8 +35,8 @@ function rowsOf(steps: readonly BridgeStep[], side: Side, { between }: Precision
   }));
 }
 
-/** A level is a mark on its height; a change is a bar from the level before to the level after: up full, down hollow. */
-function Bars({ rows, side }: { readonly rows: readonly Row[]; readonly side: Side }) {
+/** A level is a mark on its height; a change is a bar from the level before to the level after: up full, down hollow. `room` is for so many rows, so that a change of sides moves nothing below. */
+function Bars({ rows, side, room }: { readonly rows: readonly Row[]; readonly side: Side; readonly room: number }) {
   const [ref, width] = useWidth<HTMLDivElement>(560);
   const nameWidth = Math.max(...rows.map(({ name }) => textWidth(name, size, 650))) + 14;
   const textRoom = Math.max(...rows.map(({ text }) => textWidth(text, size, 650))) + 10;
@@ -48,10 +46,15 @@ function Bars({ rows, side }: { readonly rows: readonly Row[]; readonly side: Si
   const x = scaleLinear()
     .domain(high > low ? [low, high] : [low - 1, low + 1])
     .range([nameWidth + 4, width - textRoom - 4]);
-  const height = Math.max(usualRows, rows.length) * row + 4;
+  const height = room * row + 4;
   return (
     <div ref={ref} class="chart-area" style={{ blockSize: `${height}px` }}>
-      <svg width={width} height={height} role="img" aria-label={`From spot to ${bridgeName('quote', side).toLowerCase()}: ${rows.map(({ name, text }) => `${name} ${text}`).join(', ')}.`}>
+      <svg
+        width={width}
+        height={height}
+        role="img"
+        aria-label={`From spot to ${bridgeName('quote', side).toLowerCase()}: ${rows.map(({ name, text }) => `${name} ${text}`).join(', ')}.`}
+      >
         {rows.map(({ step, name, text, from }, i) => {
           const middle = i * row + row / 2;
           const start = x(Math.min(from, step.level));
@@ -144,7 +147,7 @@ export function Bridge() {
       legend="Mark: a level. Full bar: up. Hollow bar: down."
       table={<Table rows={rows} />}
     >
-      <Bars rows={rows} side={side} />
+      <Bars rows={rows} side={side} room={Math.max(bridge.bid?.length ?? 0, bridge.offer?.length ?? 0)} />
     </FigureFrame>
   );
 }

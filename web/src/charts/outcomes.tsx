@@ -38,7 +38,7 @@ function ranges({ quantiles }: Block): Range[] {
 
 interface Props {
   readonly block: Block;
-  readonly average: number | null;
+  readonly average: number;
   /** When the money is due, in words. */
   readonly when: string;
 }
@@ -72,7 +72,7 @@ export function Outcomes({ block, average, when }: Props) {
   const rows = ranges(block);
   const marks = [
     { key: 'expected', name: 'expected', value: block.expectedFactor },
-    ...(average === null ? [] : [{ key: 'average', name: 'at average rate', value: average }]),
+    { key: 'average', name: 'at average rate', value: average },
   ].sort((a, b) => a.value - b.value);
   const values = [...rows.flatMap(({ low, high }) => [low, high]), ...marks.map(({ value }) => value)];
   const low = Math.min(...values);
@@ -91,7 +91,9 @@ export function Outcomes({ block, average, when }: Props) {
   const height = top + rows.length * row;
   const words = [
     ...marks.map(({ name, value }) => `${name} ${formatNumber(value, 6)}`),
-    ...rows.map((range) => `${range.name} between ${formatNumber(range.low, digits)} and ${formatNumber(range.high, digits)}`),
+    ...rows.map(
+      (range) => `${range.name} between ${formatNumber(range.low, digits)} and ${formatNumber(range.high, digits)}`,
+    ),
   ].join('; ');
   return (
     <FigureFrame name={`Discount factor to ${when}: where outcomes lie`} table={<Table block={block} />}>

@@ -7,7 +7,8 @@ export function textWidth(text: string, size: number, weight = 400): number {
   const key = `${weight} ${size} ${text}`;
   const known = widths.get(key);
   if (known !== undefined) return known;
-  if (pen === undefined) pen = typeof document === 'undefined' ? null : document.createElement('canvas').getContext('2d');
+  if (pen === undefined)
+    pen = typeof document === 'undefined' ? null : document.createElement('canvas').getContext('2d');
   if (!pen) return text.length * size * 0.6;
   pen.font = `${weight} ${size}px ${getComputedStyle(document.body).fontFamily}`;
   const width = pen.measureText(text).width;

@@ -33,7 +33,12 @@ export function timeTicks(x: ScaleTime<number, number>, width: number, size = 13
   ];
   const inner = x.ticks(Math.max(2, Math.floor((right - left) / 90))).map((date) => {
     const text = named(date);
-    return { at: x(date), text, width: wide(text), weight: date.getUTCMonth() === 0 && date.getUTCDate() === 1 ? 1 : 0 };
+    return {
+      at: x(date),
+      text,
+      width: wide(text),
+      weight: date.getUTCMonth() === 0 && date.getUTCDate() === 1 ? 1 : 0,
+    };
   });
   return thatFit([...ends, ...inner], 14);
 }

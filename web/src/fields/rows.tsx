@@ -23,6 +23,8 @@ interface RowsProps {
   readonly path: string;
   readonly at: string;
   readonly columns: readonly RowColumn[];
+  /** How many members of the request's list come before the rows. */
+  readonly before?: number;
 }
 
 function blankRow(columns: readonly RowColumn[], id: number): Row {
@@ -41,7 +43,7 @@ function rowFaults(at: string, columns: readonly RowColumn[]): readonly string[]
 }
 
 /** A table of inputs: typing in its last row, which is blank, adds one; rows copied from a spreadsheet paste into any cell. */
-export function Rows({ name, rowName, path, at, columns }: RowsProps) {
+export function Rows({ name, rowName, path, at, columns, before = 0 }: RowsProps) {
   const id = useId();
   const rows = (valueAt(deal.value, path) ?? []) as readonly Row[];
   const indexes = sentIndexes(rows);
@@ -86,7 +88,7 @@ export function Rows({ name, rowName, path, at, columns }: RowsProps) {
         <tbody>
           {shown.map((row, index) => {
             const sent = indexes[index] ?? null;
-            const rowAt = sent === null ? '' : `${at}/${sent}`;
+            const rowAt = sent === null ? '' : `${at}/${sent + before}`;
             const faults = sent === null ? [] : rowFaults(rowAt, columns);
             const faultId = `${id}-${row.id}`;
             return [

@@ -19,11 +19,14 @@ export function timeOf(iso: string): number {
   return Date.parse(`${iso}T00:00:00Z`);
 }
 
+/** The day that a text names; none for what is no date or no day of any month. */
 function dayOf(iso: string): Day | null {
   const [, year, month, day] = isoDate.exec(iso) ?? [];
   const name = months[Number(month) - 1];
-  const weekday = weekdays[new Date(timeOf(iso)).getUTCDay()];
-  return name && weekday ? { year: Number(year), month: name, day: Number(day), weekday } : null;
+  const date = new Date(timeOf(iso));
+  const weekday = weekdays[date.getUTCDay()];
+  if (!name || !weekday || date.getUTCDate() !== Number(day)) return null;
+  return { year: Number(year), month: name, day: Number(day), weekday };
 }
 
 /** `18 Jun 27`; what is no date stays as it is. */

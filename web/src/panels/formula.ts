@@ -21,7 +21,8 @@ interface Token {
 const closing: Readonly<Record<string, string>> = { '(': ')', '[': ']', '{': '}', '⌊': '⌋', '⌈': '⌉' };
 const patterns: readonly (readonly [Kind, RegExp])[] = [
   ['number', /^\d+(\.\d+)?(e[−-]?\d+)?/],
-  ['name', /^(Δ?\p{L}[\p{L}\d]*['′]?|∂|∞|…)/u],
+  // A hyphen or an apostrophe within a word is part of it; minus is written −.
+  ['name', /^(\p{L}[\p{L}\d]*([-'’]\p{L}[\p{L}\d]*)*|∂|∞|…)/u],
   ['open', /^[([{⌊⌈]/],
   ['close', /^[)\]}⌋⌉]/],
   ['sign', /^[+−\-±·×*/=≤≥<>≈→^_,;:|%∏√]/],
@@ -194,7 +195,13 @@ class Reader {
   private number(text: string): MathNode {
     const [mantissa = text, exponent] = text.split('e');
     if (exponent === undefined) return { tag: 'mn', text };
-    const ten: MathNode = { tag: 'msup', children: [{ tag: 'mn', text: '10' }, { tag: 'mn', text: exponent.replace('-', '−') }] };
+    const ten: MathNode = {
+      tag: 'msup',
+      children: [
+        { tag: 'mn', text: '10' },
+        { tag: 'mn', text: exponent.replace('-', '−') },
+      ],
+    };
     return mantissa === '1' ? ten : row({ tag: 'mn', text: mantissa }, mo('·'), ten);
   }
 

@@ -7,7 +7,8 @@ type Row = NonNullable<QuoteResult['income']>[number];
 /** Why a distribution is in the price or not. */
 export function incomeReason({ reason }: Pick<Row, 'reason'>, { dates }: Pick<QuoteResult, 'dates'>): string {
   if (reason === 'counted') return 'counted';
-  if (reason === 'before-hold') return `left out: ex no later than ${formatDate(dates.holdFrom)}, before the hedge is held`;
+  if (reason === 'before-hold')
+    return `left out: ex no later than ${formatDate(dates.holdFrom)}, before the hedge is held`;
   return `left out: ex after maturity, ${formatDate(dates.maturity)}`;
 }
 
@@ -58,9 +59,9 @@ export function Income({ request, result }: { readonly request: QuoteRequest; re
                   {row.amount !== undefined ? formatNumber(row.amount, digits) : formatPercent(row.fraction ?? 0, 3)}
                 </td>
                 <td>{incomeReason(row, result)}</td>
-                <td class="num">{row.counted && row.units !== undefined ? formatNumber(row.units, 6) : ''}</td>
+                <td class="num">{row.counted ? formatNumber(row.units, 6) : ''}</td>
                 <td class="num">{row.counted && row.factor ? formatNumber(row.factor, 6) : ''}</td>
-                <td class="num">{row.counted && row.atSettlement !== undefined ? formatNumber(row.atSettlement, digits) : ''}</td>
+                <td class="num">{row.counted ? formatNumber(row.atSettlement, digits) : ''}</td>
               </tr>
             ))}
           </tbody>

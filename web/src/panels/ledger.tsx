@@ -17,7 +17,15 @@ const meaning: Readonly<Record<Shown, string>> = {
 };
 
 /** How the account closes, said plainly: with units for units and no cash left; or that it does not. */
-function Closing({ ledger, spot, digits }: { readonly ledger: NonNullable<QuoteResult['ledger']>['fair']; readonly spot: number; readonly digits: number }) {
+function Closing({
+  ledger,
+  spot,
+  digits,
+}: {
+  readonly ledger: NonNullable<QuoteResult['ledger']>['fair'];
+  readonly spot: number;
+  readonly digits: number;
+}) {
   const { obligation, closingUnits, closingCash } = ledger;
   const closes = Math.abs(closingCash) <= 1e-9 * spot && Math.abs(closingUnits - obligation) <= 1e-9;
   const units = `${formatFigures(Math.abs(closingUnits))} unit ${closingUnits < 0 ? 'short' : 'held'} against ${formatFigures(Math.abs(obligation))} to ${obligation < 0 ? 'take' : 'deliver'}`;
@@ -77,7 +85,13 @@ export function Ledger({ request, result }: { readonly request: QuoteRequest; re
           <tbody>
             {ledger.rows.map(({ date, text, units, held, cash, balance }, i) => (
               <tr key={i}>
-                <td class="date">{ledger.rows[i - 1]?.date === date ? <span class="sr-only">{formatDate(date)}</span> : formatDate(date)}</td>
+                <td class="date">
+                  {ledger.rows[i - 1]?.date === date ? (
+                    <span class="sr-only">{formatDate(date)}</span>
+                  ) : (
+                    formatDate(date)
+                  )}
+                </td>
                 <th scope="row" class="entry">
                   {text}
                 </th>

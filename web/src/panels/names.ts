@@ -1,6 +1,5 @@
 /** What a place in the request is called, for a person who does not see JSON pointers. */
-import { formatDate, formatSigned, thinSpace } from '../format';
-import { isIsoDate } from '../format';
+import { formatDate, formatSigned, isIsoDate, thinSpace } from '../format';
 import type { QuoteRequest } from '../model/view';
 
 const parameters: Readonly<Record<string, string>> = {
@@ -13,7 +12,7 @@ const parameters: Readonly<Record<string, string>> = {
   weight: 'Weight',
   probability: 'Probability',
   fit: 'Fitted curve',
-  curve: 'Curve',
+  curve: 'Rate',
 };
 
 /** What stands in the request at a pointer (RFC 6901); undefined where nothing does. */
@@ -23,7 +22,8 @@ export function at(request: unknown, pointer: string): unknown {
     .slice(1)
     .map((part) => part.replaceAll('~1', '/').replaceAll('~0', '~'))
     .reduce<unknown>(
-      (value, part) => (typeof value === 'object' && value !== null ? (value as Record<string, unknown>)[part] : undefined),
+      (value, part) =>
+        typeof value === 'object' && value !== null ? (value as Record<string, unknown>)[part] : undefined,
       request,
     );
 }
@@ -55,9 +55,4 @@ export function placeName(request: QuoteRequest, pointer: string): string {
   const known = parameters[member];
   if (row) return pointer.includes('/scenarios/') && known ? `${row}: ${known.toLowerCase()}` : row;
   return known ?? member;
-}
-
-/** What of a curve moves, in a few words. */
-export function pairOrAsset({ market }: QuoteRequest): string {
-  return market.asset.kind === 'currency-pair' ? (market.asset.base ?? 'base currency') : 'asset';
 }

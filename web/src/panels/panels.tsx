@@ -1,4 +1,5 @@
 import type { FunctionComponent } from 'preact';
+import { useEffect, useRef } from 'preact/hooks';
 import { panel, panels, quoteAnswer, showPanel } from '../model/view';
 import type { Panel, QuoteRequest, QuoteResult } from '../model/view';
 import { Income } from './income';
@@ -38,14 +39,30 @@ function choose(event: KeyboardEvent, index: number): void {
   document.getElementById(`tab-${next}`)?.focus();
 }
 
+/** Brings the chosen tab into sight where the list is wider than its place, without moving the page. */
+function useTabInSight(shown: Panel) {
+  const list = useRef<HTMLDivElement>(null);
+  useEffect(() => {
+    const tab = document.getElementById(`tab-${shown}`);
+    if (!list.current || !tab) return;
+    const { scrollLeft, clientWidth } = list.current;
+    const left = tab.offsetLeft - list.current.offsetLeft;
+    if (left < scrollLeft) list.current.scrollLeft = left;
+    else if (left + tab.offsetWidth > scrollLeft + clientWidth)
+      list.current.scrollLeft = left + tab.offsetWidth - clientWidth;
+  }, [shown]);
+  return list;
+}
+
 /** The proof of the price, one subject a tab. */
 export function Panels() {
   const { good, stale } = quoteAnswer.value;
   const shown = panel.value;
   const { view: View } = contents[shown];
+  const list = useTabInSight(shown);
   return (
     <section class="panels" aria-label="Where the price comes from" data-stale={stale}>
-      <div role="tablist" aria-label="Where the price comes from">
+      <div ref={list} role="tablist" aria-label="Where the price comes from">
         {panels.map((name, i) => (
           <button
             key={name}

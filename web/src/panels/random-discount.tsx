@@ -10,8 +10,8 @@ interface Props {
 }
 
 /** The factor at which money would be discounted if the rate were its average: e to the expected log factor. */
-export function averageRateFactor({ logFactor }: Block): number | null {
-  return logFactor ? Math.exp(logFactor.mean) : null;
+export function averageRateFactor({ logFactor }: Block): number {
+  return Math.exp(logFactor.mean);
 }
 
 function Comparison({ request, result, block }: Props & { readonly block: Block }) {
@@ -43,12 +43,16 @@ function Comparison({ request, result, block }: Props & { readonly block: Block 
           </tr>
           <tr>
             <th scope="row">the average rate</th>
-            <td class="num">{average === null ? '' : formatNumber(average, 8)}</td>
+            <td class="num">{formatNumber(average, 8)}</td>
             <td class="num">{formatNumber(block.averageRateForward, digits)}</td>
           </tr>
           <tr class="total">
-            <th scope="row">the gap{onAll !== null && `: ${formatSignedMoney(onAll, currency)} on ${formatNumber(request.inquiry.quantity)} ${unitName(request)}`}</th>
-            <td class="num">{average === null ? '' : formatSigned(block.expectedFactor - average, 8)}</td>
+            <th scope="row">
+              the gap
+              {onAll !== null &&
+                `: ${formatSignedMoney(onAll, currency)} on ${formatNumber(request.inquiry.quantity)} ${unitName(request)}`}
+            </th>
+            <td class="num">{formatSigned(block.expectedFactor - average, 8)}</td>
             <td class="num">{formatSigned(block.gap, digits)}</td>
           </tr>
         </tbody>
@@ -58,7 +62,7 @@ function Comparison({ request, result, block }: Props & { readonly block: Block 
 }
 
 function Precision({ block, digits }: { readonly block: Block; readonly digits: number }) {
-  const { paths, standardError, interval95, quantileError = 0, logFactor } = block;
+  const { paths, standardError, interval95, quantileError, logFactor } = block;
   return (
     <>
       {paths !== undefined && standardError !== undefined && interval95 && (
@@ -69,7 +73,7 @@ function Precision({ block, digits }: { readonly block: Block; readonly digits: 
           <span class="num">{formatNumber(interval95.high, digits)}</span> with 95 % confidence.
         </p>
       )}
-      {logFactor && logFactor.variance !== null && (
+      {logFactor.variance !== null && (
         <p class="muted">
           The logarithm of the factor has mean <span class="num">{formatFigures(logFactor.mean, 7)}</span> and standard
           deviation <span class="num">{formatPercent(Math.sqrt(logFactor.variance), 3)}</span>.
@@ -89,23 +93,22 @@ export function RandomDiscount({ request, result }: Props) {
   if (!block)
     return (
       <p>
-        Funding is not random here: one discount factor,{' '}
-        <b class="num">{formatNumber(result.factors.settlement, 8)}</b>, brings money from {when} to today, and the
-        forward divides by it.
+        Funding is not random here: one discount factor, <b class="num">{formatNumber(result.factors.settlement, 8)}</b>
+        , brings money from {when} to today, and the forward divides by it.
       </p>
     );
   return (
     <div class="random">
       <div class="random-words">
         <p>
-          <b>What randomness changes:</b> the forward divides by the discount factor that is expected. The average of the
-          factors is more than the factor at the average rate, so whoever discounts at the average rate gets another
+          <b>What randomness changes:</b> the forward divides by the discount factor that is expected. The average of
+          the factors is more than the factor at the average rate, so whoever discounts at the average rate gets another
           forward.
         </p>
         <p>
-          <b>What it does not change:</b> only that one expected factor enters, not how far outcomes lie apart. The hedge
-          is the same and the ledger closes at zero, whichever rate comes true, as money is borrowed and lent to its date
-          today.
+          <b>What it does not change:</b> only that one expected factor enters, not how far outcomes lie apart. The
+          hedge is the same and the ledger closes at zero, whichever rate comes true, as money is borrowed and lent to
+          its date today.
         </p>
       </div>
       <Comparison request={request} result={result} block={block} />

@@ -1,7 +1,7 @@
 import { formatSigned, formatSignedMoney } from '../format';
 import type { QuoteRequest, QuoteResult } from '../model/view';
 import { pricePrecision } from '../quote/words';
-import { pairOrAsset, placeName } from './names';
+import { placeName } from './names';
 
 interface Line {
   readonly name: string;
@@ -16,7 +16,12 @@ type Curve = NonNullable<QuoteResult['sensitivities']>['funding'];
 function curveLines(name: string, curve: Curve, request: QuoteRequest, onAll?: number): Line[] {
   return [
     { name, move: '1 bp up, every date', change: curve.parallel, ...(onAll === undefined ? {} : { onAll }) },
-    ...(curve.pillars ?? []).map(({ at, change }) => ({ name: placeName(request, at), move: '1 bp up', change, part: true })),
+    ...(curve.pillars ?? []).map(({ at, change }) => ({
+      name: placeName(request, at),
+      move: '1 bp up',
+      change,
+      part: true,
+    })),
     ...(curve.parameters ?? []).map(({ at, change }) => ({
       name: placeName(request, at),
       move: '0.0001 up',
@@ -28,13 +33,13 @@ function curveLines(name: string, curve: Curve, request: QuoteRequest, onAll?: n
 
 function linesOf(request: QuoteRequest, { sensitivities, total }: QuoteResult): Line[] {
   if (!sensitivities) return [];
-  const { spot, funding, base, fee, yield: yields, cash = [], day } = sensitivities;
+  const { spot, funding, base, fee, yield: yields, cash, day } = sensitivities;
   const lines: Line[] = [{ name: 'Spot', move: '1 up', change: spot }];
   lines.push(...curveLines('Funding', funding, request, total?.fundingBasisPoint));
-  if (base) lines.push(...curveLines(`Rate of the ${pairOrAsset(request)}`, base, request));
+  if (base) lines.push(...curveLines(`${request.market.asset.base ?? 'Base'} funding`, base, request));
   if (request.market.asset.kind !== 'currency-pair') {
-    lines.push({ name: 'Lending fee', move: '1 bp up', change: fee ?? 0 });
-    lines.push({ name: 'Yield', move: '1 bp up', change: yields ?? 0 });
+    lines.push({ name: 'Lending fee', move: '1 bp up', change: fee });
+    lines.push({ name: 'Yield', move: '1 bp up', change: yields });
   }
   lines.push(...cash.map(({ at, change }) => ({ name: placeName(request, at), move: '1 up', change })));
   if (day !== null) {
@@ -47,7 +52,7 @@ function linesOf(request: QuoteRequest, { sensitivities, total }: QuoteResult): 
 /** What moves the fair forward and by how much, one thing at a time. */
 export function Sensitivities({ request, result }: { readonly request: QuoteRequest; readonly result: QuoteResult }) {
   const lines = linesOf(request, result);
-  const digits = pricePrecision(request, result).between + 4;
+  const digits = Math.min(7, pricePrecision(request, result).between + 4);
   const { currency } = request.market.asset;
   return (
     <>
@@ -57,7 +62,6 @@ export function Sensitivities({ request, result }: { readonly request: QuoteRequ
           <thead>
             <tr>
               <th scope="col">What moves</th>
-              <th scope="col">By</th>
               <th scope="col" class="num">
                 {currency} a unit
               </th>
@@ -69,8 +73,9 @@ export function Sensitivities({ request, result }: { readonly request: QuoteRequ
           <tbody>
             {lines.map(({ name, move, change, onAll, part }, i) => (
               <tr key={i} class={part ? 'part-of' : undefined}>
-                <th scope="row">{name}</th>
-                <td>{move}</td>
+                <th scope="row">
+                  {name} <small>{move}</small>
+                </th>
                 <td class="num">{formatSigned(change, digits)}</td>
                 <td class="num">{onAll === undefined ? '' : formatSignedMoney(onAll, currency)}</td>
               </tr>

@@ -1,4 +1,4 @@
-import { datesInText, formatDate, formatFigures, formatNumber, formatSigned, isIsoDate } from '../format';
+import { datesInText, formatDate, formatFigures, formatNumber, formatSigned, isIsoDate, thinSpace } from '../format';
 import type { Precision } from '../format';
 import type { QuoteRequest, QuoteResult, WorkingStep } from '../model/view';
 import { pricePrecision } from '../quote/words';
@@ -17,11 +17,15 @@ interface Money {
   readonly precision: Precision;
 }
 
-/** A figure of the working: a date, an amount with two decimals more than the price, or a number to nine figures. */
+/** A figure of the working: a date, an amount with two decimals more than the price, a rate in per cent, or a number; all to nine figures at most. */
 function figure(value: number | string, unit: string, { currency, precision }: Money): string {
   if (typeof value === 'string') return isIsoDate(value) ? formatDate(value) : value;
   if (unit === currency) return formatNumber(value, precision.between + 2);
-  return formatFigures(value);
+  return isYearly(unit) ? `${formatFigures(value * 100)}${thinSpace}%` : formatFigures(value);
+}
+
+function isYearly(unit: string): boolean {
+  return unit.startsWith('a year');
 }
 
 function Given({ given, money }: { readonly given: WorkingStep['given']; readonly money: Money }) {
@@ -31,7 +35,7 @@ function Given({ given, money }: { readonly given: WorkingStep['given']; readonl
       {given.map(({ symbol, value, unit }) => (
         <span key={symbol}>
           <Formula text={symbol} /> = <span class="num">{figure(value, unit, money)}</span>
-          {unit && unit !== money.currency && ` ${unit}`}
+          {unit && unit !== money.currency && ` ${unit.replaceAll('-', ' ')}`}
         </span>
       ))}
     </p>
@@ -62,7 +66,17 @@ function Step({ step, money }: { readonly step: WorkingStep; readonly money: Mon
   );
 }
 
-function Group({ name, steps, money, folded }: { readonly name: string; readonly steps: readonly WorkingStep[]; readonly money: Money; readonly folded: boolean }) {
+function Group({
+  name,
+  steps,
+  money,
+  folded,
+}: {
+  readonly name: string;
+  readonly steps: readonly WorkingStep[];
+  readonly money: Money;
+  readonly folded: boolean;
+}) {
   const list = (
     <ol class="steps">
       {steps.map((step, i) => (

@@ -1,46 +1,41 @@
-import { useEffect, useState } from 'preact/hooks';
+import { useEffect, useRef, useState } from 'preact/hooks';
 
-/** The old way, for browsers that refuse the clipboard to a page from a disk. */
-function copyBySelection(text: string): boolean {
-  const area = document.createElement('textarea');
-  area.value = text;
-  area.className = 'sr-only';
-  document.body.append(area);
-  area.select();
-  const done = document.execCommand('copy');
-  area.remove();
-  return done;
-}
+type State = 'ready' | 'copied' | 'refused';
 
-async function copyText(text: string): Promise<boolean> {
-  try {
-    await navigator.clipboard.writeText(text);
-    return true;
-  } catch {
-    return copyBySelection(text);
-  }
+/** Shown where the browser keeps the clipboard from a page: the text, selected, for the person to copy. */
+function ByHand({ text }: { readonly text: string }) {
+  const field = useRef<HTMLInputElement>(null);
+  useEffect(() => field.current?.select(), [text]);
+  return <input ref={field} class="copy-by-hand" readOnly value={text} aria-label="The price as text, to copy" />;
 }
 
 /** Puts the price as a sentence on the clipboard and says so on the button, whose width stays. */
 export function CopyPrice({ text }: { readonly text: string }) {
-  const [said, setSaid] = useState('');
-  useEffect(() => setSaid(''), [text]);
+  const [state, setState] = useState<State>('ready');
+  useEffect(() => setState('ready'), [text]);
   useEffect(() => {
-    if (!said) return;
-    const timer = setTimeout(() => setSaid(''), 2500);
+    if (state !== 'copied') return;
+    const timer = setTimeout(() => setState('ready'), 2500);
     return () => clearTimeout(timer);
-  }, [said]);
+  }, [state]);
+
+  const copy = async (): Promise<void> => {
+    try {
+      await navigator.clipboard.writeText(text);
+      setState('copied');
+    } catch {
+      setState('refused');
+    }
+  };
+
   return (
     <>
-      <button
-        type="button"
-        class="quiet copy-price"
-        onClick={() => void copyText(text).then((done) => setSaid(done ? 'Copied' : 'Not copied'))}
-      >
-        {said || 'Copy price'}
+      {state === 'refused' && <ByHand text={text} />}
+      <button type="button" class="quiet copy-price" onClick={() => void copy()}>
+        {state === 'copied' ? 'Copied' : 'Copy price'}
       </button>
       <span class="sr-only" role="status">
-        {said}
+        {state === 'copied' ? 'Copied' : ''}
       </span>
     </>
   );

@@ -24,7 +24,8 @@ interface Props {
 
 function quoted({ quote }: Props['result'], { dealt }: Precision): Mark[] {
   const marks: Mark[] = [];
-  if (quote.bid !== null) marks.push({ key: 'bid', word: 'Our bid', value: quote.bid, text: formatNumber(quote.bid, dealt) });
+  if (quote.bid !== null)
+    marks.push({ key: 'bid', word: 'Our bid', value: quote.bid, text: formatNumber(quote.bid, dealt) });
   if (quote.offer !== null)
     marks.push({ key: 'offer', word: 'Our offer', value: quote.offer, text: formatNumber(quote.offer, dealt) });
   return marks;

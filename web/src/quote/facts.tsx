@@ -41,7 +41,11 @@ function facts({ request, result }: Props, { between }: Precision): Fact[] {
   ];
   if (total) {
     list.push(
-      { name: 'Margin', value: formatMoney(total.margin, currency), more: `${formatNumber(result.margin, between)} a unit` },
+      {
+        name: 'Margin',
+        value: formatMoney(total.margin, currency),
+        more: `${formatNumber(result.margin, between)} a unit`,
+      },
       { name: 'One basis point', value: formatSignedMoney(total.fundingBasisPoint, currency), more: 'funding up' },
       {
         name: 'One day',

@@ -30,7 +30,12 @@ function Standing({ stale }: { readonly stale: boolean }) {
 }
 
 /** One side: what we do, what the client does, and the price; where it was not asked for, the break-even only. */
-function SidePrice({ request, result, side, precision }: Quoted & { readonly side: Side; readonly precision: Precision }) {
+function SidePrice({
+  request,
+  result,
+  side,
+  precision,
+}: Quoted & { readonly side: Side; readonly precision: Precision }) {
   const price = result.quote[side];
   const figures = formatNumber(price ?? result.breakEven[side], price === null ? precision.between : precision.dealt);
   return (

@@ -12,3 +12,5 @@ export const beforeSwitch = signal<Previous | null>(null);
 export const preferences = signal<Preferences>({ locale: 'en-GB', decimal: '.' });
 /** A sentence where the core cannot run at all in this browser. */
 export const coreTrouble = signal<string | null>(null);
+/** The version that the core says it has; empty until it is open. */
+export const coreVersion = signal('');

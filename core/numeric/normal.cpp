@@ -1,18 +1,18 @@
-#include "discounting/normal.hpp"
+#include "numeric/normal.hpp"
 
 #include "numeric/elementary.hpp"
 
 #include <array>
 #include <cmath>
 
-namespace forwright::discounting {
+namespace forwright::numeric {
 
 namespace {
 
 constexpr double inverseRootOfTwoPi = 0.398942280401432677939946;
 
 double density(double z) {
-    return inverseRootOfTwoPi * numeric::exp(-0.5 * z * z);
+    return inverseRootOfTwoPi * exp(-0.5 * z * z);
 }
 
 /// Φ(z) − ½ = φ(z)·(z + z³/3 + z⁵/(3·5) + …): terms of one sign.
@@ -89,9 +89,9 @@ double normalQuantile(double probability) {
         return fromMiddle * rational(centralAbove, centralBelow, 0.180625 - fromMiddle * fromMiddle);
     }
     const double smaller = fromMiddle < 0.0 ? probability : 1.0 - probability;
-    const double r = std::sqrt(-numeric::log(smaller));
+    const double r = std::sqrt(-log(smaller));
     const double z = r <= 5.0 ? rational(nearTailAbove, nearTailBelow, r - 1.6) : rational(farTailAbove, farTailBelow, r - 5.0);
     return fromMiddle < 0.0 ? -z : z;
 }
 
-} // namespace forwright::discounting
+} // namespace forwright::numeric

@@ -1,7 +1,7 @@
 #pragma once
 
 /// The standard normal law, from the core's own elementary functions.
-namespace forwright::discounting {
+namespace forwright::numeric {
 
 /// Φ(z). Absolute error below 1e-15; relative error below 2e-13 wherever the value is no subnormal number. Below |z| = 3 the power series of
 /// Φ − ½ (Abramowitz and Stegun 26.2.11), beyond it the continued fraction of the tail (26.2.14).
@@ -11,4 +11,4 @@ namespace forwright::discounting {
 /// 37 (1988) 477–484).
 [[nodiscard]] double normalQuantile(double probability);
 
-} // namespace forwright::discounting
+} // namespace forwright::numeric

@@ -1,0 +1,97 @@
+// The golden table through the core itself. Read from the sources, so native only; program and module are held to it in tests/module.
+#ifndef __EMSCRIPTEN__
+#include "contract/catalogue.hpp"
+#include "contract_fixtures.hpp"
+
+#include <cmath>
+#include <filesystem>
+#include <fstream>
+#include <regex>
+#include <set>
+#include <sstream>
+
+using namespace contract_tests;
+
+namespace {
+
+const std::filesystem::path root = std::filesystem::path{__FILE__}.parent_path().parent_path().parent_path();
+
+std::string textOf(const std::filesystem::path& file) {
+    std::ifstream stream{file};
+    REQUIRE(stream.good());
+    std::ostringstream text;
+    text << stream.rdbuf();
+    return text.str();
+}
+
+std::vector<json> goldenCases() {
+    std::vector<json> all;
+    for (const auto& entry : std::filesystem::directory_iterator{root / "tests/golden"}) {
+        if (entry.path().extension() == ".json") {
+            const json table = read(textOf(entry.path()));
+            REQUIRE(table.is_object());
+            all.insert(all.end(), table["cases"].begin(), table["cases"].end());
+        }
+    }
+    return all;
+}
+
+void checkExpectation(const json& answer, const json& expected) {
+    const json::json_pointer at{expected["at"].get<std::string>()};
+    const json& value = expected["value"];
+    CAPTURE(expected.dump());
+    if (value.is_object() && value.contains("absent")) {
+        CHECK_FALSE(answer.contains(at));
+        return;
+    }
+    REQUIRE(answer.contains(at));
+    const json& actual = answer[at];
+    CAPTURE(actual.dump());
+    if (value.is_number()) {
+        REQUIRE(actual.is_number());
+        CHECK(std::fabs(actual.get<double>() - value.get<double>()) <= expected.value("tolerance", 0.0));
+    } else {
+        CHECK(actual == value);
+    }
+}
+
+} // namespace
+
+TEST_SUITE("contract golden") {
+    TEST_CASE("every case of the golden table holds") {
+        const std::vector<json> cases = goldenCases();
+        CHECK(cases.size() >= 100);
+        for (const json& row : cases) {
+            CAPTURE(row["name"].get<std::string>());
+            REQUIRE_FALSE(row["source"].get<std::string>().empty());
+            REQUIRE_FALSE(row["expect"].empty());
+            const Answered answered = askText(row.contains("text") ? row["text"].get<std::string>() : row["request"].dump());
+            for (const json& expected : row["expect"]) {
+                checkExpectation(answered.body, expected);
+            }
+        }
+    }
+
+    TEST_CASE("every code of the sources is in the catalogue, and every code of the catalogue in the sources") {
+        std::string sources;
+        for (const auto& entry : std::filesystem::recursive_directory_iterator{root / "core"}) {
+            if (entry.path().extension() == ".cpp" && entry.path().filename() != "catalogue.cpp") {
+                sources += textOf(entry.path());
+            }
+        }
+        std::set<std::string> known;
+        for (const auto& entry : forwright::contract::catalogue()) {
+            known.insert(std::string{entry.code});
+            CHECK_MESSAGE(sources.find('"' + std::string{entry.code} + '"') != std::string::npos, entry.code);
+        }
+        // A fault or a notice is made by its code, right before its sentence.
+        const std::regex remark{R"re((?:[Ff]ault|[Nn]otice|push_back)\b[^;]*?"([a-z]+(?:-[a-z]+)*)",\s*(?:"[A-Z]|std::string|dates::))re"};
+        int found = 0;
+        for (std::sregex_iterator match{sources.begin(), sources.end(), remark}, end; match != end; ++match) {
+            ++found;
+            CHECK_MESSAGE(known.count((*match)[1]) == 1, (*match)[1].str());
+        }
+        CHECK(found >= 20);
+    }
+}
+#endif

@@ -1,0 +1,63 @@
+/** Four invented markets, one of each kind, with drafts of every kind of funding so that each is one click away. */
+import commodity from '../../demonstration/commodity.json';
+import funding from '../../demonstration/funding.json';
+import index from '../../demonstration/index.json';
+import pair from '../../demonstration/currency-pair.json';
+import share from '../../demonstration/share.json';
+import type { DecimalSign } from '../input/decimal';
+import type { CurveDraft, DealDraft, Draft } from '../model/draft';
+import { curveOnto, dealFrom } from '../model/from-request';
+import type { Curve, QuoteRequest } from '../model/request';
+
+const hoursOfUse = { from: '08:40', until: '18:00' } as const;
+
+function withEveryKind(curve: CurveDraft, currency: string, sign: DecimalSign): CurveDraft {
+  const curves = (funding as unknown as Record<string, readonly Curve[]>)[currency] ?? [];
+  const filled = curves.reduce((draft, from) => curveOnto(draft, from, sign), curve);
+  return {
+    ...filled,
+    kind: curve.kind,
+    model: curve.kind === 'random' ? curve.model : 'vasicek',
+    ...(curve.kind === 'flat' ? { flat: curve.flat } : {}),
+    ...(curve.kind === 'pillars' ? { pillars: curve.pillars } : {}),
+  };
+}
+
+function demonstrated(request: QuoteRequest, sign: DecimalSign): DealDraft {
+  const deal = dealFrom(request, sign);
+  const { market } = deal;
+  const { asset } = market;
+  const day = request.market.asOf;
+  const filled = (draft: DealDraft['market']['base'], currency: string): DealDraft['market']['base'] => ({
+    ...draft,
+    curve: withEveryKind(draft.curve, currency, sign),
+  });
+  return {
+    ...deal,
+    market: {
+      ...market,
+      funding: filled(market.funding, asset.currency),
+      base: asset.kind === 'currency-pair' ? filled(market.base, asset.base) : market.base,
+      discount: { ...market.discount, curve: withEveryKind(market.discount.curve, asset.currency, sign) },
+    },
+    madeAt: `${day}T${hoursOfUse.from}`,
+    validUntil: `${day}T${hoursOfUse.until}`,
+    demonstration: true,
+  };
+}
+
+export function demonstrationDraft(sign: DecimalSign): Draft {
+  const requests = [share, index, pair, commodity] as unknown as readonly QuoteRequest[];
+  const deals = Object.fromEntries(
+    requests.map((request) => [
+      (request.market.asset.name ?? '').replaceAll('/', ' '),
+      demonstrated(request, sign),
+    ]),
+  );
+  return {
+    current: Object.keys(deals)[0] ?? '',
+    deals,
+    tenors: { maturities: '1M 2M 3M 6M 9M 1Y 18M 2Y' },
+    agreed: [],
+  };
+}
