@@ -38,7 +38,8 @@ const networkRules = {
     { selector: 'Literal[value=/^(https?|wss?|ftp):/]', message: `${noNetwork} No outward links.` },
     { selector: 'TemplateElement[value.raw=/^(https?|wss?|ftp):/]', message: `${noNetwork} No outward links.` },
     {
-      selector: 'JSXOpeningElement[name.name=/^(iframe|object|embed|form)$/] > JSXAttribute[name.name=/^(src|data|action)$/]',
+      selector:
+        'JSXOpeningElement[name.name=/^(iframe|object|embed|form)$/] > JSXAttribute[name.name=/^(src|data|action)$/]',
       message: noNetwork,
     },
     { selector: 'JSXAttribute[name.name="dangerouslySetInnerHTML"]', message: 'Views are made of elements.' },

@@ -56,7 +56,8 @@ void readFormat(Reader& request) {
     const Value value = request.required("format", "the contract that is spoken, " + quotedText(format));
     const std::optional<std::string_view> name = value.text();
     if (name && *name != format) {
-        value.fault("unknown-format", shownText(*name) + " is not spoken here: give " + quotedText(format) + ".");
+        value.fault("unknown-format",
+                    shownText(*name) + " is not spoken here: give " + quotedText(format) + ".");
     }
 }
 
@@ -89,10 +90,12 @@ Calculation read(const Json& root, Findings& findings, const Task*& task) {
     return task->read(request);
 }
 
-/// Every figure is checked where it is calculated; this is the last line, so that no answer holds a null in place of a number.
+/// Every figure is checked where it is calculated; this is the last line, so that no answer holds a null in
+/// place of a number.
 outcome::Fault notFinite(const std::string& name) {
     return {"", "not-finite",
-            "The figure " + quotedText(name) + " of the result is too large to be a number; with inputs this extreme there is no answer."};
+            "The figure " + quotedText(name) +
+                " of the result is too large to be a number; with inputs this extreme there is no answer."};
 }
 
 } // namespace

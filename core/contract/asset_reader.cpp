@@ -19,21 +19,11 @@ namespace {
 constexpr int longestLag = 30;
 constexpr int usualLag = 2;
 
-std::string readName(const Value& value) {
-    const std::string_view name = value.text().value_or("");
-    const auto characters = static_cast<std::size_t>(
-        std::count_if(name.begin(), name.end(), [](char c) { return (static_cast<unsigned char>(c) & 0xC0U) != 0x80U; }));
-    if (characters > longestName) {
-        value.fault("too-long", "A name may have " + std::to_string(longestName) + " characters; this one has " +
-                                    std::to_string(characters) + ".");
-    }
-    return std::string{name};
-}
-
 std::string readCurrency(const Value& value) {
     const std::optional<std::string_view> code = value.text();
     if (code && !isCurrency(*code)) {
-        value.fault("unknown-currency", shownText(*code) + " is no currency in use: give its ISO 4217 code, as in EUR.");
+        value.fault("unknown-currency",
+                    shownText(*code) + " is no currency in use: give its ISO 4217 code, as in EUR.");
     }
     return std::string{code.value_or("")};
 }
@@ -44,7 +34,8 @@ std::vector<forward::LagFrom> readLagsByDate(const Value& list) {
         Reader entry{row};
         const Value fromValue = entry.required("from", "the dealing date from which the lag holds");
         const std::optional<Date> from = fromValue.date();
-        const std::optional<int> lag = entry.required("lag", "the lag in business days").integer(0, longestLag);
+        const std::optional<int> lag =
+            entry.required("lag", "the lag in business days").integer(0, longestLag);
         if (from && !lags.empty() && *from <= lags.back().from) {
             fromValue.fault("not-rising", "This date has to be after the one before it, " +
                                               dates::toIso(lags.back().from) + ".");
@@ -87,8 +78,8 @@ std::vector<std::string> readCentres(const Value& list) {
             return;
         }
         if (dates::findCentre(*code) == nullptr) {
-            row.fault("unknown-calendar", shownText(*code) + " is no calendar known here: give " + listedText(knownCodes()) +
-                                              ", or your own days in holidays.");
+            row.fault("unknown-calendar", shownText(*code) + " is no calendar known here: give " +
+                                              listedText(knownCodes()) + ", or your own days in holidays.");
             return;
         }
         centres.emplace_back(*code);
@@ -122,7 +113,8 @@ void readCalendars(Reader& object, Asset& asset) {
     const std::vector<Date> holidays = readDates(object.optional("holidays"));
     const std::vector<Date> openDays = readDates(object.optional("openDays"));
     asset.calendar = BusinessCalendar{centres, holidays, openDays};
-    asset.lagCalendar = lagValue.present() ? BusinessCalendar{readCentres(lagValue), holidays, openDays} : asset.calendar;
+    asset.lagCalendar =
+        lagValue.present() ? BusinessCalendar{readCentres(lagValue), holidays, openDays} : asset.calendar;
 }
 
 /// The base currency, which a pair has and nothing else.
@@ -134,11 +126,23 @@ void readBase(Reader& object, Asset& asset) {
     const Value value = object.required("base", "the currency that is bought or sold, by its ISO 4217 code");
     asset.base = readCurrency(value);
     if (!asset.base.empty() && asset.base == asset.currency) {
-        value.fault("same-currency", "The base currency has to be another one than the quote currency, " + asset.currency + ".");
+        value.fault("same-currency", "The base currency has to be another one than the quote currency, " +
+                                         asset.currency + ".");
     }
 }
 
 } // namespace
+
+std::string readName(const Value& value) {
+    const std::string_view name = value.text().value_or("");
+    const auto characters = static_cast<std::size_t>(std::count_if(
+        name.begin(), name.end(), [](char c) { return (static_cast<unsigned char>(c) & 0xC0U) != 0x80U; }));
+    if (characters > longestName) {
+        value.fault("too-long", "A name may have " + std::to_string(longestName) +
+                                    " characters; this one has " + std::to_string(characters) + ".");
+    }
+    return std::string{name};
+}
 
 std::optional<AssetKind> readAsset(const Value& value, Asset& asset) {
     Reader object{value};
@@ -146,7 +150,8 @@ std::optional<AssetKind> readAsset(const Value& value, Asset& asset) {
         object.required("kind", "share, index, currency-pair or commodity")
             .choice({AssetKind::share, AssetKind::index, AssetKind::currencyPair, AssetKind::commodity});
     asset.name = readName(object.optional("name"));
-    asset.currency = readCurrency(object.required("currency", "the currency that prices are quoted in, by its ISO 4217 code"));
+    asset.currency = readCurrency(
+        object.required("currency", "the currency that prices are quoted in, by its ISO 4217 code"));
     asset.settlementLag = readLag(object.optional("settlementLag", std::to_string(usualLag)));
     readCalendars(object, asset);
     asset.tick = object.optional("tick").number(positive);

@@ -4,11 +4,15 @@
 #include "forward/market.hpp"
 
 #include <optional>
+#include <string>
 
 namespace forwright::contract {
 
-/// Reads what is dealt into `asset`, as far as it is without fault. The kind is handed back apart: whether it could be read decides what else the
-/// market may have.
+/// Reads what is dealt into `asset`, as far as it is without fault. The kind is handed back apart: whether it
+/// could be read decides what else the market may have.
 [[nodiscard]] std::optional<forward::AssetKind> readAsset(const Value& value, forward::Asset& asset);
+
+/// A name that people give something; at most `longestName` characters (`too-long`).
+[[nodiscard]] std::string readName(const Value& value);
 
 } // namespace forwright::contract

@@ -13,7 +13,8 @@ struct CatalogueEntry {
     std::string_view meaning;
 };
 
-/// Every code that any answer may carry, in alphabetical order. The tests hold it against the sources and against the list that people read.
+/// Every code that any answer may carry, in alphabetical order. The tests hold it against the sources and
+/// against the list that people read.
 [[nodiscard]] std::span<const CatalogueEntry> catalogue();
 
 } // namespace forwright::contract

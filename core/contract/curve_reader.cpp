@@ -31,7 +31,8 @@ std::optional<double> parameter(Reader& object, std::string_view name, std::stri
     return object.required(name, what).number(anyNumber);
 }
 
-// ---- pillars ---------------------------------------------------------------------------------------------------
+// ---- pillars
+// ---------------------------------------------------------------------------------------------------
 
 enum class CurveKind { pillars, random };
 std::string_view nameOf(CurveKind kind) {
@@ -54,8 +55,9 @@ std::optional<Date> pillarDate(const Value& value, const CurveContext& context) 
     }
     const Date date = dates::addTenor(context.asOf, *std::get_if<Tenor>(&*at));
     if (date > dates::latest) {
-        value.fault("too-far", "This tenor ends on " + dates::toIso(date) + ", after the last date there is, " +
-                                   dates::toIso(dates::latest) + "; take a shorter one.");
+        value.fault("too-far", "This tenor ends on " + dates::toIso(date) +
+                                   ", after the last date there is, " + dates::toIso(dates::latest) +
+                                   "; take a shorter one.");
         return std::nullopt;
     }
     return date;
@@ -79,7 +81,8 @@ std::vector<discounting::Pillar> readPillars(const Value& list, const CurveConte
 void passOverConvention(Reader& object) {
     for (const std::string_view name : {"compounding", "dayCount", "frequency"}) {
         if (const Value unused = object.optional(name); unused.present()) {
-            object.findings().notice(unused.place(), "not-used", "Discount factors have no convention; it is not used.");
+            object.findings().notice(unused.place(), "not-used",
+                                     "Discount factors have no convention; it is not used.");
         }
     }
 }
@@ -101,7 +104,8 @@ CurvePtr readPillarCurve(Reader& object, const CurveContext& context) {
     return whole ? made(object, discounting::pillars(context.asOf, points)) : nullptr;
 }
 
-// ---- random models ---------------------------------------------------------------------------------------------
+// ---- random models
+// ---------------------------------------------------------------------------------------------
 
 CurvePtr readVasicek(Reader& object, const CurveContext& context) {
     const auto r0 = parameter(object, "r0", "the short rate today");
@@ -122,7 +126,8 @@ CurvePtr readCoxIngersollRoss(Reader& object, const CurveContext& context) {
     if (!r0 || !meanReversion || !longRun || !volatility) {
         return nullptr;
     }
-    return made(object, discounting::coxIngersollRoss(context.asOf, {*r0, *meanReversion, *longRun, *volatility}));
+    return made(object,
+                discounting::coxIngersollRoss(context.asOf, {*r0, *meanReversion, *longRun, *volatility}));
 }
 
 CurvePtr readHoLee(Reader& object, const CurveContext& context) {
@@ -200,7 +205,7 @@ void readPath(const Value& row, std::size_t columns, std::vector<double>& factor
     }
     if (row.json().size() != columns) {
         row.fault("row-length", "A path has one discount factor for each of the " + std::to_string(columns) +
-                                      " dates; this one has " + std::to_string(row.json().size()) + ".");
+                                    " dates; this one has " + std::to_string(row.json().size()) + ".");
         return;
     }
     row.rows([&factors](const Value& factor, std::size_t /*index*/) {
@@ -239,12 +244,8 @@ struct Model {
     CurvePtr (*read)(Reader&, const CurveContext&);
 };
 constexpr Model models[] = {
-    {"vasicek", readVasicek},
-    {"cox-ingersoll-ross", readCoxIngersollRoss},
-    {"ho-lee", readHoLee},
-    {"hull-white", readHullWhite},
-    {"policy-meetings", readPolicyMeetings},
-    {"scenarios", readScenarios},
+    {"vasicek", readVasicek},      {"cox-ingersoll-ross", readCoxIngersollRoss}, {"ho-lee", readHoLee},
+    {"hull-white", readHullWhite}, {"policy-meetings", readPolicyMeetings},      {"scenarios", readScenarios},
     {"samples", readSamples},
 };
 
@@ -269,8 +270,10 @@ CurvePtr readRandom(Reader& object, const CurveContext& context) {
 
 CurvePtr readByKind(const Value& value, const CurveContext& context) {
     Reader object{value};
-    const auto kind = object.required("kind", "what the curve is: pillars or random (or rate in its place, where it is flat)")
-                          .choice({CurveKind::pillars, CurveKind::random});
+    const auto kind =
+        object
+            .required("kind", "what the curve is: pillars or random (or rate in its place, where it is flat)")
+            .choice({CurveKind::pillars, CurveKind::random});
     if (!kind) {
         object.passOver();
         return nullptr;

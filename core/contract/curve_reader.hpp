@@ -8,8 +8,9 @@ namespace forwright::contract {
 
 /// What a curve's members are read against.
 struct CurveContext {
-    dates::Date asOf;                  ///< where the request has none, a day before all others, so that what is read is not blamed for it
-    dates::BusinessCalendar calendar;  ///< of the asset, for BUS/252
+    dates::Date asOf; ///< where the request has none, a day before all others, so that what is read is not
+                      ///< blamed for it
+    dates::BusinessCalendar calendar; ///< of the asset, for BUS/252
 };
 
 /// CURVE: a number or a RATE (flat), pillars, or a random model. Null where it is not there or at fault.

@@ -16,7 +16,8 @@ struct Assumption {
     std::string json;
 };
 
-/// What reading and answering a request brings to light beside its result. Faults beyond the first `mostFaults` are counted, not kept.
+/// What reading and answering a request brings to light beside its result. Faults beyond the first
+/// `mostFaults` are counted, not kept.
 class Findings {
   public:
     static constexpr std::size_t mostFaults = 1000;
@@ -26,7 +27,9 @@ class Findings {
     void faults(const Place& at, outcome::Faults more);
     void notice(const Place& at, std::string_view code, std::string message);
     void notices(const Place& at, outcome::Notices more);
-    void assume(const Place& at, std::string json) { assumptions_.push_back({at.pointer(), std::move(json)}); }
+    void assume(const Place& at, std::string json) {
+        assumptions_.push_back({at.pointer(), std::move(json)});
+    }
 
     /// No fault yet.
     [[nodiscard]] bool ok() const { return faults_.empty(); }

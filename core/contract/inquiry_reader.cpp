@@ -14,8 +14,8 @@ namespace {
 
 Margin readMargin(const Value& value) {
     Reader object{value};
-    const MarginUnit unit =
-        object.choice("unit", {MarginUnit::price, MarginUnit::bpOfSpot, MarginUnit::bpPerYear}, MarginUnit::price);
+    const MarginUnit unit = object.choice(
+        "unit", {MarginUnit::price, MarginUnit::bpOfSpot, MarginUnit::bpPerYear}, MarginUnit::price);
     return {unit, object.number("amount", notNegative, 0.0)};
 }
 
@@ -33,7 +33,8 @@ std::optional<Roll> readRoll(Reader& object, bool forDate) {
     const Value value = object.optional("roll");
     const auto roll = value.choice({Roll::following, Roll::modifiedFollowing, Roll::preceding});
     if (roll && !forDate) {
-        object.findings().notice(value.place(), "not-used", "A tenor has a roll of its own; this one is not used.");
+        object.findings().notice(value.place(), "not-used",
+                                 "A tenor has a roll of its own; this one is not used.");
     }
     return roll;
 }

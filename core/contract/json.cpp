@@ -2,8 +2,9 @@
 
 #include "contract/place.hpp"
 
-#include <algorithm>
 #include <nlohmann/json.hpp>
+
+#include <algorithm>
 #include <utility>
 
 namespace forwright::contract {
@@ -35,8 +36,8 @@ std::string shown(std::string_view token) {
 Fault notJson(std::string_view text, std::size_t position, std::string_view lastToken) {
     const std::string near = shown(lastToken);
     return {"", "not-json",
-            "The request is no JSON text (RFC 8259): it cannot be read from " + lineAndColumn(text, position) + " on" +
-                (near.empty() ? "" : ", near " + near) + "."};
+            "The request is no JSON text (RFC 8259): it cannot be read from " +
+                lineAndColumn(text, position) + " on" + (near.empty() ? "" : ", near " + near) + "."};
 }
 
 Fault tooLarge(const std::string& what) {
@@ -52,9 +53,15 @@ class DocumentBuilder {
 
     bool null() { return add({}); }
     bool boolean(bool value) { return addNumber(Json::Kind::boolean, value ? 1.0 : 0.0); }
-    bool number_integer(std::int64_t value) { return addNumber(Json::Kind::number, static_cast<double>(value)); }
-    bool number_unsigned(std::uint64_t value) { return addNumber(Json::Kind::number, static_cast<double>(value)); }
-    bool number_float(double value, const std::string& /*token*/) { return addNumber(Json::Kind::number, value); }
+    bool number_integer(std::int64_t value) {
+        return addNumber(Json::Kind::number, static_cast<double>(value));
+    }
+    bool number_unsigned(std::uint64_t value) {
+        return addNumber(Json::Kind::number, static_cast<double>(value));
+    }
+    bool number_float(double value, const std::string& /*token*/) {
+        return addNumber(Json::Kind::number, value);
+    }
     bool string(const std::string& value) { return addText(value); }
     bool binary(const std::vector<std::uint8_t>& /*value*/) { return false; } // JSON text has none
     bool start_object(std::size_t /*size*/) { return open(Json::Kind::object); }
@@ -69,7 +76,8 @@ class DocumentBuilder {
         open_.back().key = static_cast<std::uint32_t>(cells().size());
         return addCell(Json::Kind::text, name);
     }
-    bool parse_error(std::size_t position, const std::string& lastToken, const nlohmann::detail::exception& /*why*/) {
+    bool parse_error(std::size_t position, const std::string& lastToken,
+                     const nlohmann::detail::exception& /*why*/) {
         fault_ = notJson(source_, position, lastToken);
         return false;
     }
@@ -194,8 +202,8 @@ class DocumentBuilder {
         std::string at = pointer();
         open_.push_back(object);
         appendToPointer(at, name);
-        parsed_.duplicates.push_back(
-            {std::move(at), "duplicate-member", "This member stands more than once in its object; give it once."});
+        parsed_.duplicates.push_back({std::move(at), "duplicate-member",
+                                      "This member stands more than once in its object; give it once."});
     }
 
     std::string_view source_;
@@ -264,7 +272,8 @@ std::size_t Json::size() const {
 }
 
 Json::Items Json::items() const {
-    return {Items::Iterator{*document_, index_ + 1}, Items::Iterator{*document_, document_->cells_[index_].next}};
+    return {Items::Iterator{*document_, index_ + 1},
+            Items::Iterator{*document_, document_->cells_[index_].next}};
 }
 
 std::optional<Json> Json::find(std::string_view name) const {

@@ -14,8 +14,8 @@ namespace forwright::contract {
 
 /// Limits of a request, beyond those of its members.
 inline constexpr std::size_t largestRequest = std::size_t{64} * 1024 * 1024; ///< bytes
-inline constexpr std::size_t deepestNesting = 32;               ///< objects and lists within each other
-inline constexpr std::size_t mostValues = 5'000'000;            ///< values and member names in all
+inline constexpr std::size_t deepestNesting = 32;    ///< objects and lists within each other
+inline constexpr std::size_t mostValues = 5'000'000; ///< values and member names in all
 
 class Document;
 
@@ -52,8 +52,8 @@ class Json {
     std::uint32_t index_;
 };
 
-/// A parsed text. Its values lie one after another in one block, each with the place where the next begins, so that a list of a million
-/// numbers is a million small cells and nothing else.
+/// A parsed text. Its values lie one after another in one block, each with the place where the next begins,
+/// so that a list of a million numbers is a million small cells and nothing else.
 class Document {
   public:
     [[nodiscard]] Json root() const { return {*this, 0}; }
@@ -107,8 +107,9 @@ struct Parsed {
     outcome::Faults duplicates;
 };
 
-/// Reads one JSON text (RFC 8259). Refused at "": `too-large`, `not-json` (which says where and near what; also bytes that are not UTF-8, half of a
-/// surrogate pair, a number beyond a double's range, anything after the value); with their pointer: `too-deep`. Never throws.
+/// Reads one JSON text (RFC 8259). Refused at "": `too-large`, `not-json` (which says where and near what;
+/// also bytes that are not UTF-8, half of a surrogate pair, a number beyond a double's range, anything after
+/// the value); with their pointer: `too-deep`. Never throws.
 [[nodiscard]] outcome::Outcome<Parsed> parse(std::string_view text);
 
 } // namespace forwright::contract

@@ -24,7 +24,8 @@ constexpr Date beforeAllDates = dates::earliest - std::chrono::days{1};
 std::optional<TwoWay<double>> readTwoWay(const Value& value, const Range& range, std::string_view what) {
     if (!value.isObject()) {
         if (value.present() && !value.isNumber()) {
-            value.wrongType(std::string{what} + " (a number for both sides, or an object with bid and offer)");
+            value.wrongType(std::string{what} +
+                            " (a number for both sides, or an object with bid and offer)");
             return std::nullopt;
         }
         const std::optional<double> both = value.number(range);
@@ -32,7 +33,8 @@ std::optional<TwoWay<double>> readTwoWay(const Value& value, const Range& range,
     }
     Reader object{value};
     const std::optional<double> bid = object.required("bid", std::string{what} + " on the bid").number(range);
-    const std::optional<double> offer = object.required("offer", std::string{what} + " on the offer").number(range);
+    const std::optional<double> offer =
+        object.required("offer", std::string{what} + " on the offer").number(range);
     return bid && offer ? std::optional{TwoWay<double>{*bid, *offer}} : std::nullopt;
 }
 
@@ -50,19 +52,22 @@ std::optional<TwoWay<double>> readSpot(const Value& value) {
 /// Spreads cost the dealer something; a gain is told.
 void reviewSpreads(const Reader& funding, double lendSpread, double borrowSpread) {
     if (lendSpread > 0.0) {
-        funding.findings().notice(funding.at("lendSpread"), "unusual-sign",
-                                  "The dealer would lend above the curve; a lend spread is normally 0 or below.");
+        funding.findings().notice(
+            funding.at("lendSpread"), "unusual-sign",
+            "The dealer would lend above the curve; a lend spread is normally 0 or below.");
     }
     if (borrowSpread < 0.0) {
-        funding.findings().notice(funding.at("borrowSpread"), "unusual-sign",
-                                  "The dealer would borrow below the curve; a borrow spread is normally 0 or above.");
+        funding.findings().notice(
+            funding.at("borrowSpread"), "unusual-sign",
+            "The dealer would borrow below the curve; a borrow spread is normally 0 or above.");
     }
 }
 
 std::optional<forward::Funding> readFunding(const Value& value, const CurveContext& context) {
     Reader object{value};
     forward::Funding funding;
-    funding.curve = readCurve(object.required("curve", "the curve: a rate, pillars or a random model"), context);
+    funding.curve =
+        readCurve(object.required("curve", "the curve: a rate, pillars or a random model"), context);
     funding.lendSpread = object.number("lendSpread", rateRange, 0.0);
     funding.borrowSpread = object.number("borrowSpread", rateRange, 0.0);
     reviewSpreads(object, funding.lendSpread, funding.borrowSpread);
@@ -70,7 +75,8 @@ std::optional<forward::Funding> readFunding(const Value& value, const CurveConte
 }
 
 /// `amount` (or `fraction`), with `low` and `high` around it.
-std::optional<income::Estimate> readEstimate(Reader& row, std::string_view name, std::string_view what, const Range& range) {
+std::optional<income::Estimate> readEstimate(Reader& row, std::string_view name, std::string_view what,
+                                             const Range& range) {
     const std::optional<double> amount = row.required(name, what).number(range);
     const std::string fallback = numberText(amount.value_or(0.0));
     const Value lowValue = row.optional("low", fallback);
@@ -82,10 +88,12 @@ std::optional<income::Estimate> readEstimate(Reader& row, std::string_view name,
     }
     const std::string figure = std::string{name} + ", " + numberText(*amount);
     if (*low > *amount) {
-        lowValue.fault("out-of-order", "It has to be at most the " + figure + "; it is " + numberText(*low) + ".");
+        lowValue.fault("out-of-order",
+                       "It has to be at most the " + figure + "; it is " + numberText(*low) + ".");
     }
     if (*high < *amount) {
-        highValue.fault("out-of-order", "It has to be at least the " + figure + "; it is " + numberText(*high) + ".");
+        highValue.fault("out-of-order",
+                        "It has to be at least the " + figure + "; it is " + numberText(*high) + ".");
     }
     return income::Estimate{*amount, *low, *high};
 }
@@ -97,8 +105,8 @@ std::optional<income::CashDistribution> readCash(const Value& value) {
     const std::optional<Date> pay = payValue.present() ? payValue.date() : ex;
     const auto amount = readEstimate(row, "amount", "the amount a unit", anyNumber);
     if (ex && pay && *pay < *ex) {
-        payValue.fault("pay-before-ex", "The day of payment has to be the ex date, " + dates::toIso(*ex) + ", or later; it is " +
-                                            dates::toIso(*pay) + ".");
+        payValue.fault("pay-before-ex", "The day of payment has to be the ex date, " + dates::toIso(*ex) +
+                                            ", or later; it is " + dates::toIso(*pay) + ".");
     }
     if (!ex || !pay || !amount) {
         return std::nullopt;
@@ -132,7 +140,8 @@ income::Income readIncome(const Value& value, const dates::BusinessCalendar& cal
     if (const auto yield = readRate(object.optional("yield", "0"), calendar)) {
         income.yield = *yield;
     }
-    if (const auto share = readTwoWay(object.optional("passThrough", "1"), shareRange, "a share from 0 to 1")) {
+    if (const auto share =
+            readTwoWay(object.optional("passThrough", "1"), shareRange, "a share from 0 to 1")) {
         income.passThrough = *share;
     }
     return income;
@@ -145,9 +154,13 @@ forward::HedgeCost readHedgeCost(const Value& value) {
 
 /// What a currency pair has instead of income and fee, and nothing else has.
 void readPair(Reader& market, const CurveContext& context, Market& result) {
-    market.forbid("income", "A currency pair has no income; what the base currency earns is its curve, in base.");
-    market.forbid("lendingFee", "A currency pair has no lending fee; what borrowing the base currency costs is in base.");
-    result.base = readFunding(market.required("base", "the curve of the base currency, {curve, lendSpread, borrowSpread}"), context);
+    market.forbid("income",
+                  "A currency pair has no income; what the base currency earns is its curve, in base.");
+    market.forbid("lendingFee",
+                  "A currency pair has no lending fee; what borrowing the base currency costs is in base.");
+    result.base = readFunding(
+        market.required("base", "the curve of the base currency, {curve, lendSpread, borrowSpread}"),
+        context);
 }
 
 void readHolding(Reader& market, const CurveContext& context, Market& result) {
@@ -177,7 +190,8 @@ std::optional<Market> readMarket(const Value& value) {
     const CurveContext context{market.asOf, market.asset.calendar};
 
     const auto spot = readSpot(object.required("spot", "the spot price, a number or {bid, offer}"));
-    const auto funding = readFunding(object.required("funding", "what cash costs, {curve, lendSpread, borrowSpread}"), context);
+    const auto funding = readFunding(
+        object.required("funding", "what cash costs, {curve, lendSpread, borrowSpread}"), context);
     const Value discount = object.optional("discount", quotedText(market.at + "/funding/curve"));
     const CurvePtr discountCurve = readCurve(discount, context);
     market.hedgeCost = readHedgeCost(object.optional("hedgeCost"));
@@ -198,14 +212,19 @@ std::optional<Market> readMarket(const Value& value) {
 }
 
 void reviewCalendars(const Market& market, Date last, Findings& findings) {
-    const auto yearOf = [](Date date) { return static_cast<int>(std::chrono::year_month_day{date}.year()); };
+    const auto yearOf = [](Date date) {
+        return static_cast<int>(std::chrono::year_month_day{date}.year());
+    };
     std::size_t index = 0;
     for (const std::string& code : market.asset.calendar.centres()) {
         const dates::Centre* centre = dates::findCentre(code);
-        if (centre != nullptr && (yearOf(market.asOf) < centre->firstYear || yearOf(last) > centre->lastYear)) {
-            findings.notices(Place{}, {{market.at + "/asset/calendars/" + std::to_string(index), "calendar-years",
-                              "The holidays of " + code + " are known from " + std::to_string(centre->firstYear) + " to " +
-                                  std::to_string(centre->lastYear) + "; outside of these years they follow the same rules and may change."}});
+        if (centre != nullptr &&
+            (yearOf(market.asOf) < centre->firstYear || yearOf(last) > centre->lastYear)) {
+            findings.notices(
+                Place{}, {{market.at + "/asset/calendars/" + std::to_string(index), "calendar-years",
+                           "The holidays of " + code + " are known from " +
+                               std::to_string(centre->firstYear) + " to " + std::to_string(centre->lastYear) +
+                               "; outside of these years they follow the same rules and may change."}});
         }
         ++index;
     }

@@ -6,8 +6,8 @@
 
 namespace forwright::contract {
 
-/// Where something stands in a request: a member of, or a row in, the place around it. Costs nothing until its pointer is asked for, so the
-/// places around it (and the names) have to live as long as it does.
+/// Where something stands in a request: a member of, or a row in, the place around it. Costs nothing until
+/// its pointer is asked for, so the places around it (and the names) have to live as long as it does.
 class Place {
   public:
     /// The whole request.

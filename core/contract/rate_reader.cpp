@@ -26,11 +26,13 @@ int readFrequency(Reader& object, DayCount dayCount) {
     constexpr int monthly = 12;
     if (dayCount != DayCount::actActIcma) {
         if (const Value unused = object.optional("frequency"); unused.present()) {
-            object.findings().notice(unused.place(), "not-used", "Only ACT/ACT.ICMA counts by a frequency; it is not used.");
+            object.findings().notice(unused.place(), "not-used",
+                                     "Only ACT/ACT.ICMA counts by a frequency; it is not used.");
         }
         return once;
     }
-    const Value value = object.required("frequency", "the coupons a year that ACT/ACT.ICMA counts by: 1, 2, 3, 4, 6 or 12");
+    const Value value =
+        object.required("frequency", "the coupons a year that ACT/ACT.ICMA counts by: 1, 2, 3, 4, 6 or 12");
     const int frequency = value.integer(once, monthly).value_or(once);
     if (!dates::isCouponFrequency(frequency)) {
         value.fault("not-one-of", "ACT/ACT.ICMA counts by 1, 2, 3, 4, 6 or 12 coupons a year; it is " +
@@ -89,13 +91,15 @@ std::optional<TwoWay<Rate>> readTwoWayRate(const Value& value, const BusinessCal
         return std::nullopt;
     }
     if (!discounting::sameConvention(*bid, *offer)) {
-        value.fault("different-conventions",
-                    "Bid and offer have to be in one convention, so that their mean means something; the bid is " +
-                        discounting::conventionOf(*bid) + ", the offer " + discounting::conventionOf(*offer) + ".");
+        value.fault(
+            "different-conventions",
+            "Bid and offer have to be in one convention, so that their mean means something; the bid is " +
+                discounting::conventionOf(*bid) + ", the offer " + discounting::conventionOf(*offer) + ".");
         return std::nullopt;
     }
     if (bid->value > offer->value) {
-        object.findings().notice(object.at("bid"), "bid-above-offer", "The bid is above the offer, which is unusual.");
+        object.findings().notice(object.at("bid"), "bid-above-offer",
+                                 "The bid is above the offer, which is unusual.");
     }
     return TwoWay<Rate>{*bid, *offer};
 }

@@ -9,12 +9,14 @@
 
 namespace forwright::contract {
 
-/// RATE: a number, or an object with its convention. `calendar` is what BUS/252 counts on. Nothing where it is not there or at fault.
-[[nodiscard]] std::optional<discounting::Rate> readRate(const Value& value, const dates::BusinessCalendar& calendar);
+/// RATE: a number, or an object with its convention. `calendar` is what BUS/252 counts on. Nothing where it
+/// is not there or at fault.
+[[nodiscard]] std::optional<discounting::Rate> readRate(const Value& value,
+                                                        const dates::BusinessCalendar& calendar);
 
 /// One RATE for both sides, or `bid` and `offer` in one convention (`different-conventions`).
-[[nodiscard]] std::optional<income::TwoWay<discounting::Rate>> readTwoWayRate(const Value& value,
-                                                                              const dates::BusinessCalendar& calendar);
+[[nodiscard]] std::optional<income::TwoWay<discounting::Rate>>
+readTwoWayRate(const Value& value, const dates::BusinessCalendar& calendar);
 
 /// The members `compounding`, `dayCount` and `frequency` of an object that has more; its value is left 0.
 [[nodiscard]] discounting::Rate readConvention(Reader& object, const dates::BusinessCalendar& calendar);

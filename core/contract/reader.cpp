@@ -42,12 +42,12 @@ bool looksLikeDate(std::string_view text) {
 }
 
 std::string noDate(std::string_view text) {
-    return shownText(text) + " is no date: give a day that exists as YYYY-MM-DD, from " + dates::toIso(dates::earliest) +
-           " to " + dates::toIso(dates::latest) + ".";
+    return shownText(text) + " is no date: give a day that exists as YYYY-MM-DD, from " +
+           dates::toIso(dates::earliest) + " to " + dates::toIso(dates::latest) + ".";
 }
 
-/// Letters to change, add, drop or swap with the next to come from one name to the other (optimal string alignment, by
-/// rows of the table of all beginnings).
+/// Letters to change, add, drop or swap with the next to come from one name to the other (optimal string
+/// alignment, by rows of the table of all beginnings).
 std::size_t distance(std::string_view one, std::string_view other) {
     const std::size_t width = other.size() + 1;
     std::vector<std::size_t> table((one.size() + 1) * width);
@@ -120,7 +120,8 @@ std::optional<double> Value::number(const Range& range) const {
     }
     const double value = json_->number();
     if (!inside(value, range)) {
-        fault(codeOf(range), "This number has to be " + inWords(range) + "; it is " + numberText(value) + ".");
+        fault(codeOf(range),
+              "This number has to be " + inWords(range) + "; it is " + numberText(value) + ".");
         return std::nullopt;
     }
     return value;
@@ -130,8 +131,8 @@ std::optional<int> Value::integer(int low, int high) const {
     const std::optional<double> value =
         number({static_cast<double>(low), static_cast<double>(high), false, false});
     if (value && std::floor(*value) != *value) {
-        fault("not-whole", "This has to be a whole number from " + std::to_string(low) + " to " + std::to_string(high) +
-                               "; it is " + numberText(*value) + ".");
+        fault("not-whole", "This has to be a whole number from " + std::to_string(low) + " to " +
+                               std::to_string(high) + "; it is " + numberText(*value) + ".");
         return std::nullopt;
     }
     return value ? std::optional{static_cast<int>(*value)} : std::nullopt;
@@ -174,13 +175,16 @@ std::optional<std::variant<dates::Date, dates::Tenor>> Value::dateOrTenor() cons
     if (looksLikeDate(*written)) {
         fault("not-a-date", noDate(*written));
     } else {
-        fault("not-a-date-or-tenor", shownText(*written) + " is neither a date (2027-06-18) nor a tenor (2D, 1W, 3M, 5Y, up to 100 years).");
+        fault("not-a-date-or-tenor",
+              shownText(*written) +
+                  " is neither a date (2027-06-18) nor a tenor (2D, 1W, 3M, 5Y, up to 100 years).");
     }
     return std::nullopt;
 }
 
 void Value::wrongType(std::string_view expected) const {
-    fault("wrong-type", "Here " + std::string{expected} + " is wanted; it is " + std::string{json_->kindInWords()} + ".");
+    fault("wrong-type",
+          "Here " + std::string{expected} + " is wanted; it is " + std::string{json_->kindInWords()} + ".");
 }
 
 void Value::notOneOf(std::string_view name, const std::vector<std::string_view>& allowed) const {
@@ -249,9 +253,10 @@ void Reader::reportUnknown() const {
     for (const Json item : object_->items()) {
         if (isName && std::find(known_.begin(), known_.end(), item.text()) == known_.end()) {
             const std::string_view meant = nearest(item.text(), known_);
-            findings_->fault(at(item.text()), "unknown-member",
-                             "There is no member " + shownText(item.text()) + " here" +
-                                 (meant.empty() ? ": take it out." : "; " + shownText(meant) + " may be meant."));
+            findings_->fault(
+                at(item.text()), "unknown-member",
+                "There is no member " + shownText(item.text()) + " here" +
+                    (meant.empty() ? ": take it out." : "; " + shownText(meant) + " may be meant."));
         }
         isName = !isName;
     }

@@ -22,7 +22,7 @@ struct Range {
     static constexpr double unbounded = std::numeric_limits<double>::infinity();
     double low = -unbounded;
     double high = unbounded;
-    bool lowIsOut = false;  ///< the bound itself is not allowed
+    bool lowIsOut = false; ///< the bound itself is not allowed
     bool highIsOut = false;
 };
 inline constexpr Range anyNumber{};
@@ -33,13 +33,14 @@ inline constexpr Range fractionRange{-1.0, 1.0, true, true};
 inline constexpr Range shareRange{0.0, 1.0, false, false};
 inline constexpr Range costRange{0.0, 1.0, false, true};
 
-inline constexpr std::size_t mostRows = 10'000;          ///< of any list
-inline constexpr std::size_t longestName = 200;          ///< characters
+inline constexpr std::size_t mostRows = 10'000; ///< of any list
+inline constexpr std::size_t longestName = 200; ///< characters
 
 class Reader;
 
-/// A value of the request at its place, or the want of one. Each question is answered by what was asked for, or by nothing, with the fault
-/// found; where there is no value (its fault is told already, or it may be left out) the answer is nothing.
+/// A value of the request at its place, or the want of one. Each question is answered by what was asked for,
+/// or by nothing, with the fault found; where there is no value (its fault is told already, or it may be left
+/// out) the answer is nothing.
 class Value {
   public:
     Value(std::optional<Json> json, const Place& place, Findings& findings)
@@ -50,7 +51,9 @@ class Value {
     [[nodiscard]] bool isList() const { return json_ && json_->isList(); }
     [[nodiscard]] bool isNumber() const { return json_ && json_->isNumber(); }
     /// Whether it is an object with that member.
-    [[nodiscard]] bool has(std::string_view name) const { return isObject() && json_->find(name).has_value(); }
+    [[nodiscard]] bool has(std::string_view name) const {
+        return isObject() && json_->find(name).has_value();
+    }
     [[nodiscard]] const Json& json() const { return *json_; }
     [[nodiscard]] const Place& place() const { return place_; }
     [[nodiscard]] Findings& findings() const { return *findings_; }
@@ -62,7 +65,8 @@ class Value {
     [[nodiscard]] std::optional<std::variant<dates::Date, dates::Tenor>> dateOrTenor() const;
 
     /// One of `allowed`, by the names that `nameOf` gives them.
-    template <class Choice> [[nodiscard]] std::optional<Choice> choice(std::initializer_list<Choice> allowed) const {
+    template <class Choice>
+    [[nodiscard]] std::optional<Choice> choice(std::initializer_list<Choice> allowed) const {
         const std::optional<std::string_view> name = text();
         if (!name) {
             return std::nullopt;
@@ -92,7 +96,9 @@ class Value {
         return true;
     }
 
-    void fault(std::string_view code, std::string message) const { findings_->fault(place_, code, std::move(message)); }
+    void fault(std::string_view code, std::string message) const {
+        findings_->fault(place_, code, std::move(message));
+    }
     /// The fault `wrong-type`: something else was `expected` ("a number").
     void wrongType(std::string_view expected) const;
     /// The fault `not-one-of`.
@@ -106,8 +112,9 @@ class Value {
     Findings* findings_;
 };
 
-/// Reads an object member by member. What nobody has asked for when the reader goes is told as `unknown-member`. Where the value is not there or is no
-/// object every member is wanting without a further fault.
+/// Reads an object member by member. What nobody has asked for when the reader goes is told as
+/// `unknown-member`. Where the value is not there or is no object every member is wanting without a further
+/// fault.
 class Reader {
   public:
     /// A value that is there and no object is the fault `wrong-type`.
@@ -133,7 +140,8 @@ class Reader {
         return optional(name, numberText(fallback)).number(range).value_or(fallback);
     }
     template <class Choice>
-    [[nodiscard]] Choice choice(std::string_view name, std::initializer_list<Choice> allowed, Choice fallback) {
+    [[nodiscard]] Choice choice(std::string_view name, std::initializer_list<Choice> allowed,
+                                Choice fallback) {
         return optional(name, quotedText(nameOf(fallback))).choice(allowed).value_or(fallback);
     }
 

@@ -17,7 +17,8 @@ template <class T> void writeTwoWay(Writer& writer, std::string_view name, const
 }
 
 /// A member that is a list, each row written by `write`.
-template <class Rows, class Write> void writeList(Writer& writer, std::string_view name, const Rows& rows, Write write) {
+template <class Rows, class Write>
+void writeList(Writer& writer, std::string_view name, const Rows& rows, Write write) {
     writer.key(name).beginList();
     for (const auto& row : rows) {
         write(row);

@@ -1,9 +1,10 @@
 #include "contract/writer.hpp"
 
+#include <nlohmann/json.hpp>
+
 #include <array>
 #include <charconv>
 #include <cmath>
-#include <nlohmann/json.hpp>
 
 namespace forwright::contract {
 
@@ -11,8 +12,9 @@ namespace {
 
 using NumberBuffer = std::array<char, 64>;
 
-/// The text of a finite number, in `buffer`. The library's own algorithm (Grisu2) is called as its serializer calls it, without the two
-/// buffers that its public `dump` allocates for every single number; the standard library of the module has no `to_chars` for doubles.
+/// The text of a finite number, in `buffer`. The library's own algorithm (Grisu2) is called as its serializer
+/// calls it, without the two buffers that its public `dump` allocates for every single number; the standard
+/// library of the module has no `to_chars` for doubles.
 std::string_view write(double value, NumberBuffer& buffer) {
     if (value == 0.0) {
         return "0";

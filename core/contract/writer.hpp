@@ -9,12 +9,14 @@
 
 namespace forwright::contract {
 
-/// A number as JSON, read back to the same bits: few digits where few do, the same text in every build. Zero has no sign.
+/// A number as JSON, read back to the same bits: few digits where few do, the same text in every build. Zero
+/// has no sign.
 [[nodiscard]] std::string numberText(double value);
 /// Text as JSON, in quotes.
 [[nodiscard]] std::string quotedText(std::string_view text);
 
-/// Writes one JSON text from left to right; commas come by themselves. Names of members are the program's own and are not escaped.
+/// Writes one JSON text from left to right; commas come by themselves. Names of members are the program's own
+/// and are not escaped.
 class Writer {
   public:
     void beginObject();
@@ -53,7 +55,8 @@ class Writer {
         }
     }
 
-    /// The first member that was to hold a number that is not finite, in whose place stands null. Nothing is amiss where it is empty.
+    /// The first member that was to hold a number that is not finite, in whose place stands null. Nothing is
+    /// amiss where it is empty.
     [[nodiscard]] const std::string& notFinite() const { return notFinite_; }
     /// What was written.
     [[nodiscard]] std::string take() { return std::move(out_); }

@@ -1,11 +1,10 @@
 #include "discounting/cox_ingersoll_ross.hpp"
 
+#include "dates/date.hpp"
 #include "discounting/checks.hpp"
 #include "discounting/curves.hpp"
 #include "discounting/mean_reversion.hpp"
 #include "discounting/path_makers.hpp"
-
-#include "dates/date.hpp"
 
 namespace forwright::discounting {
 
@@ -74,14 +73,18 @@ class CoxIngersollRossCurve final : public Curve, public RandomDiscount {
 
     [[nodiscard]] double quantileError() const override { return 1e-9; }
 
-    [[nodiscard]] outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates, std::size_t target) const override {
+    [[nodiscard]] outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates,
+                                                           std::size_t target) const override {
         return detail::coxIngersollRossPaths(model_, detail::yearsTo(*this, dates), target);
     }
-    [[nodiscard]] double pathBias() const override { return detail::coxIngersollRossPathBias; }
+    [[nodiscard]] double pathBias() const override { return detail::coxIngersollRossPathBias(model_); }
 
   private:
-    /// Whether κ and σ are so small that they move nothing that a double could show, while their squares would underflow.
-    [[nodiscard]] bool rateIsConstant() const { return model_.meanReversion < 1e-140 && model_.volatility < 1e-140; }
+    /// Whether κ and σ are so small that they move nothing that a double could show, while their squares
+    /// would underflow.
+    [[nodiscard]] bool rateIsConstant() const {
+        return model_.meanReversion < 1e-140 && model_.volatility < 1e-140;
+    }
 
     CoxIngersollRoss model_;
 };

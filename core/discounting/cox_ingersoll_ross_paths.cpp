@@ -31,7 +31,8 @@ struct Moments {
         const double square = model.volatility * model.volatility;
         const double cube = square * years * years * years;
         rate = {model.longRun * model.meanReversion * carried, kept};
-        rateVariance = {square * model.longRun * model.meanReversion * carried * carried / 2.0, square * kept * carried};
+        rateVariance = {square * model.longRun * model.meanReversion * carried * carried / 2.0,
+                        square * kept * carried};
         integral = {model.longRun * x * years * decayGap(x), carried};
         integralVariance = {cube * model.longRun * decayLongRunVariance(x), cube * decayStartVariance(x)};
         covariance = {cube * model.longRun * model.meanReversion * decayStartVariance(x) / 2.0,
@@ -39,17 +40,17 @@ struct Moments {
     }
 };
 
-/// A number that is not negative with this mean and variance (Andersen, J. Computational Finance 11 (2008), the
-/// quadratic-exponential scheme): a displaced square of a normal number where the variance is small, else 0 or an
-/// exponential number.
+/// A number that is not negative with this mean and variance (Andersen, J. Computational Finance 11 (2008),
+/// the quadratic-exponential scheme): a displaced square of a normal number where the variance is small, else
+/// 0 or an exponential number.
 double notNegative(double mean, double variance, double normal) {
     if (!(mean > 0.0)) {
         return 0.0;
     }
     const double relative = variance / (mean * mean);
     if (relative <= 1.5) {
-        // With q = 2/relative ≥ 4/3 and b² = q − 1 + √(q(q − 1)) it is mean·(b + z)²/(1 + b²), here with all divided by
-        // b², so that no variance at all is fit too.
+        // With q = 2/relative ≥ 4/3 and b² = q − 1 + √(q(q − 1)) it is mean·(b + z)²/(1 + b²), here with all
+        // divided by b², so that no variance at all is fit too.
         const double inverse = relative / 2.0;
         const double oneByB = std::sqrt(inverse / (1.0 - inverse + std::sqrt(1.0 - inverse)));
         const double root = 1.0 + oneByB * normal;
@@ -83,7 +84,8 @@ struct Step {
 class CoxIngersollRossPaths final : public PathMaker {
   public:
     CoxIngersollRossPaths(const CoxIngersollRoss& model, const std::vector<double>& years, std::size_t target)
-        : start_(model.r0), steps_(stepsThrough(model, years)), reflection_(directionOf(model, years[target])) {}
+        : start_(model.r0), steps_(stepsThrough(model, years)),
+          reflection_(directionOf(model, years[target])) {}
 
     [[nodiscard]] std::size_t numbers() const override { return 2 * steps_.size(); }
     [[nodiscard]] double work() const override { return 10.0 * static_cast<double>(steps_.size()); }
@@ -111,8 +113,9 @@ class CoxIngersollRossPaths final : public PathMaker {
     }
 
   private:
-    /// Takes the short rate over a step; its integral. What the integral owes to where the rate ends is linear in it, as if
-    /// both were normal; the rest is drawn. Means, variances and covariance of the pair are exact.
+    /// Takes the short rate over a step; its integral. What the integral owes to where the rate ends is
+    /// linear in it, as if both were normal; the rest is drawn. Means, variances and covariance of the pair
+    /// are exact.
     static double moved(const Moments& moments, double& rate, double first, double second) {
         const double mean = moments.rate(rate);
         const double variance = moments.rateVariance(rate);
@@ -161,7 +164,8 @@ class CoxIngersollRossPaths final : public PathMaker {
 
 } // namespace
 
-PathMakerPtr coxIngersollRossPaths(const CoxIngersollRoss& model, const std::vector<double>& years, std::size_t target) {
+PathMakerPtr coxIngersollRossPaths(const CoxIngersollRoss& model, const std::vector<double>& years,
+                                   std::size_t target) {
     return std::make_shared<const CoxIngersollRossPaths>(model, years, target);
 }
 

@@ -18,10 +18,12 @@ struct Parameter {
         pillar, ///< a pillar or the quote of an instrument
         model,  ///< a parameter of a random model, or the one rate of a flat curve
     };
-    /// Pointer below the curve: `/pillars/2/value`, `/meanReversion`, `/scenarios/0/curve/rate`; "" for a bare number.
+    /// Pointer below the curve: `/pillars/2/value`, `/meanReversion`, `/scenarios/0/curve/rate`; "" for a
+    /// bare number.
     std::string at;
     Kind kind = Kind::model;
-    double value = 0.0; ///< in its own convention; of a pillar quoted as a factor, the continuous zero rate that it makes
+    double value = 0.0; ///< in its own convention; of a pillar quoted as a factor, the continuous zero rate
+                        ///< that it makes
 };
 
 /// One quantile of a random discount factor.
@@ -36,10 +38,12 @@ class LogLaw {
     virtual ~LogLaw() = default;
     /// P(ln D ≤ x).
     [[nodiscard]] virtual double probabilityAtMost(double x) const = 0;
-    /// The smallest x whose probability reaches `probability`, which lies inside (0, 1). Where outcomes are single points a sum of
-    /// probabilities that misses by no more than `probabilityRounding` reaches it all the same.
+    /// The smallest x whose probability reaches `probability`, which lies inside (0, 1). Where outcomes are
+    /// single points a sum of probabilities that misses by no more than `probabilityRounding` reaches it all
+    /// the same.
     [[nodiscard]] virtual double quantile(double probability) const = 0;
-    /// How long one `probabilityAtMost` takes, in units of a normal law's (about 0.1 µs); mixtures refuse to grow without end.
+    /// How long one `probabilityAtMost` takes, in units of a normal law's (about 0.1 µs); mixtures refuse to
+    /// grow without end.
     [[nodiscard]] virtual double work() const { return 1.0; }
 };
 using LogLawPtr = std::shared_ptr<const LogLaw>;
@@ -51,10 +55,12 @@ inline constexpr double probabilityRounding = 1e-12;
 struct NormalRate {
     double meanReversion = 0.0;
     double volatility = 0.0;
-    bool fitted = false; ///< to a curve given: expected discount factors are that curve's, whatever κ and σ are
+    bool fitted =
+        false; ///< to a curve given: expected discount factors are that curve's, whatever κ and σ are
 };
 
-/// What a random curve knows of the law of D(u), the discount factor that will have been realised from its `asOf` to u.
+/// What a random curve knows of the law of D(u), the discount factor that will have been realised from its
+/// `asOf` to u.
 class RandomDiscount {
   public:
     virtual ~RandomDiscount() = default;
@@ -68,30 +74,36 @@ class RandomDiscount {
     [[nodiscard]] virtual double quantileError() const { return 0.0; }
     /// For a curve that is the mean of simulated paths: how many there are; else 0.
     [[nodiscard]] virtual long paths() const { return 0; }
-    /// For such a curve: the standard error of Σ weights[i] · P(dates[i]), by the delta method over whole paths, so that the dates'
-    /// common movement counts; nothing for the others and for a single path.
-    [[nodiscard]] virtual std::optional<double> standardError(std::span<const Date> dates, std::span<const double> weights) const;
+    /// For such a curve: the standard error of Σ weights[i] · P(dates[i]), by the delta method over whole
+    /// paths, so that the dates' common movement counts; nothing for the others and for a single path.
+    [[nodiscard]] virtual std::optional<double> standardError(std::span<const Date> dates,
+                                                              std::span<const double> weights) const;
 
-    /// What makes paths of ln D through `dates`, which rise and are after `asOf`; that of `dates[target]` is to be known best. A fault
-    /// `too-much-work` where there are so many parts and dates that memory would not hold them.
-    [[nodiscard]] virtual outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates, std::size_t target) const = 0;
-    /// How far the mean of D(u) over such paths can be from P(u), relative to it, however many there are; 0 where paths are exact.
+    /// What makes paths of ln D through `dates`, which rise and are after `asOf`; that of `dates[target]` is
+    /// to be known best. A fault `too-much-work` where there are so many parts and dates that memory would
+    /// not hold them.
+    [[nodiscard]] virtual outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates,
+                                                                   std::size_t target) const = 0;
+    /// How far the mean of D(u) over such paths can be from P(u), relative to it, however many there are; 0
+    /// where paths are exact.
     [[nodiscard]] virtual double pathBias() const { return 0.0; }
     /// How the short rate moves, where it is normal.
     [[nodiscard]] virtual std::optional<NormalRate> normalRate() const { return std::nullopt; }
 
-    /// Quantiles of D(u) at `probabilities` (rising, inside (0, 1)); a fault where they can't be had: `too-many-outcomes`, or
-    /// `not-finite` where one is beyond what a number holds.
-    [[nodiscard]] outcome::Outcome<std::vector<Quantile>> quantiles(Date u, std::span<const double> probabilities) const;
+    /// Quantiles of D(u) at `probabilities` (rising, inside (0, 1)); a fault where they can't be had:
+    /// `too-many-outcomes`, or `not-finite` where one is beyond what a number holds.
+    [[nodiscard]] outcome::Outcome<std::vector<Quantile>>
+    quantiles(Date u, std::span<const double> probabilities) const;
 };
 
-/// The largest |ln P| that is accepted; e^±700 are the last whole hundreds that double precision holds in full.
+/// The largest |ln P| that is accepted; e^±700 are the last whole hundreds that double precision holds in
+/// full.
 inline constexpr double largestLogFactor = 700.0;
 
-/// P(u): the value at `asOf` of one unit paid at u, the expectation under the pricing measure of the discount factor D(u).
-/// P(asOf) = 1. Immutable; every u asked for is from `asOf` on. In curves t(u) is ACT/365.FIXED years from `asOf`.
-/// ln P is never NaN, whatever the parameters. A factor outside e^±`largestLogFactor` is refused by `review`, with the code `not-finite`:
-/// beyond it double precision ends.
+/// P(u): the value at `asOf` of one unit paid at u, the expectation under the pricing measure of the discount
+/// factor D(u). P(asOf) = 1. Immutable; every u asked for is from `asOf` on. In curves t(u) is ACT/365.FIXED
+/// years from `asOf`. ln P is never NaN, whatever the parameters. A factor outside e^±`largestLogFactor` is
+/// refused by `review`, with the code `not-finite`: beyond it double precision ends.
 class Curve {
   public:
     virtual ~Curve() = default;
@@ -105,14 +117,16 @@ class Curve {
 
     /// The numbers the curve was made from, in the order of the request.
     [[nodiscard]] virtual std::vector<Parameter> parameters() const = 0;
-    /// ∂ ln P(u) / ∂ parameter, exact, in the order of `parameters`; one-sided at the kinks of a monotone cubic.
+    /// ∂ ln P(u) / ∂ parameter, exact, in the order of `parameters`; one-sided at the kinks of a monotone
+    /// cubic.
     [[nodiscard]] virtual std::vector<double> logFactorGradient(Date u) const = 0;
 
-    /// What stands against asking for factors up to `last`, and what the person should know of them (the curve's end passed).
+    /// What stands against asking for factors up to `last`, and what the person should know of them (the
+    /// curve's end passed).
     [[nodiscard]] virtual outcome::Review review(Date last) const = 0;
 
-    /// How the curve is made, in plain words for the working: "3 pillars, zero rates annual ACT/365.FIXED, log-linear",
-    /// "Vasicek model, expected discount factor". No number of it is repeated.
+    /// How the curve is made, in plain words for the working: "3 pillars, zero rates annual ACT/365.FIXED,
+    /// log-linear", "Vasicek model, expected discount factor". No number of it is repeated.
     [[nodiscard]] virtual std::string convention() const = 0;
 
     /// What is known of D(u) where discounting is random; null where it is not.

@@ -1,10 +1,9 @@
+#include "dates/date.hpp"
 #include "discounting/checks.hpp"
 #include "discounting/curves.hpp"
 #include "discounting/laws.hpp"
 #include "discounting/mean_reversion.hpp"
 #include "discounting/path_makers.hpp"
-
-#include "dates/date.hpp"
 
 #include <cassert>
 
@@ -12,10 +11,12 @@ namespace forwright::discounting {
 
 namespace {
 
-/// A curve that is not random, with a normal short rate about it whose expected discount factors are the curve's.
+/// A curve that is not random, with a normal short rate about it whose expected discount factors are the
+/// curve's.
 class FittedCurve final : public Curve, public RandomDiscount {
   public:
-    FittedCurve(std::vector<Parameter> own, double meanReversion, double volatility, CurvePtr fit, std::string name)
+    FittedCurve(std::vector<Parameter> own, double meanReversion, double volatility, CurvePtr fit,
+                std::string name)
         : Curve(fit->asOf()), own_(std::move(own)), meanReversion_(meanReversion), volatility_(volatility),
           fit_(std::move(fit)), name_(std::move(name)) {}
 
@@ -55,7 +56,8 @@ class FittedCurve final : public Curve, public RandomDiscount {
     [[nodiscard]] outcome::Outcome<LogLawPtr> law(Date u) const override {
         return detail::normalLaw(meanLog(u), variance(u));
     }
-    [[nodiscard]] outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates, std::size_t target) const override {
+    [[nodiscard]] outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates,
+                                                           std::size_t target) const override {
         return detail::normalPaths(*this, dates, target);
     }
     [[nodiscard]] std::optional<NormalRate> normalRate() const override {
@@ -79,7 +81,8 @@ outcome::Faults faultsOf(double meanReversion, double volatility, const Curve& f
     detail::requireWithin(faults, "/meanReversion", meanReversion, 0.0, 100.0, "The mean reversion");
     detail::requireWithin(faults, "/volatility", volatility, 0.0, 10.0, "The volatility");
     if (fit.random() != nullptr) {
-        faults.push_back({"/fit", "random-fit", "The curve that a model is fitted to may not be random itself."});
+        faults.push_back(
+            {"/fit", "random-fit", "The curve that a model is fitted to may not be random itself."});
     }
     return faults;
 }
@@ -104,8 +107,8 @@ Outcome<CurvePtr> hullWhite(Date asOf, double meanReversion, double volatility, 
     }
     std::vector<Parameter> own{{"/meanReversion", Parameter::Kind::model, meanReversion},
                                {"/volatility", Parameter::Kind::model, volatility}};
-    return CurvePtr(
-        std::make_shared<FittedCurve>(std::move(own), meanReversion, volatility, std::move(fit), "Hull–White"));
+    return CurvePtr(std::make_shared<FittedCurve>(std::move(own), meanReversion, volatility, std::move(fit),
+                                                  "Hull–White"));
 }
 
 } // namespace forwright::discounting

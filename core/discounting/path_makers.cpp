@@ -1,9 +1,8 @@
 #include "discounting/path_makers.hpp"
 
+#include "dates/date.hpp"
 #include "discounting/decay.hpp"
 #include "discounting/mean_reversion.hpp"
-
-#include "dates/date.hpp"
 #include "numeric/lanes.hpp"
 #include "numeric/normal_words.hpp"
 
@@ -37,20 +36,21 @@ class CertainPaths final : public PathMaker {
             std::fill_n(logFactors + date * tilePaths, count, logFactors_[date]);
         }
     }
-    void mirror(const std::uint32_t* /*words*/, std::size_t /*count*/, double* /*logFactors*/) const override {}
+    void mirror(const std::uint32_t* /*words*/, std::size_t /*count*/,
+                double* /*logFactors*/) const override {}
 
   private:
     std::vector<double> logFactors_;
 };
 
-/// From one date to the next, x being how far the short rate is from its mean and J how far its integral is, with
-/// two standard normal numbers: J += B·x + own·z₁, then x = e^(−κΔ)·x + shared·z₁ + rest·z₂.
+/// From one date to the next, x being how far the short rate is from its mean and J how far its integral is,
+/// with two standard normal numbers: J += B·x + own·z₁, then x = e^(−κΔ)·x + shared·z₁ + rest·z₂.
 struct Step {
-    double kept = 1.0;   ///< e^(−κΔ)
+    double kept = 1.0;    ///< e^(−κΔ)
     double carried = 0.0; ///< B
-    double own = 0.0;    ///< the integral's own deviation
-    double shared = 0.0; ///< what of the short rate's moves with it
-    double rest = 0.0;   ///< and what does not
+    double own = 0.0;     ///< the integral's own deviation
+    double shared = 0.0;  ///< what of the short rate's moves with it
+    double rest = 0.0;    ///< and what does not
 };
 
 Step stepOver(double meanReversion, double volatility, double years) {
@@ -92,7 +92,8 @@ class NormalPaths final : public PathMaker {
                 integral += step.carried * rate + step.own * first;
                 lanes::store(meanLogs_[date] - integral, to);
                 if (date + 1 < steps_.size()) {
-                    rate = step.kept * rate + (step.shared * first + step.rest * lanes::load(number + tilePaths));
+                    rate = step.kept * rate +
+                           (step.shared * first + step.rest * lanes::load(number + tilePaths));
                 }
                 number += 2 * tilePaths;
                 to += tilePaths;
@@ -111,7 +112,8 @@ class NormalPaths final : public PathMaker {
     }
 
   private:
-    static std::vector<Step> stepsThrough(double meanReversion, double volatility, const std::vector<double>& years) {
+    static std::vector<Step> stepsThrough(double meanReversion, double volatility,
+                                          const std::vector<double>& years) {
         std::vector<Step> steps;
         steps.reserve(years.size());
         double from = 0.0;
@@ -147,9 +149,10 @@ PathMakerPtr certainPaths(std::vector<double> logFactors) {
     return std::make_shared<const CertainPaths>(std::move(logFactors));
 }
 
-PathMakerPtr normalPaths(const NormalRate& rate, const std::vector<double>& years, std::vector<double> meanLogs,
-                         std::size_t target) {
-    return std::make_shared<const NormalPaths>(rate.meanReversion, rate.volatility, years, std::move(meanLogs), target);
+PathMakerPtr normalPaths(const NormalRate& rate, const std::vector<double>& years,
+                         std::vector<double> meanLogs, std::size_t target) {
+    return std::make_shared<const NormalPaths>(rate.meanReversion, rate.volatility, years,
+                                               std::move(meanLogs), target);
 }
 
 std::vector<double> yearsTo(const Curve& curve, std::span<const Date> dates) {
@@ -180,7 +183,8 @@ Reflection::Reflection(std::vector<double> direction) {
     // With a the direction of length 1 the mirror's normal is a − e₁, its square 2(1 − a₁). Where a₁ > 0,
     // 1 − a₁ = tail/(length·(length + first)) without cancellation.
     const double length = std::sqrt(direction[0] * direction[0] + tail);
-    const double short1 = direction[0] > 0.0 ? tail / (length * (length + direction[0])) : 1.0 - direction[0] / length;
+    const double short1 =
+        direction[0] > 0.0 ? tail / (length * (length + direction[0])) : 1.0 - direction[0] / length;
     const double root = std::sqrt(short1);
     across_ = std::move(direction);
     for (double& part : across_) {

@@ -1,9 +1,8 @@
+#include "dates/date.hpp"
 #include "discounting/checks.hpp"
 #include "discounting/curves.hpp"
 #include "discounting/laws.hpp"
 #include "discounting/path_makers.hpp"
-
-#include "dates/date.hpp"
 #include "numeric/elementary.hpp"
 
 #include <algorithm>
@@ -43,7 +42,9 @@ struct Meeting {
     [[nodiscard]] double inForce(Date u) const { return u > date ? dates::years(date, u) : 0.0; }
 
     /// What it adds to ln P(u).
-    [[nodiscard]] double logOfExpectation(Date u) const { return detail::logOfMean(odds, moves, -inForce(u)); }
+    [[nodiscard]] double logOfExpectation(Date u) const {
+        return detail::logOfMean(odds, moves, -inForce(u));
+    }
 };
 
 /// One word a meeting.
@@ -58,7 +59,8 @@ class MeetingPaths final : public PathMaker {
         }
         for (const Meeting& meeting : meetings) {
             const auto next = std::upper_bound(dates.begin(), dates.end(), meeting.date);
-            Decision decision{static_cast<std::size_t>(next - dates.begin()), meeting.inForce(*next), meeting.moves, {}};
+            Decision decision{
+                static_cast<std::size_t>(next - dates.begin()), meeting.inForce(*next), meeting.moves, {}};
             double sum = 0.0;
             for (const double odds : meeting.odds) {
                 sum += odds;
@@ -70,7 +72,9 @@ class MeetingPaths final : public PathMaker {
     }
 
     [[nodiscard]] std::size_t numbers() const override { return decisions_.size(); }
-    [[nodiscard]] double work() const override { return 3.0 * static_cast<double>(decisions_.size() + years_.size()); }
+    [[nodiscard]] double work() const override {
+        return 3.0 * static_cast<double>(decisions_.size() + years_.size());
+    }
 
     void make(const std::uint32_t* words, std::size_t count, double* logFactors) const override {
         for (std::size_t path = 0; path < count; ++path) {
@@ -80,7 +84,8 @@ class MeetingPaths final : public PathMaker {
             for (std::size_t date = 0; date < years_.size(); ++date) {
                 log -= rate * years_[date];
                 for (; decision < decisions_.size() && decisions_[decision].before == date; ++decision) {
-                    const double move = decisions_[decision].moveOf(detail::evenly(words[decision * tilePaths + path]));
+                    const double move =
+                        decisions_[decision].moveOf(detail::evenly(words[decision * tilePaths + path]));
                     log -= move * decisions_[decision].inForce;
                     rate += move;
                 }
@@ -121,7 +126,8 @@ class PolicyMeetingsCurve final : public Curve, public RandomDiscount {
         for (std::size_t k = 0; k < meetings_.size(); ++k) {
             const std::string moves = detail::place("/meetings", k) + "/moves";
             for (std::size_t m = 0; m < meetings_[k].moves.size(); ++m) {
-                all.push_back({detail::place(moves, m) + "/by", Parameter::Kind::model, meetings_[k].moves[m]});
+                all.push_back(
+                    {detail::place(moves, m) + "/by", Parameter::Kind::model, meetings_[k].moves[m]});
             }
         }
         return all;
@@ -134,7 +140,8 @@ class PolicyMeetingsCurve final : public Curve, public RandomDiscount {
             const double log = meeting.logOfExpectation(u);
             for (std::size_t m = 0; m < meeting.moves.size(); ++m) {
                 const double odds = meeting.odds[m];
-                gradient.push_back(odds > 0.0 ? -years * odds * numeric::exp(-meeting.moves[m] * years - log) : 0.0);
+                gradient.push_back(odds > 0.0 ? -years * odds * numeric::exp(-meeting.moves[m] * years - log)
+                                              : 0.0);
             }
         }
         return gradient;
@@ -150,7 +157,8 @@ class PolicyMeetingsCurve final : public Curve, public RandomDiscount {
 
     [[nodiscard]] std::string convention() const override {
         return "overnight rate continuous ACT/365.FIXED with " + std::to_string(meetings_.size()) +
-               (meetings_.size() == 1 ? " policy meeting" : " policy meetings") + ", expected discount factor";
+               (meetings_.size() == 1 ? " policy meeting" : " policy meetings") +
+               ", expected discount factor";
     }
 
     [[nodiscard]] const RandomDiscount* random() const override { return this; }
@@ -167,7 +175,8 @@ class PolicyMeetingsCurve final : public Curve, public RandomDiscount {
         return sum;
     }
 
-    /// The meetings go into two halves of about the same number of outcomes; each is listed whole, their sums are not.
+    /// The meetings go into two halves of about the same number of outcomes; each is listed whole, their sums
+    /// are not.
     [[nodiscard]] outcome::Outcome<LogLawPtr> law(Date u) const override {
         std::vector<detail::Outcomes> effects;
         for (const Meeting& meeting : meetings_) {
@@ -186,21 +195,25 @@ class PolicyMeetingsCurve final : public Curve, public RandomDiscount {
         for (const detail::Outcomes& effect : effects) {
             detail::Outcomes& half = one.values.size() <= other.values.size() ? one : other;
             if (half.values.size() * std::uint64_t{effect.values.size()} > mostInHalf) {
-                return outcome::Fault{"/meetings", "too-many-outcomes",
-                                      "The meetings before " + dates::toIso(u) +
-                                          " have too many outcomes for their quantiles; use fewer meetings or moves (24 "
-                                          "meetings of 3 moves are possible)."};
+                return outcome::Fault{
+                    "/meetings", "too-many-outcomes",
+                    "The meetings before " + dates::toIso(u) +
+                        " have too many outcomes for their quantiles; use fewer meetings or moves (24 "
+                        "meetings of 3 moves are possible)."};
             }
             half = everySum(half, effect);
         }
         return detail::sumLaw(std::move(one), std::move(other));
     }
 
-    [[nodiscard]] outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates, std::size_t /*target*/) const override {
-        const auto after = std::partition_point(meetings_.begin(), meetings_.end(),
-                                                [&](const Meeting& meeting) { return meeting.date < dates.back(); });
+    [[nodiscard]] outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates,
+                                                           std::size_t /*target*/) const override {
+        const auto after =
+            std::partition_point(meetings_.begin(), meetings_.end(),
+                                 [&](const Meeting& meeting) { return meeting.date < dates.back(); });
         return PathMakerPtr(std::make_shared<MeetingPaths>(
-            asOf(), overnight_, std::span(meetings_.begin(), after), dates));
+            asOf(), overnight_,
+            std::span(meetings_).first(static_cast<std::size_t>(after - meetings_.begin())), dates));
     }
 
   private:
@@ -237,7 +250,8 @@ class PolicyMeetingsCurve final : public Curve, public RandomDiscount {
 
 void checkMoves(outcome::Faults& faults, const std::string& at, const std::vector<RateMove>& moves) {
     if (moves.empty()) {
-        faults.push_back({at, "empty-list", "A meeting needs at least one outcome; no change is a move by 0."});
+        faults.push_back(
+            {at, "empty-list", "A meeting needs at least one outcome; no change is a move by 0."});
         return;
     }
     const std::size_t before = faults.size();

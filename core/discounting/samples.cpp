@@ -1,8 +1,7 @@
+#include "dates/date.hpp"
 #include "discounting/checks.hpp"
 #include "discounting/curves.hpp"
 #include "discounting/path_makers.hpp"
-
-#include "dates/date.hpp"
 #include "numeric/elementary.hpp"
 
 #include <algorithm>
@@ -32,7 +31,9 @@ class Sum {
 /// The values sorted; between neighbours of n values the probability rises by 1/(n − 1), evenly in D.
 class SampleLaw final : public LogLaw {
   public:
-    explicit SampleLaw(std::vector<double> logs) : logs_(std::move(logs)) { std::sort(logs_.begin(), logs_.end()); }
+    explicit SampleLaw(std::vector<double> logs) : logs_(std::move(logs)) {
+        std::sort(logs_.begin(), logs_.end());
+    }
 
     [[nodiscard]] double probabilityAtMost(double x) const override {
         if (x < logs_.front()) {
@@ -63,8 +64,8 @@ class SampleLaw final : public LogLaw {
     std::vector<double> logs_;
 };
 
-/// A date's place among the columns: `share` of the way from column `left` to `right`, more than 1 past the last. The start,
-/// where every factor is 1, is no column.
+/// A date's place among the columns: `share` of the way from column `left` to `right`, more than 1 past the
+/// last. The start, where every factor is 1, is no column.
 struct Place {
     static constexpr std::size_t start = static_cast<std::size_t>(-1);
     std::size_t left = start;
@@ -125,14 +126,16 @@ class SampleCurve final : public Curve, public RandomDiscount {
         outcome::Review review = detail::finiteReview(*this, last, bound);
         if (last > paths_.dates.back()) {
             review.notices.push_back({detail::place("/dates", paths_.dates.size() - 1), "beyond-last-date",
-                                      "The samples end on " + dates::toIso(paths_.dates.back()) + " and are needed to " +
-                                          dates::toIso(last) + "; their last forward rate is held."});
+                                      "The samples end on " + dates::toIso(paths_.dates.back()) +
+                                          " and are needed to " + dates::toIso(last) +
+                                          "; their last forward rate is held."});
         }
         return review;
     }
 
     [[nodiscard]] std::string convention() const override {
-        return "mean of " + std::to_string(count_) + (count_ == 1 ? " simulated path" : " simulated paths") + ", log-linear";
+        return "mean of " + std::to_string(count_) + (count_ == 1 ? " simulated path" : " simulated paths") +
+               ", log-linear";
     }
 
     [[nodiscard]] const RandomDiscount* random() const override { return this; }
@@ -145,12 +148,15 @@ class SampleCurve final : public Curve, public RandomDiscount {
         return LogLawPtr(std::make_shared<SampleLaw>(pathLogs(u)));
     }
 
-    /// Paths are drawn from those given, each as likely as the other. Between two columns ln D of a path is linear in t like the curve's, and
-    /// all paths are moved alike so that their mean is the curve's there too.
-    [[nodiscard]] outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates, std::size_t /*target*/) const override {
+    /// Paths are drawn from those given, each as likely as the other. Between two columns ln D of a path is
+    /// linear in t like the curve's, and all paths are moved alike so that their mean is the curve's there
+    /// too.
+    [[nodiscard]] outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates,
+                                                           std::size_t /*target*/) const override {
         if (std::uint64_t{dates.size()} * count_ > mostDrawnFrom) {
-            return outcome::Fault{"/factors", "too-much-work",
-                                  "So many paths over so many dates are too much to draw from; use fewer paths."};
+            return outcome::Fault{
+                "/factors", "too-much-work",
+                "So many paths over so many dates are too much to draw from; use fewer paths."};
         }
         std::vector<double> all(dates.size() * count_);
         const std::vector<double> alike(count_, 1.0);
@@ -164,8 +170,8 @@ class SampleCurve final : public Curve, public RandomDiscount {
         return PathMakerPtr(std::make_shared<ResampledPaths>(std::move(all), dates.size()));
     }
 
-    /// A path moves P(u) = e^((1−w) ln m₁ + w ln m₂), m the columns' means, by P(u)·((1−w)·x₁/m₁ + w·x₂/m₂)/n to first order: the standard error is
-    /// that of the mean of these numbers.
+    /// A path moves P(u) = e^((1−w) ln m₁ + w ln m₂), m the columns' means, by P(u)·((1−w)·x₁/m₁ + w·x₂/m₂)/n
+    /// to first order: the standard error is that of the mean of these numbers.
     [[nodiscard]] std::optional<double> standardError(std::span<const Date> dates,
                                                       std::span<const double> weights) const override {
         if (count_ < 2) {
@@ -201,8 +207,9 @@ class SampleCurve final : public Curve, public RandomDiscount {
         std::vector<double> logs(count_);
         for (std::size_t path = 0; path < count_; ++path) {
             const double right = place.share == 0.0 ? 0.0 : numeric::log(factorAt(path, place.right));
-            const double left =
-                place.share == 1.0 || place.left == Place::start ? 0.0 : numeric::log(factorAt(path, place.left));
+            const double left = place.share == 1.0 || place.left == Place::start
+                                    ? 0.0
+                                    : numeric::log(factorAt(path, place.left));
             logs[path] = (1.0 - place.share) * left + place.share * right;
         }
         return logs;
@@ -243,8 +250,8 @@ void checkFactors(outcome::Faults& faults, const SamplePaths& paths) {
             continue;
         }
         if (++wrong <= mostNamed) {
-            faults.push_back({detail::place(detail::place("/factors", i / columns), i % columns), "not-positive",
-                              "A discount factor has to be a positive number."});
+            faults.push_back({detail::place(detail::place("/factors", i / columns), i % columns),
+                              "not-positive", "A discount factor has to be a positive number."});
         }
     }
     if (wrong > mostNamed) {
@@ -266,10 +273,12 @@ Outcome<CurvePtr> samples(Date asOf, SamplePaths paths) {
     }
     for (std::size_t i = 0; i < paths.dates.size(); ++i) {
         const auto previous = i == 0 ? std::nullopt : std::optional<Date>(paths.dates[i - 1]);
-        detail::requireLater(faults, detail::place("/dates", i), paths.dates[i], asOf, previous, "A date of the samples");
+        detail::requireLater(faults, detail::place("/dates", i), paths.dates[i], asOf, previous,
+                             "A date of the samples");
     }
     if (paths.factors.size() > mostNumbers) {
-        faults.push_back({"/factors", "too-many", "At most 2,000,000 factors are taken; use fewer paths or dates."});
+        faults.push_back(
+            {"/factors", "too-many", "At most 2,000,000 factors are taken; use fewer paths or dates."});
     } else if (!paths.dates.empty()) {
         if (paths.factors.size() % paths.dates.size() != 0) {
             faults.push_back({"/factors", "row-length", "Every path needs one factor for each date."});

@@ -2,7 +2,6 @@
 #include "discounting/curves.hpp"
 #include "discounting/laws.hpp"
 #include "discounting/path_makers.hpp"
-
 #include "numeric/elementary.hpp"
 
 #include <algorithm>
@@ -28,7 +27,8 @@ class ScenarioPaths final : public PathMaker {
     [[nodiscard]] double work() const override {
         // Of each scenario whole lanes are made, however few paths it has in a tile.
         const double parts = static_cast<double>(std::min(makers_.size(), tilePaths));
-        return 3.0 + (work_ + static_cast<double>(longest_)) * (1.0 + 4.0 * parts / static_cast<double>(tilePaths));
+        return 3.0 +
+               (work_ + static_cast<double>(longest_)) * (1.0 + 4.0 * parts / static_cast<double>(tilePaths));
     }
 
     void make(const std::uint32_t* words, std::size_t count, double* logFactors) const override {
@@ -82,7 +82,9 @@ class ScenarioCurve final : public Curve, public RandomDiscount {
         }
     }
 
-    [[nodiscard]] double logFactor(Date u) const override { return detail::logOfMean(weights_, logFactors(u)); }
+    [[nodiscard]] double logFactor(Date u) const override {
+        return detail::logOfMean(weights_, logFactors(u));
+    }
 
     [[nodiscard]] std::vector<Parameter> parameters() const override {
         std::vector<Parameter> all;
@@ -173,9 +175,10 @@ class ScenarioCurve final : public Curve, public RandomDiscount {
             }
             work += part.value()->work();
             if (work > detail::mostWork) {
-                return outcome::Fault{"/scenarios", "too-many-outcomes",
-                                      "The quantiles of so many random curves together would take too long; use fewer "
-                                      "of them."};
+                return outcome::Fault{
+                    "/scenarios", "too-many-outcomes",
+                    "The quantiles of so many random curves together would take too long; use fewer "
+                    "of them."};
             }
             weights.push_back(weights_[s]);
             laws.push_back(std::move(part).value());
@@ -197,7 +200,8 @@ class ScenarioCurve final : public Curve, public RandomDiscount {
         return detail::mixtureLaw(std::move(weights), std::move(laws));
     }
 
-    [[nodiscard]] outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates, std::size_t target) const override {
+    [[nodiscard]] outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates,
+                                                           std::size_t target) const override {
         std::vector<double> upTo;
         std::vector<PathMakerPtr> makers;
         double sum = 0.0;
@@ -212,14 +216,16 @@ class ScenarioCurve final : public Curve, public RandomDiscount {
             sum += weights_[s];
             kept += maker.value()->work();
             if (kept > mostKept) {
-                return outcome::Fault{"/scenarios", "too-much-work",
-                                      "So many scenarios over so many dates are too much to simulate; use fewer of them."};
+                return outcome::Fault{
+                    "/scenarios", "too-much-work",
+                    "So many scenarios over so many dates are too much to simulate; use fewer of them."};
             }
             upTo.push_back(sum);
             makers.push_back(std::move(maker).value());
         }
         upTo.back() = 1.0;
-        return PathMakerPtr(std::make_shared<ScenarioPaths>(std::move(upTo), std::move(makers), dates.size()));
+        return PathMakerPtr(
+            std::make_shared<ScenarioPaths>(std::move(upTo), std::move(makers), dates.size()));
     }
 
     [[nodiscard]] double pathBias() const override {
@@ -243,11 +249,14 @@ class ScenarioCurve final : public Curve, public RandomDiscount {
     }
 
   private:
-    static std::string placeOf(std::size_t scenario) { return detail::place("/scenarios", scenario) + "/curve"; }
+    static std::string placeOf(std::size_t scenario) {
+        return detail::place("/scenarios", scenario) + "/curve";
+    }
 
     static constexpr double mostKept = 4e6; ///< numbers in all scenarios' makers, about
 
-    static outcome::Outcome<PathMakerPtr> pathMakerOf(const Curve& curve, std::span<const Date> dates, std::size_t target) {
+    static outcome::Outcome<PathMakerPtr> pathMakerOf(const Curve& curve, std::span<const Date> dates,
+                                                      std::size_t target) {
         if (curve.random() != nullptr) {
             return curve.random()->pathMaker(dates, target);
         }
@@ -285,8 +294,8 @@ Outcome<CurvePtr> scenarios(Date asOf, const std::vector<Scenario>& all) {
     double sum = 0.0;
     for (std::size_t s = 0; s < all.size(); ++s) {
         assert(all[s].curve->asOf() == asOf);
-        detail::requireWithin(faults, detail::place("/scenarios", s) + "/weight", all[s].weight, 0.0, 1.0 + 1e-9,
-                              "A scenario's weight");
+        detail::requireWithin(faults, detail::place("/scenarios", s) + "/weight", all[s].weight, 0.0,
+                              1.0 + 1e-9, "A scenario's weight");
         sum += all[s].weight;
     }
     if (faults.empty()) {

@@ -1,5 +1,6 @@
 #include "discounting/simulation.hpp"
 
+#include "numeric/elementary.hpp"
 #include "numeric/lanes.hpp"
 #include "numeric/philox.hpp"
 #include "numeric/sobol.hpp"
@@ -76,8 +77,8 @@ std::optional<outcome::Fault> SimulationPlan::refusal() const {
     if (paths % scramblings != 0 || !std::has_single_bit(each)) {
         const auto below = static_cast<long>(std::bit_floor(each)) * scramblings;
         return outcome::Fault{"/paths", "not-a-power-of-two",
-                              "Quasi-random paths have to be a power of two, as " + std::to_string(below) + " and " +
-                                  std::to_string(std::min(2 * below, mostPaths)) + " are."};
+                              "Quasi-random paths have to be a power of two, as " + std::to_string(below) +
+                                  " and " + std::to_string(std::min(2 * below, mostPaths)) + " are."};
     }
     return std::nullopt;
 }
@@ -90,6 +91,10 @@ long SimulationPlan::pathsIn(long block) const {
     return isQuasi(*this) ? paths / blocks() : std::min(paths - block * blockPaths, blockPaths);
 }
 
+bool isCarriedByFew(const RandomDiscount& random, Date u, long paths) {
+    return 4.0 * random.varianceLog(u).value_or(0.0) > numeric::log(static_cast<double>(paths));
+}
+
 /// What one tile is made of, and what is read off it.
 struct Simulation::Tile {
     std::vector<std::uint32_t> words;
@@ -98,8 +103,8 @@ struct Simulation::Tile {
     BinCounts* counts = nullptr;
 };
 
-outcome::Outcome<Simulation> Simulation::make(const Curve& curve, const Payments& payments, const SimulationPlan& plan,
-                                              const Bins& bins) {
+outcome::Outcome<Simulation> Simulation::make(const Curve& curve, const Payments& payments,
+                                              const SimulationPlan& plan, const Bins& bins) {
     assert(!payments.dates.empty() && payments.dates.front() > curve.asOf());
     assert(payments.weights.size() == payments.dates.size() && payments.target < payments.dates.size());
     if (auto fault = plan.refusal()) {
@@ -118,6 +123,7 @@ outcome::Outcome<Simulation> Simulation::make(const Curve& curve, const Payments
     simulation.bins_ = bins;
     simulation.maker_ = std::move(maker).value();
     simulation.expectedFactor_ = curve.factor(payments.dates[payments.target]);
+    simulation.expectedValue_ = payments.today;
     for (std::size_t i = 0; i < payments.dates.size(); ++i) {
         simulation.expectedValue_ += payments.weights[i] * curve.factor(payments.dates[i]);
     }
@@ -131,18 +137,21 @@ double Simulation::workOf(long index) const {
     return each * static_cast<double>(plan_.pathsIn(index));
 }
 
-/// The words of the terms from `term` on, a whole tile of them: as in the counter {four terms, number, stream, 0}.
+/// The words of the terms from `term` on, a whole tile of them: as in the counter {four terms, number,
+/// stream, 0}.
 void Simulation::fillWords(long block, long term, Tile& tile) const {
     const numeric::PhiloxKey key = numeric::philoxKey(plan_.seed);
     const auto first = static_cast<std::uint32_t>(term);
-    const std::size_t evenNumbers = isQuasi(plan_) ? std::min(maker_->numbers(), numeric::sobolDimensions) : 0;
+    const std::size_t evenNumbers =
+        isQuasi(plan_) ? std::min(maker_->numbers(), numeric::sobolDimensions) : 0;
     const auto stream = isQuasi(plan_) ? static_cast<std::uint32_t>(1 + scramblingOf(block)) : 0U;
     for (std::size_t number = 0; number < maker_->numbers(); ++number) {
         std::uint32_t* const to = &tile.words[number * tilePaths];
         if (number < evenNumbers) {
             numeric::OwenScrambling(plan_.seed, number, stream).points(number, first, tilePaths, to);
         } else {
-            numeric::philoxWords({first / 4, static_cast<std::uint32_t>(number), stream, 0}, key, tilePaths / 4, to);
+            numeric::philoxWords({first / 4, static_cast<std::uint32_t>(number), stream, 0}, key,
+                                 tilePaths / 4, to);
         }
     }
 }
@@ -151,7 +160,7 @@ void Simulation::fillWords(long block, long term, Tile& tile) const {
 void Simulation::measure(Tile& tile, std::size_t count) const {
     const double expectedRatio = expectedValue_ / expectedFactor_;
     for (std::size_t path = 0; path < count; path += lanes::count) {
-        Lanes value = lanes::all(-expectedValue_);
+        Lanes value = lanes::all(payments_.today - expectedValue_);
         Lanes settled = lanes::all(0.0);
         for (std::size_t date = 0; date < payments_.dates.size(); ++date) {
             const Lanes factor = lanes::exp(lanes::load(&tile.logFactors[date * tilePaths + path]));
@@ -178,7 +187,8 @@ void Simulation::measure(Tile& tile, std::size_t count) const {
         ++(*tile.counts)[bin];
         tile.factor[path] = factor - expectedFactor_;
     }
-    for (std::size_t path = count; path < lanes::count * ((count + lanes::count - 1) / lanes::count); ++path) {
+    for (std::size_t path = count; path < lanes::count * ((count + lanes::count - 1) / lanes::count);
+         ++path) {
         tile.factor[path] = 0.0;
         tile.value[path] = 0.0;
         tile.ratio[path] = 0.0;
@@ -235,7 +245,8 @@ BlockSums Simulation::block(long index, BinCounts& counts) const {
             product.total(), valueSquared.total(), ratio.total()};
 }
 
-SimulationEstimate Simulation::estimate(std::span<const long> indices, std::span<const BlockSums> sums) const {
+SimulationEstimate Simulation::estimate(std::span<const long> indices,
+                                        std::span<const BlockSums> sums) const {
     assert(indices.size() == sums.size() && !sums.empty());
     BlockSums all;
     SimulationEstimate estimate;
@@ -286,7 +297,8 @@ SimulationEstimate Simulation::estimate(std::span<const long> indices, std::span
         const double xy = all.product / terms - factorMean * valueMean;
         const double yy = all.valueSquared / terms - squareOf(valueMean);
         factorVariance = xx / (independent - 1.0);
-        priceVariance = (yy - 2.0 * estimate.price * xy + squareOf(estimate.price) * xx) / (independent - 1.0);
+        priceVariance =
+            (yy - 2.0 * estimate.price * xy + squareOf(estimate.price) * xx) / (independent - 1.0);
     }
     if (independent > 1.0) {
         estimate.factorError = std::sqrt(std::max(factorVariance, 0.0));

@@ -9,13 +9,14 @@
 #include <string_view>
 #include <vector>
 
-/// Random discounting by simulation: paths of the discount factor through the dates of a deal, made in blocks that
-/// may be shared out, and what their means say of a price.
+/// Random discounting by simulation: paths of the discount factor through the dates of a deal, made in blocks
+/// that may be shared out, and what their means say of a price.
 namespace forwright::discounting {
 
-/// `pseudo`: independent paths in antithetic pairs (each path with its mirror image), from Philox words; the error is
-/// that of the pairs' mean. `quasi`: Sobol points under `scramblings` independent Owen scramblings; the error is that of
-/// the scramblings' mean, and stays honest whatever the points gain. (Owen, Annals of Statistics 25 (1997) 1541–1562.)
+/// `pseudo`: independent paths in antithetic pairs (each path with its mirror image), from Philox words; the
+/// error is that of the pairs' mean. `quasi`: Sobol points under `scramblings` independent Owen scramblings;
+/// the error is that of the scramblings' mean, and stays honest whatever the points gain. (Owen, Annals of
+/// Statistics 25 (1997) 1541–1562.)
 enum class SimulationMethod { pseudo, quasi };
 [[nodiscard]] std::string_view nameOf(SimulationMethod method);
 
@@ -28,33 +29,37 @@ inline constexpr long mostPaths = 1L << 24U;
 /// How many paths, and which. The same plan makes the same paths wherever they are made.
 struct SimulationPlan {
     SimulationMethod method = SimulationMethod::quasi;
-    long paths = 65'536;      ///< pseudo: even, from 4; quasi: `scramblings` times a power of two; at most `mostPaths`
+    long paths =
+        65'536; ///< pseudo: even, from 4; quasi: `scramblings` times a power of two; at most `mostPaths`
     std::uint64_t seed = 1;
 
-    /// What is wrong with `paths`: `out-of-range`, `not-even`, `not-a-power-of-two`, naming what would be right.
+    /// What is wrong with `paths`: `out-of-range`, `not-even`, `not-a-power-of-two`, naming what would be
+    /// right.
     [[nodiscard]] std::optional<outcome::Fault> refusal() const;
     [[nodiscard]] long blocks() const;
     [[nodiscard]] long pathsIn(long block) const;
 };
 
-/// What is asked of each path: the value Σ weights[i]·D(dates[i]) and the factor D(dates[target]), one over the other
-/// being a price. Dates rise and are after the curve's `asOf`.
+/// What is asked of each path: the value today + Σ weights[i]·D(dates[i]) and the factor D(dates[target]),
+/// one over the other being a price. Dates rise and are after the curve's `asOf`.
 struct Payments {
     std::vector<Date> dates;
     std::vector<double> weights;
     std::size_t target = 0;
+    double today = 0.0;
 };
 
-/// Where outcomes of D(dates[target]) are counted: `counts` bins of equal width from `low` to `high`, the last with its
-/// upper end, and what lies outside.
+/// Where outcomes of D(dates[target]) are counted: `counts` bins of equal width from `low` to `high`, the
+/// last with its upper end, and what lies outside.
 struct Bins {
     double low = 0.0;
     double high = 1.0;
     std::size_t count = 40;
 };
 
-/// What one block adds up to. Sums run over `terms` (antithetic pairs, or points of one scrambling) of how far factor x
-/// and value y are from what is expected of them, so that nothing is lost where they hardly move.
+/// What one block adds up to. Sums run over `terms` (antithetic pairs, or points of one scrambling) of how
+/// far factor x and value y are from what is expected of them, so that nothing is lost where they hardly
+/// move.
 struct BlockSums {
     double factor = 0.0;        ///< Σx
     double value = 0.0;         ///< Σy
@@ -67,39 +72,45 @@ struct BlockSums {
 /// Outcomes by bin: below the first, in each, above the last.
 using BinCounts = std::vector<std::int64_t>;
 
-/// Means over the blocks that are there, with their standard errors where these can be had: not from a single pair or
-/// scrambling.
+/// Means over the blocks that are there, with their standard errors where these can be had: not from a single
+/// pair or scrambling.
 struct SimulationEstimate {
     long paths = 0;
     double factor = 0.0; ///< mean of D(dates[target])
     double price = 0.0;  ///< mean value over mean factor
     std::optional<double> factorError;
     std::optional<double> priceError; ///< its dependence on the two means taken as linear
-    double meanRatio = 0.0; ///< mean of value/factor, path by path: not a price. Not finite where a path's is not
+    double meanRatio =
+        0.0; ///< mean of value/factor, path by path: not a price. Not finite where a path's is not
 };
+
+/// Whether the mean of D(u) hangs on paths so rare that `paths` of them tell neither it nor its error well:
+/// the fourth moment of a factor whose logarithm has the variance V is about e^(4V) times the square of its
+/// second, which would have to be small beside the number of paths. False where V is not known.
+[[nodiscard]] bool isCarriedByFew(const RandomDiscount& random, Date u, long paths);
 
 /// A simulation ready to be run, block by block, in any order and place.
 class Simulation {
   public:
-    /// Refused: a curve that is not random (`not-random`), a plan (`/paths` and its code), too many parts to hold
-    /// (`too-much-work`). `expectedValue` is Σ weights·P.
+    /// Refused: a curve that is not random (`not-random`), a plan (`/paths` and its code), too many parts to
+    /// hold
+    /// (`too-much-work`).
     [[nodiscard]] static outcome::Outcome<Simulation> make(const Curve& curve, const Payments& payments,
                                                            const SimulationPlan& plan, const Bins& bins);
 
-    /// Adds the outcomes of a block to `counts` (of `bins.count + 2`) and gives its sums: the same bits whoever works
-    /// it out. Where discount factors leave what a number holds the sums are not finite.
+    /// Adds the outcomes of a block to `counts` (of `bins.count + 2`) and gives its sums: the same bits
+    /// whoever works it out. Where discount factors leave what a number holds the sums are not finite.
     [[nodiscard]] BlockSums block(long index, BinCounts& counts) const;
     /// How long a block takes: about a nanosecond each.
     [[nodiscard]] double workOf(long index) const;
 
     /// From blocks by rising index (`indices[i]` that of `sums[i]`), added up in that order.
-    [[nodiscard]] SimulationEstimate estimate(std::span<const long> indices, std::span<const BlockSums> sums) const;
+    [[nodiscard]] SimulationEstimate estimate(std::span<const long> indices,
+                                              std::span<const BlockSums> sums) const;
 
     [[nodiscard]] const SimulationPlan& plan() const { return plan_; }
-    [[nodiscard]] double expectedFactor() const { return expectedFactor_; }
-    [[nodiscard]] double expectedValue() const { return expectedValue_; }
 
-    /// ln D at every date of the first paths (at most `tilePaths · …` whole tiles), date by date: for pictures.
+    /// ln D at every date of the first `count` paths, date by date: for pictures.
     [[nodiscard]] std::vector<std::vector<double>> firstPaths(std::size_t count) const;
 
   private:

@@ -1,11 +1,10 @@
+#include "dates/date.hpp"
 #include "discounting/checks.hpp"
 #include "discounting/curves.hpp"
 #include "discounting/decay.hpp"
 #include "discounting/laws.hpp"
 #include "discounting/mean_reversion.hpp"
 #include "discounting/path_makers.hpp"
-
-#include "dates/date.hpp"
 
 #include <cmath>
 
@@ -43,8 +42,8 @@ class VasicekCurve final : public Curve, public RandomDiscount {
         const Dual longRun = Dual::parameter(model_.longRun, 2);
         const Dual volatility = Dual::parameter(model_.volatility, 3);
         const double years = dates::years(asOf(), u);
-        const Dual log =
-            meanLogOf(r0, meanReversion, longRun, years) + varianceLogOf(meanReversion, volatility, years) / 2.0;
+        const Dual log = meanLogOf(r0, meanReversion, longRun, years) +
+                         varianceLogOf(meanReversion, volatility, years) / 2.0;
         return {log.slope.begin(), log.slope.end()};
     }
 
@@ -52,11 +51,14 @@ class VasicekCurve final : public Curve, public RandomDiscount {
         // |r0|B + |θ|(t − B) + V/2 grows with t and is at least every |ln P| before it.
         const double years = dates::years(asOf(), last);
         const double bound =
-            -meanLogOf(std::fabs(model_.r0), model_.meanReversion, std::fabs(model_.longRun), years) + variance(last) / 2.0;
+            -meanLogOf(std::fabs(model_.r0), model_.meanReversion, std::fabs(model_.longRun), years) +
+            variance(last) / 2.0;
         return detail::finiteReview(*this, last, bound);
     }
 
-    [[nodiscard]] std::string convention() const override { return "Vasicek model, expected discount factor"; }
+    [[nodiscard]] std::string convention() const override {
+        return "Vasicek model, expected discount factor";
+    }
 
     [[nodiscard]] const RandomDiscount* random() const override { return this; }
 
@@ -67,7 +69,8 @@ class VasicekCurve final : public Curve, public RandomDiscount {
     [[nodiscard]] outcome::Outcome<LogLawPtr> law(Date u) const override {
         return detail::normalLaw(meanLog(u), variance(u));
     }
-    [[nodiscard]] outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates, std::size_t target) const override {
+    [[nodiscard]] outcome::Outcome<PathMakerPtr> pathMaker(std::span<const Date> dates,
+                                                           std::size_t target) const override {
         return detail::normalPaths(*this, dates, target);
     }
     [[nodiscard]] std::optional<NormalRate> normalRate() const override {

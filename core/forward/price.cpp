@@ -340,6 +340,10 @@ outcome::Review review(const Market& market, const Schedule& schedule) {
     if (market.base) {
         add(market.at + "/base/curve", market.base->curve->review(last));
     }
+    // The quote does not discount by it, so its end being passed is no matter; that it is a curve at all is.
+    if (market.discount != market.funding.curve) {
+        outcome::append(review.faults, market.at + "/discount", market.discount->review(last).faults);
+    }
     const auto addRate = [&](const char* at, const discounting::Rate& rate) {
         if (auto fault = discounting::refusal(rate, schedule.holdFrom, schedule.maturity)) {
             review.faults.push_back(outcome::under(market.at + at, std::move(*fault)));

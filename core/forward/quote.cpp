@@ -161,13 +161,22 @@ double annualisedCarry(const Price& fair, const Schedule& schedule) {
     return years > 0.0 ? numeric::log(fair.forward / fair.spot) / years : 0.0;
 }
 
-outcome::Fault bidNotAPrice(const Places& places) {
-    return {places.margin, "not-a-price", "The margin takes the bid to zero or below: give a smaller one"};
-}
-
-outcome::Fault quoteNotFinite(const Places& places) {
-    return {places.margin, "not-finite",
-            "With this margin the quote is too large to be a number: give a smaller one"};
+/// Why what the client would be told is no price; nothing where it is one. `withMargin` is it before rounding.
+std::optional<outcome::Fault> notAPrice(const Market& market, const Places& places, double withMargin,
+                                        double told) {
+    const bool byMargin = !std::isfinite(withMargin) || withMargin <= 0.0;
+    const std::string at = byMargin ? places.margin : market.at + "/asset/tick";
+    if (!std::isfinite(told)) {
+        return outcome::Fault{at, "not-finite",
+                              byMargin ? "With this margin the quote is too large to be a number: give a smaller one"
+                                       : "This tick is too small to count the quote in: give a larger one"};
+    }
+    if (told <= 0.0) {
+        return outcome::Fault{at, "not-a-price",
+                              byMargin ? "The margin takes the bid to zero or below: give a smaller one"
+                                       : "Rounded down to this tick the bid is zero: give a smaller one"};
+    }
+    return std::nullopt;
 }
 
 /// Puts the margin on the sides that are asked for.
@@ -181,10 +190,8 @@ void putMargin(Quote& quote, const Market& market, const Inquiry& inquiry, const
         quote.quotedBid = quoted(
             market, {"quoted-bid", "Our bid", "bid = break-even − m", quote.bid.forward, -quote.margin},
             false, steps);
-        if (!std::isfinite(*quote.quotedBid)) {
-            faults.push_back(quoteNotFinite(places));
-        } else if (*quote.quotedBid <= 0.0) {
-            faults.push_back(bidNotAPrice(places));
+        if (auto fault = notAPrice(market, places, quote.bid.forward - quote.margin, *quote.quotedBid)) {
+            faults.push_back(std::move(*fault));
         }
     }
     if (offers(inquiry.client)) {
@@ -192,8 +199,8 @@ void putMargin(Quote& quote, const Market& market, const Inquiry& inquiry, const
             quoted(market,
                    {"quoted-offer", "Our offer", "offer = break-even + m", quote.offer.forward, quote.margin},
                    true, steps);
-        if (!std::isfinite(*quote.quotedOffer)) {
-            faults.push_back(quoteNotFinite(places));
+        if (auto fault = notAPrice(market, places, quote.offer.forward + quote.margin, *quote.quotedOffer)) {
+            faults.push_back(std::move(*fault));
         }
     }
 }

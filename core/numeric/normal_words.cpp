@@ -11,7 +11,8 @@ constexpr std::size_t count = 6;
 constexpr std::array<double, count> nodes{0.96592582628906829,  0.70710678118654752,  0.25881904510252076,
                                           -0.25881904510252076, -0.70710678118654752, -0.96592582628906829};
 
-/// The coefficients of the polynomial through `values` at the nodes: Newton's divided differences, multiplied out.
+/// The coefficients of the polynomial through `values` at the nodes: Newton's divided differences, multiplied
+/// out.
 std::array<double, count> interpolated(std::array<double, count> values) {
     for (std::size_t order = 1; order < count; ++order) {
         for (std::size_t i = count - 1; i >= order; --i) {
@@ -35,7 +36,7 @@ NormalWords::NormalWords() {
     for (std::size_t piece = 0; piece < pieces; ++piece) {
         const std::uint64_t start = (piece + firstPiece) << piecesShift;
         const double from = __builtin_bit_cast(double, start);
-        const double stretch = __builtin_bit_cast(double, start & (std::uint64_t{0x7FF} << 52U));
+        const double stretch = __builtin_bit_cast(double, start&(std::uint64_t{0x7FF} << 52U));
         std::array<double, coefficients> values{};
         for (std::size_t i = 0; i < coefficients; ++i) {
             values[i] = normalQuantile((from + stretch * half * (1.0 + nodes[i])) * 0x1p-33);

@@ -8,12 +8,13 @@
 
 namespace forwright::numeric {
 
-/// Standard normal numbers from random words: Φ⁻¹((word + ½)/2³²), so that words spread evenly give numbers spread
-/// as the law wants, and a word's complement gives exactly the opposite number. By a table of polynomials, without
-/// a logarithm, a root or a branch: four at once cost little more than one, and both give the same bits.
+/// Standard normal numbers from random words: Φ⁻¹((word + ½)/2³²), so that words spread evenly give numbers
+/// spread as the law wants, and a word's complement gives exactly the opposite number. By a table of
+/// polynomials, without a logarithm, a root or a branch: four at once cost little more than one, and both
+/// give the same bits.
 ///
-/// Absolute error below 2e-12 (seen: 1.7e-12). The numbers lie within ±6.34; their variance is short of 1 by 3e-9, which no
-/// simulation sees.
+/// Absolute error below 2e-12 (seen: 1.7e-12). The numbers lie within ±6.34; their variance is short of 1 by
+/// 3e-9, which no simulation sees.
 class NormalWords {
   public:
     NormalWords();
@@ -25,8 +26,7 @@ class NormalWords {
         const auto bits = __builtin_bit_cast(std::uint64_t, place);
         const Row& row = rows_[static_cast<std::size_t>((bits >> piecesShift) - firstPiece)];
         const double t = along(__builtin_bit_cast(double, (bits & pieceMask) | bitsOfOne));
-        return __builtin_bit_cast(double,
-                                  __builtin_bit_cast(std::uint64_t, value(row, t)) ^ (upper << 63U));
+        return __builtin_bit_cast(double, __builtin_bit_cast(std::uint64_t, value(row, t)) ^ (upper << 63U));
     }
 
     /// Of the four words that follow one another in memory.
@@ -54,8 +54,9 @@ class NormalWords {
     }
 
   private:
-    // The lower half of the law, (0, ½), is cut where its probability in units of 2⁻³³ doubles, 32 times, and each of
-    // these stretches into 16 pieces of equal length: exponent and first four bits of the fraction say which.
+    // The lower half of the law, (0, ½), is cut where its probability in units of 2⁻³³ doubles, 32 times, and
+    // each of these stretches into 16 pieces of equal length: exponent and first four bits of the fraction
+    // say which.
     static constexpr std::size_t coefficients = 6;
     static constexpr unsigned pieceBits = 4;
     static constexpr std::size_t pieces = std::size_t{32} << pieceBits;

@@ -15,7 +15,8 @@ constexpr std::uint32_t high(std::uint64_t product) {
 }
 
 #ifdef __wasm__
-/// In the module a product of two 64-bit numbers costs less than a vector of them, which clang would make of two.
+/// In the module a product of two 64-bit numbers costs less than a vector of them, which clang would make of
+/// two.
 constexpr std::size_t together = 1;
 inline std::uint64_t alone(std::uint64_t product) {
     __asm__("" : "+r"(product));

@@ -4,8 +4,8 @@
 #include <cstddef>
 #include <cstdint>
 
-/// Random words by counting: the n-th is a function of n and a key alone, so that whoever shares the work needs
-/// no state handed over. Integers only: the same words in every build.
+/// Random words by counting: the n-th is a function of n and a key alone, so that whoever shares the work
+/// needs no state handed over. Integers only: the same words in every build.
 namespace forwright::numeric {
 
 using PhiloxCounter = std::array<std::uint32_t, 4>;
@@ -20,8 +20,8 @@ using PhiloxKey = std::array<std::uint32_t, 2>;
     return {static_cast<std::uint32_t>(seed), static_cast<std::uint32_t>(seed >> 32U)};
 }
 
-/// Of the counters {group, b, c, d}, group = first … first + groups − 1, the words one after another: 4 · groups
-/// of them. `groups` is a multiple of `philoxBatch`.
+/// Of the counters {group, b, c, d}, group = first … first + groups − 1, the words one after another: 4 ·
+/// groups of them. `groups` is a multiple of `philoxBatch`.
 void philoxWords(const PhiloxCounter& first, const PhiloxKey& key, std::size_t groups, std::uint32_t* to);
 inline constexpr std::size_t philoxBatch = 32;
 

@@ -9,8 +9,8 @@ namespace {
 
 constexpr std::size_t bits = 32;
 
-/// A primitive polynomial over two elements, its coefficients as bits, and the first direction numbers that go with
-/// it, one for each degree.
+/// A primitive polynomial over two elements, its coefficients as bits, and the first direction numbers that
+/// go with it, one for each degree.
 struct Start {
     std::uint16_t polynomial;
     std::array<std::uint8_t, 8> directions;

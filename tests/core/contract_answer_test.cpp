@@ -1,5 +1,4 @@
 #include "contract/answer.hpp"
-
 #include "contract/catalogue.hpp"
 #include "contract/findings.hpp"
 #include "contract/reader.hpp"
@@ -27,7 +26,8 @@ json filledIn(json request, const json& assumed) {
     for (const json& entry : assumed) {
         const std::string at = entry["at"];
         // Of the discount curve the answer names the curve that is used.
-        request[to(at)] = at == "/market/discount" ? request[to(entry["value"].get<std::string>())] : entry["value"];
+        request[to(at)] =
+            at == "/market/discount" ? request[to(entry["value"].get<std::string>())] : entry["value"];
     }
     return request;
 }
@@ -65,7 +65,8 @@ TEST_SUITE("contract answer") {
     }
 
     TEST_CASE("white space and the order of members change nothing") {
-        CHECK(forwright::contract::answer(shareRequest().dump(4)).text == forwright::contract::answer(shareRequest().dump()).text);
+        CHECK(forwright::contract::answer(shareRequest().dump(4)).text ==
+              forwright::contract::answer(shareRequest().dump()).text);
     }
 
     TEST_CASE("what is assumed, put into the request, gives the same result and leaves nothing assumed") {
@@ -95,14 +96,16 @@ TEST_SUITE("contract answer") {
             for (const char* curve : {"funding", "base"}) {
                 for (const char* list : {"pillars", "parameters"}) {
                     if (sensitivities.contains(curve) && sensitivities[curve].contains(list)) {
-                        places.insert(places.end(), sensitivities[curve][list].begin(), sensitivities[curve][list].end());
+                        places.insert(places.end(), sensitivities[curve][list].begin(),
+                                      sensitivities[curve][list].end());
                     }
                 }
             }
             CHECK(places.size() >= 4);
             places.insert(places.end(), answered.body["notices"].begin(), answered.body["notices"].end());
             if (answered.body["result"].contains("income")) {
-                places.insert(places.end(), answered.body["result"]["income"].begin(), answered.body["result"]["income"].end());
+                places.insert(places.end(), answered.body["result"]["income"].begin(),
+                              answered.body["result"]["income"].end());
             }
             for (const json& place : places) {
                 CAPTURE(place.dump());
@@ -112,7 +115,8 @@ TEST_SUITE("contract answer") {
     }
 
     TEST_CASE("a block is in the result when it is wanted, and only then") {
-        const std::vector<std::string> blocks{"income", "sensitivities", "ledger", "random", "bridge", "total", "working"};
+        const std::vector<std::string> blocks{"income", "sensitivities", "ledger", "random",
+                                              "bridge", "total",         "working"};
         json request = shareRequest();
         request["market"]["funding"]["curve"] = randomCurves()[0];
         for (const std::string& wanted : blocks) {
@@ -129,7 +133,8 @@ TEST_SUITE("contract answer") {
         json request = shareRequest();
         request["market"]["funding"]["curve"] = randomCurves()[0];
         const json whole = ask(request).body["result"];
-        for (const std::string block : {"income", "sensitivities", "ledger", "random", "bridge", "total", "working"}) {
+        for (const std::string block :
+             {"income", "sensitivities", "ledger", "random", "bridge", "total", "working"}) {
             request["want"] = json::array({block});
             CHECK(ask(request).body["result"][block] == whole[block]);
         }
@@ -141,13 +146,15 @@ TEST_SUITE("contract answer") {
         request["market"].erase("lendingFee");
         const Answered answered = ask(request);
         CHECK(errorsOf(answered) == std::vector<std::string>{"/market/lendingFees unknown-member"});
-        CHECK(answered.body["errors"][0]["message"].get<std::string>().find("\"lendingFee\"") != std::string::npos);
+        CHECK(answered.body["errors"][0]["message"].get<std::string>().find("\"lendingFee\"") !=
+              std::string::npos);
     }
 
     TEST_CASE("a member that nothing known is near to is told without a guess") {
         json request = shareRequest();
         request["market"]["quibble"] = 1;
-        CHECK(ask(request).body["errors"][0]["message"].get<std::string>().find("may be meant") == std::string::npos);
+        CHECK(ask(request).body["errors"][0]["message"].get<std::string>().find("may be meant") ==
+              std::string::npos);
     }
 
     TEST_CASE("lists reach to 10,000 rows and no further") {
@@ -173,7 +180,8 @@ TEST_SUITE("contract answer") {
             least["want"] = json::array();
             std::string text = least.dump();
             const std::string curve =
-                R"({"kind":"random","model":"samples","dates":["2027-06-18","2027-12-01"],"factors":[)" + factors + "]}";
+                R"({"kind":"random","model":"samples","dates":["2027-06-18","2027-12-01"],"factors":[)" +
+                factors + "]}";
             return text.replace(text.find("\"CURVE\""), 7, curve);
         };
         const std::string full = rows.substr(0, rows.size() - 1);
@@ -219,8 +227,9 @@ TEST_SUITE("contract answer") {
         request["surplus"] = 1;
         const Answered answered = ask(request);
         for (const char* expected :
-             {"/market/asOf wrong-type", "/market/asset/tick not-positive", "/market/funding/lendSpread wrong-type",
-              "/market/income/yield/dayCount not-one-of", "/market/income/cash/1/ex not-a-date", "/market/hedgeCost wrong-type",
+             {"/market/asOf wrong-type", "/market/asset/tick not-positive",
+              "/market/funding/lendSpread wrong-type", "/market/income/yield/dayCount not-one-of",
+              "/market/income/cash/1/ex not-a-date", "/market/hedgeCost wrong-type",
               "/inquiry/margin/unit not-one-of", "/surplus unknown-member"}) {
             CHECK_MESSAGE(hasError(answered, expected), expected);
         }
@@ -232,7 +241,8 @@ TEST_SUITE("contract answer") {
         request["market"].erase("asOf");
         request["market"]["funding"]["curve"]["pillars"][1]["value"] = "x";
         CHECK(errorsOf(ask(request)) ==
-              std::vector<std::string>{"/market/asOf missing", "/market/funding/curve/pillars/1/value wrong-type"});
+              std::vector<std::string>{"/market/asOf missing",
+                                       "/market/funding/curve/pillars/1/value wrong-type"});
     }
 
     TEST_CASE("a member that stands twice is an error beside the others") {
@@ -253,7 +263,8 @@ TEST_SUITE("contract answer") {
             return ask(closed).body["result"]["fair"].get<double>();
         }();
         const double more = ask(request).body["result"]["fair"].get<double>();
-        CHECK(more - fewer == doctest::Approx(80 * 0.1 * 2 / 252).epsilon(1e-10)); // computed: two days of simple interest
+        CHECK(more - fewer ==
+              doctest::Approx(80 * 0.1 * 2 / 252).epsilon(1e-10)); // computed: two days of simple interest
     }
 
     TEST_CASE("own holidays and open days move the dates") {
@@ -302,7 +313,8 @@ TEST_SUITE("contract answer") {
 
     TEST_CASE("every tenor's row is that maturity's quote") {
         json request = shareRequest();
-        json tenors = read(R"({"format":"forwright/1","task":"tenors","maturities":["1M","3M","2027-06-18","1Y"]})");
+        json tenors =
+            read(R"({"format":"forwright/1","task":"tenors","maturities":["1M","3M","2027-06-18","1Y"]})");
         tenors["market"] = request["market"];
         tenors["inquiry"] = request["inquiry"];
         tenors["inquiry"].erase("maturity");

@@ -4,6 +4,7 @@
 
 #include <doctest/doctest.h>
 #include <nlohmann/json.hpp>
+
 #include <string>
 #include <string_view>
 #include <utility>

@@ -1,4 +1,5 @@
-// The golden table through the core itself. Read from the sources, so native only; program and module are held to it in tests/module.
+// The golden table through the core itself. Read from the sources, so native only; program and module are
+// held to it in tests/module.
 #ifndef __EMSCRIPTEN__
 #include "contract/catalogue.hpp"
 #include "contract_fixtures.hpp"
@@ -65,14 +66,16 @@ TEST_SUITE("contract golden") {
             CAPTURE(row["name"].get<std::string>());
             REQUIRE_FALSE(row["source"].get<std::string>().empty());
             REQUIRE_FALSE(row["expect"].empty());
-            const Answered answered = askText(row.contains("text") ? row["text"].get<std::string>() : row["request"].dump());
+            const Answered answered =
+                askText(row.contains("text") ? row["text"].get<std::string>() : row["request"].dump());
             for (const json& expected : row["expect"]) {
                 checkExpectation(answered.body, expected);
             }
         }
     }
 
-    TEST_CASE("every code of the sources is in the catalogue, and every code of the catalogue in the sources") {
+    TEST_CASE(
+        "every code of the sources is in the catalogue, and every code of the catalogue in the sources") {
         std::string sources;
         for (const auto& entry : std::filesystem::recursive_directory_iterator{root / "core"}) {
             if (entry.path().extension() == ".cpp" && entry.path().filename() != "catalogue.cpp") {
@@ -85,13 +88,24 @@ TEST_SUITE("contract golden") {
             CHECK_MESSAGE(sources.find('"' + std::string{entry.code} + '"') != std::string::npos, entry.code);
         }
         // A fault or a notice is made by its code, right before its sentence.
-        const std::regex remark{R"re((?:[Ff]ault|[Nn]otice|push_back)\b[^;]*?"([a-z]+(?:-[a-z]+)*)",\s*(?:"[A-Z]|std::string|dates::))re"};
+        const std::regex remark{
+            R"re((?:[Ff]ault|[Nn]otice|push_back)\b[^;]*?"([a-z]+(?:-[a-z]+)*)",\s*(?:"[A-Z]|std::string|dates::))re"};
         int found = 0;
         for (std::sregex_iterator match{sources.begin(), sources.end(), remark}, end; match != end; ++match) {
             ++found;
             CHECK_MESSAGE(known.count((*match)[1]) == 1, (*match)[1].str());
         }
         CHECK(found >= 20);
+    }
+
+    TEST_CASE("the list of codes that people read is the catalogue") {
+        const std::string list = textOf(root / "DEVELOPERS.md");
+        for (const auto& entry : forwright::contract::catalogue()) {
+            const std::string what = !entry.isNotice ? "error" : entry.isError ? "error, notice" : "notice";
+            const std::string row =
+                "| `" + std::string{entry.code} + "` | " + what + " | " + std::string{entry.meaning} + " |";
+            CHECK_MESSAGE(list.find(row) != std::string::npos, "DEVELOPERS.md lacks: " << row);
+        }
     }
 }
 #endif

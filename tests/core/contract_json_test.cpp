@@ -2,6 +2,7 @@
 #include "contract/place.hpp"
 
 #include <doctest/doctest.h>
+
 #include <string>
 #include <vector>
 
@@ -69,16 +70,19 @@ TEST_SUITE("contract json") {
 
     TEST_CASE("text that is not JSON is refused as a whole") {
         for (const std::string_view text :
-             {"", " ", "nul", "NaN", "[NaN]", "Infinity", "[-Infinity]", "01", "+1", ".5", "1.", "1e", "0x10", "[1,]", "{\"a\":1,}", "{a:1}",
-              "'a'", "[1 2]", "[", "]", "{", "\"", "\"\n\"", "\"\\x\"", "// c\n1", "1 // c", "{} {}", "1 2", "true false"}) {
+             {"",        " ",      "nul",   "NaN", "[NaN]",     "Infinity", "[-Infinity]", "01",
+              "+1",      ".5",     "1.",    "1e",  "0x10",      "[1,]",     "{\"a\":1,}",  "{a:1}",
+              "'a'",     "[1 2]",  "[",     "]",   "{",         "\"",       "\"\n\"",      "\"\\x\"",
+              "// c\n1", "1 // c", "{} {}", "1 2", "true false"}) {
             CAPTURE(text);
             CHECK(refused(text) == "not-json at ''");
         }
     }
 
     TEST_CASE("half a surrogate pair and bytes that are not UTF-8 are refused") {
-        for (const std::string_view text : {R"("\ud800")", R"("\udc00")", R"("\ud800\ud800")", R"("\ud800x")", "\"\xff\"", "\"\xc0\x80\"",
-                                            "\"\xed\xa0\x80\"", "\"\xf4\x90\x80\x80\"", "\"\xe2\x82\""}) {
+        for (const std::string_view text :
+             {R"("\ud800")", R"("\udc00")", R"("\ud800\ud800")", R"("\ud800x")", "\"\xff\"", "\"\xc0\x80\"",
+              "\"\xed\xa0\x80\"", "\"\xf4\x90\x80\x80\"", "\"\xe2\x82\""}) {
             CHECK(refused(text) == "not-json at ''");
         }
     }
@@ -105,7 +109,9 @@ TEST_SUITE("contract json") {
     }
 
     TEST_CASE("nesting reaches to 32 and no further, and the pointer says where") {
-        const auto nested = [](std::size_t depth) { return std::string(depth, '[') + std::string(depth, ']'); };
+        const auto nested = [](std::size_t depth) {
+            return std::string(depth, '[') + std::string(depth, ']');
+        };
         CHECK(parse(nested(deepestNesting)).ok());
         CHECK(refused(nested(deepestNesting + 1)).starts_with("too-deep at '/0/0/"));
         CHECK(refused("{\"a\":[1," + nested(deepestNesting) + "]}").starts_with("too-deep at '/a/1/0"));

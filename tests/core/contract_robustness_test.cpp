@@ -11,6 +11,11 @@ namespace {
 
 constexpr unsigned seed = 20261201;
 
+/// A number from 0 to `size` − 1.
+std::size_t below(std::mt19937& dice, std::size_t size) {
+    return static_cast<std::size_t>(dice()) % size;
+}
+
 bool inCatalogue(const json& remark, bool isError) {
     const auto all = forwright::contract::catalogue();
     return std::any_of(all.begin(), all.end(), [&](const auto& entry) {
@@ -45,7 +50,8 @@ std::vector<json> startingPoints() {
         request["market"]["funding"]["curve"] = curve;
         all.push_back(request);
     }
-    json tenors = read(R"({"format":"forwright/1","task":"tenors","maturities":["1W","3M","2027-06-18"],"roll":"following",
+    json tenors = read(
+        R"({"format":"forwright/1","task":"tenors","maturities":["1W","3M","2027-06-18"],"roll":"following",
         "grid":{"maturity":"1Y","spot":[-0.05,0],"funding":[0,0.01]}})");
     tenors["market"] = shareRequest()["market"];
     all.push_back(tenors);
@@ -58,19 +64,48 @@ std::vector<json> startingPoints() {
 
 /// Values at and beyond every limit.
 std::vector<json> strangeValues() {
-    return {nullptr,      true,         "",           "x",           "2027-06-19", "1900-01-01", "2199-12-31", "2026-12-01",
-            "100Y",       "0D",         "5200W",      "pillars",     "random",     0,            -0.0,         1,
-            -1,           0.5,          -0.99,        10,            1e-300,       5e-324,       -5e-324,      1e300,
-            1e308,        -1e308,       30,           31,            1e-9,         json::array(), json::array({1}), json::object(),
-            json{{"rate", 10}, {"compounding", "simple"}}, json{{"bid", 1}, {"offer", 1e300}}};
+    return {nullptr,
+            true,
+            "",
+            "x",
+            "2027-06-19",
+            "1900-01-01",
+            "2199-12-31",
+            "2026-12-01",
+            "100Y",
+            "0D",
+            "5200W",
+            "pillars",
+            "random",
+            0,
+            -0.0,
+            1,
+            -1,
+            0.5,
+            -0.99,
+            10,
+            1e-300,
+            5e-324,
+            -5e-324,
+            1e300,
+            1e308,
+            -1e308,
+            30,
+            31,
+            1e-9,
+            json::array(),
+            json::array({1}),
+            json::object(),
+            json{{"rate", 10}, {"compounding", "simple"}},
+            json{{"bid", 1}, {"offer", 1e300}}};
 }
 
 /// Some place in `value`, reached by going down at random.
 json& somewhere(json& value, std::mt19937& dice) {
     json* here = &value;
-    while (here->is_structured() && !here->empty() && dice() % 8 != 0) {
+    while (here->is_structured() && !here->empty() && below(dice, 8) != 0) {
         auto child = here->begin();
-        std::advance(child, static_cast<std::ptrdiff_t>(dice() % here->size()));
+        std::advance(child, static_cast<std::ptrdiff_t>(below(dice, here->size())));
         here = &*child;
     }
     return *here;
@@ -80,7 +115,7 @@ void removeSomething(json& value, std::mt19937& dice) {
     json& place = somewhere(value, dice);
     if (place.is_object() && !place.empty()) {
         auto member = place.begin();
-        std::advance(member, static_cast<std::ptrdiff_t>(dice() % place.size()));
+        std::advance(member, static_cast<std::ptrdiff_t>(below(dice, place.size())));
         place.erase(member);
     } else if (place.is_array() && !place.empty()) {
         place.erase(place.begin());
@@ -96,11 +131,11 @@ TEST_SUITE("contract robustness") {
         const std::vector<json> strange = strangeValues();
         for (int i = 0; i < 6'000; ++i) {
             json request = starts[static_cast<std::size_t>(i) % starts.size()];
-            for (unsigned changes = 1 + dice() % 3; changes > 0; --changes) {
-                if (dice() % 5 == 0) {
+            for (std::size_t changes = 1 + below(dice, 3); changes > 0; --changes) {
+                if (below(dice, 5) == 0) {
                     removeSomething(request, dice);
                 } else {
-                    somewhere(request, dice) = strange[dice() % strange.size()];
+                    somewhere(request, dice) = strange[below(dice, strange.size())];
                 }
             }
             checkAnswer(request.dump());
@@ -116,8 +151,9 @@ TEST_SUITE("contract robustness") {
             for (int changes = 0; changes < 8; ++changes) {
                 json& place = somewhere(request, dice);
                 if (place.is_number()) {
-                    const double sign = dice() % 2 == 0 ? 1.0 : -1.0;
-                    place = dice() % 3 == 0 ? sign * std::pow(10.0, exponent(dice)) : place.get<double>() * (dice() % 40);
+                    const double sign = below(dice, 2) == 0 ? 1.0 : -1.0;
+                    place = below(dice, 3) == 0 ? sign * std::pow(10.0, exponent(dice))
+                                                : place.get<double>() * static_cast<double>(below(dice, 40));
                 }
             }
             checkAnswer(request.dump());
@@ -129,20 +165,20 @@ TEST_SUITE("contract robustness") {
         const std::vector<json> starts = startingPoints();
         for (int i = 0; i < 4'000; ++i) {
             std::string text = starts[static_cast<std::size_t>(i) % starts.size()].dump();
-            for (unsigned changes = 1 + dice() % 4; changes > 0; --changes) {
-                const std::size_t at = dice() % text.size();
-                switch (dice() % 4) {
+            for (std::size_t changes = 1 + below(dice, 4); changes > 0; --changes) {
+                const std::size_t at = below(dice, text.size());
+                switch (below(dice, 4)) {
                 case 0:
                     text[at] = static_cast<char>(dice());
                     break;
                 case 1:
-                    text.erase(at, 1 + dice() % 20);
+                    text.erase(at, 1 + below(dice, 20));
                     break;
                 case 2:
-                    text.insert(at, text.substr(dice() % text.size(), dice() % 40));
+                    text.insert(at, text.substr(below(dice, text.size()), below(dice, 40)));
                     break;
                 default:
-                    text[at] = "{}[],:\"0123456789.-eE\\"[dice() % 22];
+                    text[at] = "{}[],:\"0123456789.-eE\\"[below(dice, 22)];
                 }
                 if (text.empty()) {
                     text = "{";

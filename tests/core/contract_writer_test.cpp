@@ -1,9 +1,10 @@
 #include "contract/writer.hpp"
 
+#include <doctest/doctest.h>
+
 #include <bit>
 #include <cmath>
 #include <cstdlib>
-#include <doctest/doctest.h>
 #include <limits>
 #include <random>
 
@@ -20,7 +21,8 @@ TEST_SUITE("contract writer") {
             }
             const std::string text = contract::numberText(value);
             CAPTURE(text);
-            REQUIRE(std::bit_cast<std::uint64_t>(std::strtod(text.c_str(), nullptr)) == std::bit_cast<std::uint64_t>(value));
+            REQUIRE(std::bit_cast<std::uint64_t>(std::strtod(text.c_str(), nullptr)) ==
+                    std::bit_cast<std::uint64_t>(value));
             REQUIRE(text.size() <= 24);
         }
     }

@@ -1,5 +1,4 @@
 #include "discounting_fixtures.hpp"
-
 #include "numeric/normal.hpp"
 
 using namespace forwright::discounting;
@@ -7,7 +6,8 @@ using namespace forwright::discounting::testing;
 namespace numeric = forwright::numeric;
 
 TEST_SUITE("numeric: normal law") {
-    TEST_CASE("quantiles that AS 241 was published with (Wichura 1988: p = 0.25, 0.001, 1e-20; from memory, and mpmath)") {
+    TEST_CASE("quantiles that AS 241 was published with (Wichura 1988: p = 0.25, 0.001, 1e-20; from memory, "
+              "and mpmath)") {
         checkNear(numeric::normalQuantile(0.25), -0.67448975019608174, 1e-15);
         checkNear(numeric::normalQuantile(0.001), -3.0902323061678135, 1e-14);
         checkNear(numeric::normalQuantile(1e-20), -9.2623400897984076, 3e-14);
@@ -27,7 +27,8 @@ TEST_SUITE("numeric: normal law") {
 
     TEST_CASE("the one undoes the other") {
         for (double z = -8; z < 5; z += 0.01) {
-            checkNear(numeric::normalQuantile(numeric::normalProbability(z)), z, 1e-13 + (z > 0 ? 1e-15 / numeric::normalProbability(-z) : 0));
+            checkNear(numeric::normalQuantile(numeric::normalProbability(z)), z,
+                      1e-13 + (z > 0 ? 1e-15 / numeric::normalProbability(-z) : 0));
         }
     }
 }

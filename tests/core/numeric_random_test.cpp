@@ -16,7 +16,8 @@ TEST_SUITE("numeric: random numbers") {
         using Words = std::array<std::uint32_t, 4>;
         constexpr std::uint32_t ones = 0xffffffff;
         CHECK(philox({0, 0, 0, 0}, {0, 0}) == Words{0x6627e8d5, 0xe169c58d, 0xbc57ac4c, 0x9b00dbd8});
-        CHECK(philox({ones, ones, ones, ones}, {ones, ones}) == Words{0x408f276d, 0x41c83b0e, 0xa20bc7c6, 0x6d5451fd});
+        CHECK(philox({ones, ones, ones, ones}, {ones, ones}) ==
+              Words{0x408f276d, 0x41c83b0e, 0xa20bc7c6, 0x6d5451fd});
         CHECK(philox({0x243f6a88, 0x85a308d3, 0x13198a2e, 0x03707344}, {0xa4093822, 0x299f31d0}) ==
               Words{0xd16cfe09, 0x94fdcceb, 0x5001e420, 0x24126ea1});
     }
@@ -35,7 +36,8 @@ TEST_SUITE("numeric: random numbers") {
         }
     }
 
-    TEST_CASE("normal numbers from words are the law's quantiles, opposite for complements, alike four at once") {
+    TEST_CASE(
+        "normal numbers from words are the law's quantiles, opposite for complements, alike four at once") {
         const NormalWords& normal = normalWords();
         double worst = 0.0;
         const auto check = [&](std::uint32_t word) {
@@ -76,7 +78,8 @@ TEST_SUITE("numeric: random numbers") {
         }
     }
 
-    TEST_CASE("the first Sobol points (Bratley and Fox 1988, from memory: 0, ½, ¼ and ¾ in other orders, …)") {
+    TEST_CASE(
+        "the first Sobol points (Bratley and Fox 1988, from memory: 0, ½, ¼ and ¾ in other orders, …)") {
         CHECK(sobolPoint(0, 0) == 0);
         CHECK(sobolPoint(0, 1) == 0x80000000);
         CHECK(sobolPoint(0, 2) == 0x40000000);
@@ -85,8 +88,10 @@ TEST_SUITE("numeric: random numbers") {
         CHECK(sobolPoint(1, 3) == 0x40000000);
     }
 
-    TEST_CASE("a scrambled coordinate still has one point in each of 2ᵏ intervals, and depends on earlier bits only") {
-        for (const std::size_t dimension : {std::size_t{0}, std::size_t{1}, std::size_t{13}, sobolDimensions - 1}) {
+    TEST_CASE("a scrambled coordinate still has one point in each of 2ᵏ intervals, and depends on earlier "
+              "bits only") {
+        for (const std::size_t dimension :
+             {std::size_t{0}, std::size_t{1}, std::size_t{13}, sobolDimensions - 1}) {
             const OwenScrambling scrambling(2011, dimension, 3);
             std::vector<std::uint32_t> points(1024);
             scrambling.points(dimension, 0, points.size(), points.data());
@@ -104,16 +109,18 @@ TEST_SUITE("numeric: random numbers") {
         for (unsigned bit = 0; bit < 32; ++bit) {
             const std::uint32_t change = 0x80000000U >> bit;
             const std::uint32_t difference = scrambling(0x5bd1e995) ^ scrambling(0x5bd1e995 ^ change);
-            CHECK((difference & change) != 0);            // the bit itself changes
+            CHECK((difference & change) != 0);             // the bit itself changes
             CHECK(difference < 2 * std::uint64_t{change}); // and none before it
         }
     }
 
-    TEST_CASE("over scramblings each bit is 1 half the time, whatever the bits before it were (a χ² of each within 5 deviations)") {
+    TEST_CASE("over scramblings each bit is 1 half the time, whatever the bits before it were (a χ² of each "
+              "within 5 deviations)") {
         constexpr std::uint32_t draws = 4096;
         for (const std::uint32_t point : {0U, 0x80000000U, 0x12345678U, 0xffffffffU}) {
             std::array<std::uint32_t, 32> ones{};
-            std::array<std::uint32_t, 32> changes{}; // of a bit when the one before it in the point is flipped
+            std::array<std::uint32_t, 32>
+                changes{}; // of a bit when the one before it in the point is flipped
             for (std::uint32_t draw = 0; draw < draws; ++draw) {
                 const OwenScrambling scrambling(77, 4, draw);
                 const std::uint32_t here = scrambling(point);
@@ -128,7 +135,8 @@ TEST_SUITE("numeric: random numbers") {
             const double deviation = std::sqrt(draws / 4.0);
             for (unsigned bit = 0; bit < 32; ++bit) {
                 CHECK(std::fabs(ones[bit] - draws / 2.0) < 5.0 * deviation);
-                CHECK_MESSAGE((bit == 31 || std::fabs(changes[bit] - draws / 2.0) < 5.0 * deviation), "bit " << bit << ": " << changes[bit]);
+                CHECK_MESSAGE((bit == 31 || std::fabs(changes[bit] - draws / 2.0) < 5.0 * deviation),
+                              "bit " << bit << ": " << changes[bit]);
             }
         }
     }

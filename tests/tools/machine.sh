@@ -1,9 +1,6 @@
 # For web/run and tests/run, which source it: what the machine must have, and how the parts are built.
 # The caller has set `root` (the repository) and `build` (the folder everything is built in).
 
-# Emscripten looks for acorn where Debian's own Node.js does; another Node.js must be told.
-export NODE_PATH=/usr/share/nodejs${NODE_PATH:+:$NODE_PATH}
-
 # One job a processor. Compiling is what takes the time.
 jobs=$(nproc 2>/dev/null || echo 2)
 

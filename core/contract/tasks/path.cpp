@@ -10,7 +10,8 @@ namespace forwright::contract {
 
 namespace {
 
-void answerPath(const forward::Market& market, const forward::Inquiry& inquiry, Findings& findings, Writer& writer) {
+void answerPath(const forward::Market& market, const forward::Inquiry& inquiry, Findings& findings,
+                Writer& writer) {
     const outcome::Outcome<desk::Path> outcome = desk::path(market, inquiry);
     if (!outcome) {
         findings.faults(Place{}, outcome.faults());

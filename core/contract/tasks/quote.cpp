@@ -1,16 +1,20 @@
 // Task `quote`: the price of one forward, with everything that explains it.
+#include "forward/quote.hpp"
+
 #include "contract/inquiry_reader.hpp"
 #include "contract/market_reader.hpp"
 #include "contract/result_writer.hpp"
 #include "contract/task.hpp"
 #include "forward/carry.hpp"
 #include "forward/ledger.hpp"
-#include "forward/quote.hpp"
 #include "forward/random.hpp"
 #include "forward/sensitivities.hpp"
 
+#include <algorithm>
 #include <array>
 #include <bitset>
+#include <cmath>
+#include <iterator>
 #include <utility>
 #include <variant>
 
@@ -41,10 +45,12 @@ class Blocks {
 };
 
 Blocks readWant(Reader& request) {
-    const Value value = request.optional("want", R"(["income","sensitivities","ledger","random","bridge","total"])");
+    const Value value =
+        request.optional("want", R"(["income","sensitivities","ledger","random","bridge","total"])");
     Blocks blocks;
     if (!value.present()) {
-        for (const Block block : {Block::income, Block::sensitivities, Block::ledger, Block::random, Block::bridge, Block::total}) {
+        for (const Block block : {Block::income, Block::sensitivities, Block::ledger, Block::random,
+                                  Block::bridge, Block::total}) {
             blocks.add(block);
         }
         return blocks;
@@ -254,6 +260,30 @@ void writeTotal(Writer& writer, const forward::OnQuantity& total) {
     writer.endObject();
 }
 
+/// Whether every figure on the whole quantity is a number; each figure a unit is.
+bool isFinite(const forward::OnQuantity& total) {
+    const double figures[] = {total.notionalBid.value_or(0.0),
+                              total.notionalOffer.value_or(0.0),
+                              total.hedgeUnits.bid,
+                              total.hedgeUnits.offer,
+                              total.margin,
+                              total.fundingBasisPoint,
+                              total.day.value_or(0.0),
+                              total.gap.value_or(0.0)};
+    return std::all_of(std::begin(figures), std::end(figures),
+                       [](double figure) { return std::isfinite(figure); });
+}
+
+void answerTotal(Writer& writer, Findings& findings, const forward::OnQuantity& total) {
+    if (!isFinite(total)) {
+        findings.faults(Place{},
+                        {{"/inquiry/quantity", "not-finite",
+                          "On this quantity the amounts are too large to be numbers; give a smaller one."}});
+        return;
+    }
+    writeTotal(writer, total);
+}
+
 void writeFigure(Writer& writer, std::string_view name, const std::variant<double, dates::Date>& figure) {
     writer.key(name);
     std::visit([&writer](const auto& value) { writer.value(value); }, figure);
@@ -282,23 +312,25 @@ void writeWorking(Writer& writer, const std::vector<forward::Step>& steps) {
 }
 
 /// Distributions that are left out should be known to be.
-void noticeLeftOut(Findings& findings, const std::vector<forward::IncomeLine>& lines, const forward::Schedule& schedule) {
+void noticeLeftOut(Findings& findings, const std::vector<forward::IncomeLine>& lines,
+                   const forward::Schedule& schedule) {
     for (const forward::IncomeLine& line : lines) {
         if (line.counted) {
             continue;
         }
         const bool late = line.ex > schedule.maturity;
-        findings.notices(Place{}, {{line.at + "/ex", line.reason,
-                                    "The distribution with ex date " + dates::toIso(line.ex) + " is left out: it falls " +
-                                        (late ? "after the maturity, " + dates::toIso(schedule.maturity)
-                                              : "on or before the day from which the hedge is held, " +
-                                                    dates::toIso(schedule.holdFrom)) +
-                                        "."}});
+        findings.notices(
+            Place{}, {{line.at + "/ex", line.reason,
+                       "The distribution with ex date " + dates::toIso(line.ex) + " is left out: it falls " +
+                           (late ? "after the maturity, " + dates::toIso(schedule.maturity)
+                                 : "on or before the day from which the hedge is held, " +
+                                       dates::toIso(schedule.holdFrom)) +
+                           "."}});
     }
 }
 
-void writeBlocks(Writer& writer, Findings& findings, const Market& market, const Inquiry& inquiry, const Quote& quote,
-                 const Blocks& blocks) {
+void writeBlocks(Writer& writer, Findings& findings, const Market& market, const Inquiry& inquiry,
+                 const Quote& quote, const Blocks& blocks) {
     const std::vector<forward::IncomeLine> lines =
         forward::incomeLines(market, quote.schedule, quote.fairInputs, quote.fair);
     noticeLeftOut(findings, lines, quote.schedule);
@@ -329,14 +361,15 @@ void writeBlocks(Writer& writer, Findings& findings, const Market& market, const
         writer.endObject();
     }
     if (blocks.has(Block::total)) {
-        writeTotal(writer, forward::onQuantity(inquiry, quote, sensitivities, random));
+        answerTotal(writer, findings, forward::onQuantity(inquiry, quote, sensitivities, random));
     }
     if (blocks.has(Block::working)) {
         writeWorking(writer, quote.steps);
     }
 }
 
-void answerQuote(const Market& market, const Inquiry& inquiry, const Blocks& blocks, Findings& findings, Writer& writer) {
+void answerQuote(const Market& market, const Inquiry& inquiry, const Blocks& blocks, Findings& findings,
+                 Writer& writer) {
     const outcome::Outcome<Quote> outcome = forward::quote(market, inquiry, blocks.has(Block::working));
     if (!outcome) {
         findings.faults(Place{}, outcome.faults());
@@ -356,7 +389,8 @@ void answerQuote(const Market& market, const Inquiry& inquiry, const Blocks& blo
 Calculation readQuote(Reader& request) {
     const Blocks blocks = readWant(request);
     const auto market = readMarket(request.required("market", "the market that the forward is priced in"));
-    const auto inquiry = readInquiry(request.required("inquiry", "what the client asks for, {client, quantity, maturity, margin}"));
+    const auto inquiry = readInquiry(
+        request.required("inquiry", "what the client asks for, {client, quantity, maturity, margin}"));
     if (!market || !inquiry) {
         return {};
     }

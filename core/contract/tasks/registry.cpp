@@ -8,12 +8,16 @@ namespace forwright::contract {
 Calculation readQuote(Reader& request);
 Calculation readTenors(Reader& request);
 Calculation readPath(Reader& request);
+Calculation readSimulate(Reader& request);
+Calculation readFutures(Reader& request);
+Calculation readHedgeCover(Reader& request);
+Calculation readCompare(Reader& request);
 
 std::span<const Task> tasks() {
     static constexpr std::array all{
-        Task{"quote", readQuote},
-        Task{"tenors", readTenors},
-        Task{"path", readPath},
+        Task{"quote", readQuote},       Task{"tenors", readTenors},   Task{"path", readPath},
+        Task{"simulate", readSimulate}, Task{"futures", readFutures}, Task{"hedge-cover", readHedgeCover},
+        Task{"compare", readCompare},
     };
     return all;
 }

@@ -53,14 +53,17 @@ std::vector<double> readMoves(const Value& list, const Range& range) {
 std::optional<desk::GridAsked> readGrid(const Value& value) {
     Reader object{value};
     const auto maturity = readMaturity(object);
-    std::vector<double> spot = readMoves(object.required("spot", "relative moves of spot, as in [-0.05, 0, 0.05]"), spotMoves);
-    std::vector<double> funding =
-        readMoves(object.required("funding", "moves of funding rates, as in [-0.005, 0, 0.005]"), fundingMoves);
+    std::vector<double> spot =
+        readMoves(object.required("spot", "relative moves of spot, as in [-0.05, 0, 0.05]"), spotMoves);
+    std::vector<double> funding = readMoves(
+        object.required("funding", "moves of funding rates, as in [-0.005, 0, 0.005]"), fundingMoves);
     if (spot.size() * funding.size() > mostRows) {
         value.fault("too-many-rows", "A grid may have " + std::to_string(mostRows) + " cells; this one has " +
-                                         std::to_string(spot.size()) + " by " + std::to_string(funding.size()) + ".");
+                                         std::to_string(spot.size()) + " by " +
+                                         std::to_string(funding.size()) + ".");
     }
-    return maturity ? std::optional{desk::GridAsked{*maturity, std::move(spot), std::move(funding)}} : std::nullopt;
+    return maturity ? std::optional{desk::GridAsked{*maturity, std::move(spot), std::move(funding)}}
+                    : std::nullopt;
 }
 
 void writeRow(Writer& writer, const desk::TenorRow& row) {
@@ -75,7 +78,8 @@ void writeRow(Writer& writer, const desk::TenorRow& row) {
     writer.endObject();
 }
 
-void answerTenors(const forward::Market& market, const desk::TenorsAsked& asked, Findings& findings, Writer& writer) {
+void answerTenors(const forward::Market& market, const desk::TenorsAsked& asked, Findings& findings,
+                  Writer& writer) {
     const outcome::Outcome<desk::Tenors> outcome = desk::tenors(market, asked);
     if (!outcome) {
         findings.faults(Place{}, outcome.faults());

@@ -67,7 +67,10 @@ export async function giveQuote(): Promise<void> {
     };
     await book.add('quotes', { ...unsealed, seal: await seal(unsealed) });
     await readBook();
-    bookNews.value = { text: 'Given: the quote is in the book, with everything that makes its number again.', wrong: false };
+    bookNews.value = {
+      text: 'Given: the quote is in the book, with everything that makes its number again.',
+      wrong: false,
+    };
   } catch {
     bookNews.value = { text: noBook, wrong: true };
   }
@@ -88,7 +91,9 @@ const bookShape: Shape = {
   members: {
     format: { oneOf: [fileFormat] },
     quotes: {
-      list: { members: { id: text, givenAt: text, version: text, request: text, answer: text, before: text, seal: text } },
+      list: {
+        members: { id: text, givenAt: text, version: text, request: text, answer: text, before: text, seal: text },
+      },
     },
   },
 };

@@ -47,10 +47,23 @@ export function ConventionsCard({ alwaysOpen }: CardView) {
         {pair && <Field label="Base currency" path="market/asset/base" kind="text" placeholder="USD" />}
       </div>
       <div class="field-row">
-        <Field label="Settles after" path="market/asset/lag" at="/market/asset/settlementLag" kind="count" unit="days" whole />
+        <Field
+          label="Settles after"
+          path="market/asset/lag"
+          at="/market/asset/settlementLag"
+          kind="count"
+          unit="days"
+          whole
+        />
         <Field label="Tick" path="market/asset/tick" kind="price" />
       </div>
-      <Field label="Calendars" path="market/asset/calendars" kind="text" whole hint="As EUTA USNY GBLO; empty is weekends only." />
+      <Field
+        label="Calendars"
+        path="market/asset/calendars"
+        kind="text"
+        whole
+        hint="As EUTA USNY GBLO; empty is weekends only."
+      />
       <Field
         label="Calendars of the settlement days"
         path="market/asset/lagCalendars"

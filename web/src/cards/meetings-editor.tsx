@@ -10,7 +10,14 @@ import { valueAt } from '../store/paths';
 
 const moveColumns = [
   { name: 'by', label: 'Move', unit: 'bp', holds: 'basis-points', called: ['by', 'move', 'bp', 'change'], size: 6 },
-  { name: 'probability', label: 'Odds', unit: '%', holds: 'percent', called: ['probability', 'odds', 'chance'], size: 6 },
+  {
+    name: 'probability',
+    label: 'Odds',
+    unit: '%',
+    holds: 'percent',
+    called: ['probability', 'odds', 'chance'],
+    size: 6,
+  },
 ] as const;
 
 function Meeting({ path, at, number, remove }: { path: string; at: string; number: number; remove: () => void }) {
@@ -77,7 +84,12 @@ export function MeetingsEditor({ path, at }: { readonly path: string; readonly a
           path={`${rowsPath}/${index}`}
           at={`${at}/meetings/${indexes[index] ?? 'new'}`}
           number={index + 1}
-          remove={() => edit(rowsPath, rows.filter((_, place) => place !== index))}
+          remove={() =>
+            edit(
+              rowsPath,
+              rows.filter((_, place) => place !== index),
+            )
+          }
         />
       ))}
       {listFault !== null && <p class="field-error">{listFault.message}</p>}

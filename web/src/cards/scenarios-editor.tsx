@@ -27,7 +27,12 @@ export function ScenariosEditor({ path, at }: { readonly path: string; readonly 
               <button
                 type="button"
                 class="quiet"
-                onClick={() => edit(rowsPath, rows.filter((_, other) => other !== index))}
+                onClick={() =>
+                  edit(
+                    rowsPath,
+                    rows.filter((_, other) => other !== index),
+                  )
+                }
               >
                 Take out
               </button>

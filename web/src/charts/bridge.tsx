@@ -2,7 +2,7 @@ import { scaleLinear } from 'd3-scale';
 import { useState } from 'preact/hooks';
 import { formatNumber, formatSigned } from '../format';
 import type { Precision } from '../format';
-import { quoteAnswer } from '../model/view';
+import { settledAnswer } from '../model/view';
 import type { BridgeStep, QuoteResult, Side } from '../model/view';
 import { pricePrecision } from '../quote/words';
 import { bridgeName } from './bridge-names';
@@ -121,7 +121,7 @@ function sideShown(bridge: QuoteResult['bridge'], chosen: Side): Side {
 /** The way from spot over the fair forward to what the client is told. */
 export function Bridge() {
   const [chosen, setChosen] = useState<Side>('offer');
-  const { good, stale } = quoteAnswer.value;
+  const { good, stale } = settledAnswer.value;
   const bridge = good?.result.bridge;
   const side = sideShown(bridge, chosen);
   const steps = bridge?.[side];

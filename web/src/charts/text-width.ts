@@ -1,5 +1,6 @@
 /** How wide a text will be drawn, so that what stands beside it can be laid out. */
 let pen: CanvasRenderingContext2D | null | undefined;
+let family: string | undefined;
 const widths = new Map<string, number>();
 
 /** Pixels; about right where there is nothing to measure with. */
@@ -10,7 +11,8 @@ export function textWidth(text: string, size: number, weight = 400): number {
   if (pen === undefined)
     pen = typeof document === 'undefined' ? null : document.createElement('canvas').getContext('2d');
   if (!pen) return text.length * size * 0.6;
-  pen.font = `${weight} ${size}px ${getComputedStyle(document.body).fontFamily}`;
+  family ??= getComputedStyle(document.body).fontFamily;
+  pen.font = `${weight} ${size}px ${family}`;
   const width = pen.measureText(text).width;
   if (widths.size > 2000) widths.clear();
   widths.set(key, width);

@@ -91,7 +91,7 @@ async function openInWorker({ kind, script, given }: Parts): Promise<Core> {
   });
   URL.revokeObjectURL(source);
 
-  const waiting = new Map<number, { done(answer: string): void; failed(reason: Error): void }>();
+  const waiting = new Map<number, { done: (answer: string) => void; failed: (reason: Error) => void }>();
   worker.onmessage = (event) => {
     const { id, answer } = event.data as { id: number; answer: string };
     waiting.get(id)?.done(answer);

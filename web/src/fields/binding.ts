@@ -5,7 +5,7 @@ export interface Binding {
   /** Where it stands in the draft; undo goes back to the field by it. */
   readonly path: string;
   readonly text: string;
-  set(text: string): void;
+  readonly set: (text: string) => void;
 }
 
 /** The text at a path of the deal on screen. */

@@ -19,7 +19,11 @@ interface FieldProps {
 export function Field({ label, path, at = `/${path}`, kind, unit, hint, whole = false, placeholder }: FieldProps) {
   const id = useId();
   const fault = faultAt(at, whole);
-  const notes = [unit !== undefined && `${id}-unit`, hint !== undefined && `${id}-hint`, fault !== null && `${id}-error`];
+  const notes = [
+    unit !== undefined && `${id}-unit`,
+    hint !== undefined && `${id}-hint`,
+    fault !== null && `${id}-error`,
+  ];
   return (
     <div class="field">
       <label for={id}>{label}</label>

@@ -9,7 +9,9 @@ function focusAndSelect(element: HTMLElement): void {
 /** The next field of the page after this one; from the last, the first. */
 export function goOn(from: HTMLElement): void {
   const fields = [...document.querySelectorAll<HTMLElement>(`main ${fieldSelector}`)].filter(
-    (field) => field.getClientRects().length > 0 && !(field instanceof HTMLInputElement && field.type === 'radio' && !field.checked),
+    (field) =>
+      field.getClientRects().length > 0 &&
+      !(field instanceof HTMLInputElement && field.type === 'radio' && !field.checked),
   );
   const next = fields[fields.indexOf(from) + 1] ?? fields[0];
   if (next !== undefined) focusAndSelect(next);

@@ -54,7 +54,11 @@ export function Rows({ name, rowName, path, at, columns, before = 0 }: RowsProps
     if (index < rows.length) edit(`${path}/${index}/${column}`, text);
     else edit(path, [...rows, { ...shown[index], [column]: text }]);
   };
-  const remove = (index: number): void => edit(path, rows.filter((_, place) => place !== index));
+  const remove = (index: number): void =>
+    edit(
+      path,
+      rows.filter((_, place) => place !== index),
+    );
 
   const paste = (index: number) => (event: ClipboardEvent) => {
     const text = event.clipboardData?.getData('text/plain') ?? '';

@@ -11,14 +11,17 @@ const restMilliseconds = 300;
 /** A sentence where this browser does not keep what is typed. */
 export const notKept = signal<string | null>(null);
 
-/** What was kept; null where there is nothing, or nothing that can be read. */
+/** What was kept; null where there is nothing, or nothing that can be read: that is set aside, and said. */
 export function keptDraft(): Draft | null {
   try {
     const text = localStorage.getItem(storageName);
-    const parsed = text === null ? null : parseJson(text);
-    if (parsed === null || !parsed.ok) return null;
-    const state = readState(parsed.value, preferences.peek().decimal);
-    return state.ok ? state.value : null;
+    if (text === null) return null;
+    const parsed = parseJson(text);
+    const state = parsed.ok ? readState(parsed.value, preferences.peek().decimal) : parsed;
+    if (state.ok) return state.value;
+    localStorage.setItem(`${storageName}.unread`, text);
+    notKept.value = `What was typed here before could not be read and is set aside. ${state.message}`;
+    return null;
   } catch {
     return null;
   }

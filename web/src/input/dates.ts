@@ -1,5 +1,5 @@
 /** Dates and tenors as people write them. */
-import { notUnderstood, understood, type Parsed } from "./parsed";
+import { notUnderstood, understood, type Parsed } from './parsed';
 
 export interface DateStyle {
   /** BCP 47: the names of months, and whether the day or the month comes first in 3/4/27. */
@@ -9,18 +9,18 @@ export interface DateStyle {
 }
 
 const englishMonths = [
-  "january",
-  "february",
-  "march",
-  "april",
-  "may",
-  "june",
-  "july",
-  "august",
-  "september",
-  "october",
-  "november",
-  "december",
+  'january',
+  'february',
+  'march',
+  'april',
+  'may',
+  'june',
+  'july',
+  'august',
+  'september',
+  'october',
+  'november',
+  'december',
 ];
 
 const monthNames = new Map<string, readonly string[][]>();
@@ -30,12 +30,12 @@ function namesOfMonths(locale: string): readonly string[][] {
   const known = monthNames.get(locale);
   if (known !== undefined) return known;
   const names = englishMonths.map((english, month) => {
-    const local = (["short", "long"] as const).map((style) =>
-      new Intl.DateTimeFormat(locale, { month: style, day: "numeric", timeZone: "UTC" })
+    const local = (['short', 'long'] as const).map((style) =>
+      new Intl.DateTimeFormat(locale, { month: style, day: 'numeric', timeZone: 'UTC' })
         .formatToParts(Date.UTC(2024, month, 1))
-        .filter((part) => part.type === "month")
-        .map((part) => part.value.toLowerCase().replace(/\.$/, ""))
-        .join(""),
+        .filter((part) => part.type === 'month')
+        .map((part) => part.value.toLowerCase().replace(/\.$/, ''))
+        .join(''),
     );
     return [english, ...local];
   });
@@ -44,7 +44,7 @@ function namesOfMonths(locale: string): readonly string[][] {
 }
 
 function monthNamed(word: string, locale: string): number | null {
-  const name = word.toLowerCase().replace(/\.$/, "");
+  const name = word.toLowerCase().replace(/\.$/, '');
   if (!/\p{L}{3}/u.test(name)) return null;
   const months = namesOfMonths(locale)
     .map((names, index) => (names.some((full) => full === name || full.startsWith(name)) ? index + 1 : 0))
@@ -53,10 +53,10 @@ function monthNamed(word: string, locale: string): number | null {
 }
 
 function monthComesFirst(locale: string): boolean {
-  const parts = new Intl.DateTimeFormat(locale, { day: "numeric", month: "numeric", year: "numeric", timeZone: "UTC" })
+  const parts = new Intl.DateTimeFormat(locale, { day: 'numeric', month: 'numeric', year: 'numeric', timeZone: 'UTC' })
     .formatToParts(Date.UTC(2024, 11, 25))
     .map((part) => part.type);
-  return parts.indexOf("month") < parts.indexOf("day") && parts.indexOf("day") < parts.indexOf("year");
+  return parts.indexOf('month') < parts.indexOf('day') && parts.indexOf('day') < parts.indexOf('year');
 }
 
 export function daysInMonth(year: number, month: number): number {
@@ -64,16 +64,16 @@ export function daysInMonth(year: number, month: number): number {
 }
 
 function isoOf(year: number, month: number, day: number): string {
-  const two = (value: number): string => String(value).padStart(2, "0");
-  return `${String(year).padStart(4, "0")}-${two(month)}-${two(day)}`;
+  const two = (value: number): string => String(value).padStart(2, '0');
+  return `${String(year).padStart(4, '0')}-${two(month)}-${two(day)}`;
 }
 
 function checked(text: string, year: number, month: number, day: number): Parsed<string> {
   if (month < 1 || month > 12)
-    return notUnderstood("not-a-date", `“${text}” is not a date: there is no month ${month}.`);
+    return notUnderstood('not-a-date', `“${text}” is not a date: there is no month ${month}.`);
   const last = daysInMonth(year, month);
   if (day < 1 || day > last)
-    return notUnderstood("not-a-date", `“${text}” is not a date: that month has ${last} days.`);
+    return notUnderstood('not-a-date', `“${text}” is not a date: that month has ${last} days.`);
   return understood(isoOf(year, month, day));
 }
 
@@ -96,15 +96,18 @@ function nextTime(text: string, month: number, day: number, after: string): Pars
 export function readDate(text: string, style: DateStyle): Parsed<string> {
   const typed = text.trim();
   const words = typed
-    .replace(/^\p{L}+\.?,?\s+(?=\d)/u, (first) => (monthNamed(first.replace(/[,\s]/g, ""), style.locale) === null ? "" : first))
-    .replace(/(\d)(st|nd|rd|th)\b/i, "$1");
+    .replace(/^\p{L}+\.?,?\s+(?=\d)/u, (first) =>
+      monthNamed(first.replace(/[,\s]/g, ''), style.locale) === null ? '' : first,
+    )
+    .replace(/(\d)(st|nd|rd|th)\b/i, '$1');
 
-  let match = /^(\d{4})[-/.](\d{1,2})[-/.](\d{1,2})(?:[T ]\d\d:\d\d.*)?$/.exec(words) ?? /^(\d{4})(\d\d)(\d\d)$/.exec(words);
+  let match =
+    /^(\d{4})[-/.](\d{1,2})[-/.](\d{1,2})(?:[T ]\d\d:\d\d.*)?$/.exec(words) ?? /^(\d{4})(\d\d)(\d\d)$/.exec(words);
   if (match !== null) return checked(typed, Number(match[1]), Number(match[2]), Number(match[3]));
 
   match = /^(\d{1,2})[\s.\-/]*(\p{L}+)\.?(?:[\s.,\-/]*(\d{4}|\d{2}))?$/u.exec(words);
   if (match !== null) {
-    const month = monthNamed(match[2] ?? "", style.locale);
+    const month = monthNamed(match[2] ?? '', style.locale);
     if (month !== null) {
       if (match[3] === undefined) return nextTime(typed, month, Number(match[1]), style.after);
       return checked(typed, fullYear(match[3]), month, Number(match[1]));
@@ -113,42 +116,42 @@ export function readDate(text: string, style: DateStyle): Parsed<string> {
 
   match = /^(\p{L}+)\.?[\s.\-/]*(\d{1,2})(?:(?:\s*,\s*|\s+|[-/])(\d{4}|\d{2}))?$/u.exec(words);
   if (match !== null) {
-    const month = monthNamed(match[1] ?? "", style.locale);
+    const month = monthNamed(match[1] ?? '', style.locale);
     if (month !== null) {
       if (match[3] === undefined) return nextTime(typed, month, Number(match[2]), style.after);
       return checked(typed, fullYear(match[3]), month, Number(match[2]));
     }
   }
 
-  match = /^(\d{1,2})[./\-](\d{1,2})[./\-](\d{4}|\d{2})$/.exec(words);
+  match = /^(\d{1,2})[./-](\d{1,2})[./-](\d{4}|\d{2})$/.exec(words);
   if (match !== null) {
     const [one, two] = [Number(match[1]), Number(match[2])];
-    const monthFirst = two > 12 || (one <= 12 && !typed.includes(".") && monthComesFirst(style.locale));
+    const monthFirst = two > 12 || (one <= 12 && !typed.includes('.') && monthComesFirst(style.locale));
     const [month, day] = monthFirst ? [one, two] : [two, one];
-    return checked(typed, fullYear(match[3] ?? ""), month, day);
+    return checked(typed, fullYear(match[3] ?? ''), month, day);
   }
-  return notUnderstood("not-a-date", `“${typed}” is not a date: write it as 18 Jun 27 or 2027-06-18.`);
+  return notUnderstood('not-a-date', `“${typed}” is not a date: write it as 18 Jun 27 or 2027-06-18.`);
 }
 
 const tenorUnits: Readonly<Record<string, string>> = {
-  d: "D",
-  day: "D",
-  days: "D",
-  w: "W",
-  week: "W",
-  weeks: "W",
-  m: "M",
-  month: "M",
-  months: "M",
-  y: "Y",
-  year: "Y",
-  years: "Y",
+  d: 'D',
+  day: 'D',
+  days: 'D',
+  w: 'W',
+  week: 'W',
+  weeks: 'W',
+  m: 'M',
+  month: 'M',
+  months: 'M',
+  y: 'Y',
+  year: 'Y',
+  years: 'Y',
 };
 
 /** Reads `3M`, `3 m`, `2w`, `10 days`, `1 year` as the contract's tenor; null where the text is no tenor. */
 export function readTenor(text: string): string | null {
   const match = /^(\d{1,5})\s*([a-z]+)$/i.exec(text.trim());
-  const unit = match === null ? undefined : tenorUnits[(match[2] ?? "").toLowerCase()];
+  const unit = match === null ? undefined : tenorUnits[(match[2] ?? '').toLowerCase()];
   return match === null || unit === undefined ? null : `${Number(match[1])}${unit}`;
 }
 
@@ -157,6 +160,6 @@ export function readMaturity(text: string, style: DateStyle): Parsed<string> {
   const tenor = readTenor(text);
   if (tenor !== null) return understood(tenor);
   const date = readDate(text, style);
-  if (date.ok || date.code !== "not-a-date" || !date.message.endsWith("2027-06-18.")) return date;
-  return notUnderstood("not-a-date", `“${text.trim()}” is neither a date nor a tenor: write it as 18 Jun 27 or 3M.`);
+  if (date.ok || date.code !== 'not-a-date' || !date.message.endsWith('2027-06-18.')) return date;
+  return notUnderstood('not-a-date', `“${text.trim()}” is neither a date nor a tenor: write it as 18 Jun 27 or 3M.`);
 }

@@ -1,13 +1,13 @@
 /** Pasted cells sorted into the columns of a table of the page: by the heading where there is one, else by what they are. */
-import { readDate, readTenor, type DateStyle } from "./dates";
-import { readNumber, type NumberKind } from "./quantities";
-import { dateToText } from "./step";
-import type { DecimalSign } from "./decimal";
-import { cutIntoCells, signOf, swapSigns } from "./table";
+import { readDate, readTenor, type DateStyle } from './dates';
+import { readNumber, type NumberKind } from './quantities';
+import { dateToText } from './step';
+import type { DecimalSign } from './decimal';
+import { cutIntoCells, signOf, swapSigns } from './table';
 
 export interface Column {
   readonly name: string;
-  readonly holds: "date" | "date-or-tenor" | NumberKind;
+  readonly holds: 'date' | 'date-or-tenor' | NumberKind;
   /** What a heading may call it, lower case. */
   readonly called: readonly string[];
 }
@@ -23,19 +23,19 @@ function isNumber(cell: string, kind: NumberKind, sign: DecimalSign): boolean {
 }
 
 function fits(cell: string, column: Column, style: DateStyle, sign: DecimalSign): boolean {
-  if (column.holds === "date") return isDate(cell, style);
-  if (column.holds === "date-or-tenor") return isDate(cell, style) || readTenor(cell) !== null;
+  if (column.holds === 'date') return isDate(cell, style);
+  if (column.holds === 'date-or-tenor') return isDate(cell, style) || readTenor(cell) !== null;
   return isNumber(cell, column.holds, sign);
 }
 
 function columnCalled(heading: string, columns: readonly Column[]): Column | null {
   const words = heading
     .toLowerCase()
-    .replace(/[^\p{L}]+/gu, " ")
+    .replace(/[^\p{L}]+/gu, ' ')
     .trim();
   const whole = columns.find((column) => column.called.includes(words));
   if (whole !== undefined) return whole;
-  return columns.find((column) => column.called.some((call) => words.split(" ").includes(call))) ?? null;
+  return columns.find((column) => column.called.some((call) => words.split(' ').includes(call))) ?? null;
 }
 
 /** The column of each cell, from the heading; null where the first row is no heading. */
@@ -60,7 +60,7 @@ function fromValues(
 ): readonly (Column | null)[] {
   let next = 0;
   return row.map((cell) => {
-    if (cell === "") {
+    if (cell === '') {
       next += 1;
       return columns[next - 1] ?? null;
     }
@@ -94,7 +94,7 @@ export function readRows(
   const cells = cutIntoCells(text);
   const all = cells.flat();
   const first = monthFirst(all);
-  const dates: DateStyle = first === null ? style : { ...style, locale: first ? "en-US" : "en-GB" };
+  const dates: DateStyle = first === null ? style : { ...style, locale: first ? 'en-US' : 'en-GB' };
   const sign = signOf(
     all.filter((cell) => !isDate(cell, dates)),
     own,
@@ -105,7 +105,7 @@ export function readRows(
   const placed = heading ?? fromValues(widest, columns, dates, sign);
 
   return rows.map((row) => {
-    const made: Record<string, string> = Object.fromEntries(columns.map((column) => [column.name, ""]));
+    const made: Record<string, string> = Object.fromEntries(columns.map((column) => [column.name, '']));
     row.forEach((cell, index) => {
       const column = placed[index];
       if (column !== null && column !== undefined) made[column.name] = written(cell, column);
@@ -114,7 +114,7 @@ export function readRows(
   });
 
   function written(cell: string, column: Column): string {
-    if (column.holds === "date" || column.holds === "date-or-tenor") {
+    if (column.holds === 'date' || column.holds === 'date-or-tenor') {
       const date = readDate(cell, dates);
       return date.ok ? dateToText(date.value) : cell;
     }

@@ -1,9 +1,9 @@
 /** Simulated discount factors brought from elsewhere: a heading of dates, then one row of factors a path. */
-import type { DateStyle } from "./dates";
-import { readDate } from "./dates";
-import { readDecimal, toNumber, type DecimalSign } from "./decimal";
-import { notUnderstood, understood, type Parsed } from "./parsed";
-import { cutIntoCells, signOf } from "./table";
+import type { DateStyle } from './dates';
+import { readDate } from './dates';
+import { readDecimal, toNumber, type DecimalSign } from './decimal';
+import { notUnderstood, understood, type Parsed } from './parsed';
+import { cutIntoCells, signOf } from './table';
 
 export interface Samples {
   readonly dates: readonly string[];
@@ -30,7 +30,7 @@ export function readSamples(text: string, style: DateStyle, own: DecimalSign): P
 function freshlyRead(text: string, style: DateStyle, own: DecimalSign): Parsed<Samples> {
   const [heading, ...rows] = cutIntoCells(text);
   if (heading === undefined)
-    return notUnderstood("no-samples", "Paste a heading of dates, then one row of discount factors for each path.");
+    return notUnderstood('no-samples', 'Paste a heading of dates, then one row of discount factors for each path.');
   const dates: string[] = [];
   for (const cell of heading) {
     const date = readDate(cell, style);
@@ -38,13 +38,13 @@ function freshlyRead(text: string, style: DateStyle, own: DecimalSign): Parsed<S
     dates.push(date.value);
   }
   if (rows.length === 0)
-    return notUnderstood("no-samples", "Below the heading of dates, paste one row of discount factors for each path.");
+    return notUnderstood('no-samples', 'Below the heading of dates, paste one row of discount factors for each path.');
   const sign = signOf(rows.slice(0, 50).flat(), own);
   const factors: number[][] = [];
   for (const [index, row] of rows.entries()) {
     if (row.length !== dates.length)
       return notUnderstood(
-        "row-length",
+        'row-length',
         `Row ${index + 2} has ${row.length} factors where the heading has ${dates.length} dates.`,
       );
     const numbers: number[] = [];

@@ -2,11 +2,11 @@
  * From what was typed to the request. A text that cannot be read is sent as it stands, so that the core names it
  * among all the request's faults; the page's own sentence, which knows what may have been meant, is shown in its place.
  */
-import { readMaturity, readDate, type DateStyle } from "../input/dates";
-import type { DecimalSign } from "../input/decimal";
-import { readSamples } from "../input/samples";
-import { readNumber, type NumberKind } from "../input/quantities";
-import type { Parsed } from "../input/parsed";
+import { readMaturity, readDate, type DateStyle } from '../input/dates';
+import type { DecimalSign } from '../input/decimal';
+import { readSamples } from '../input/samples';
+import { readNumber, type NumberKind } from '../input/quantities';
+import type { Parsed } from '../input/parsed';
 import type {
   CurveDraft,
   DealDraft,
@@ -16,10 +16,10 @@ import type {
   PillarsDraft,
   RateDraft,
   ShortRateDraft,
-} from "./draft";
-import { isBlank } from "./draft";
-import type { Curve, Funding, Market, QuoteRequest } from "./request";
-import type { Fault } from "./view";
+} from './draft';
+import { isBlank } from './draft';
+import type { Curve, Funding, Market, QuoteRequest } from './request';
+import type { Fault } from './view';
 
 export interface Built<Request> {
   readonly request: Request;
@@ -32,15 +32,7 @@ export interface Writing {
 }
 
 /** All blocks of a quote: the page shows every one of them, or prints it. */
-export const everyBlock = [
-  "income",
-  "sensitivities",
-  "ledger",
-  "random",
-  "bridge",
-  "total",
-  "working",
-] as const;
+export const everyBlock = ['income', 'sensitivities', 'ledger', 'random', 'bridge', 'total', 'working'] as const;
 
 /** What stands in a request where a text could not be read: the text itself. */
 type Sent<T> = T | string | undefined;
@@ -53,8 +45,8 @@ class Reader {
     private readonly writing: Writing,
     asOf: string,
   ) {
-    const read = readDate(asOf, { locale: writing.locale, after: "" });
-    this.dates = { locale: writing.locale, after: read.ok ? read.value : "" };
+    const read = readDate(asOf, { locale: writing.locale, after: '' });
+    this.dates = { locale: writing.locale, after: read.ok ? read.value : '' };
   }
 
   number(text: string, kind: NumberKind, at: string): Sent<number> {
@@ -83,7 +75,7 @@ class Reader {
   }
 
   private take<T>(text: string, at: string, read: (typed: string) => Parsed<T>): Sent<T> {
-    if (text.trim() === "") return undefined;
+    if (text.trim() === '') return undefined;
     const parsed = read(text);
     if (parsed.ok) return parsed.value;
     this.faults.push({ at, code: parsed.code, message: parsed.message });
@@ -97,11 +89,7 @@ function members(of: Readonly<Record<string, unknown>>): Record<string, unknown>
   return kept.length === 0 ? undefined : Object.fromEntries(kept);
 }
 
-function sent<Row extends object, Out>(
-  rows: readonly Row[],
-  at: string,
-  make: (row: Row, at: string) => Out,
-): Out[] {
+function sent<Row extends object, Out>(rows: readonly Row[], at: string, make: (row: Row, at: string) => Out): Out[] {
   return rows.filter((row) => !isBlank(row)).map((row, index) => make(row, `${at}/${index}`));
 }
 
@@ -110,10 +98,8 @@ function listOrNothing<T>(list: readonly T[]): readonly T[] | undefined {
 }
 
 function rate(draft: RateDraft, at: string, read: Reader): object | undefined {
-  const value = read.number(draft.rate, "percent", `${at}/rate`);
-  return value === undefined
-    ? undefined
-    : { rate: value, compounding: draft.compounding, dayCount: draft.dayCount };
+  const value = read.number(draft.rate, 'percent', `${at}/rate`);
+  return value === undefined ? undefined : { rate: value, compounding: draft.compounding, dayCount: draft.dayCount };
 }
 
 /** A rate that must be there: left out, the core says so at its own place. */
@@ -122,33 +108,33 @@ function neededRate(draft: RateDraft, at: string, read: Reader): object {
 }
 
 function pillars(draft: PillarsDraft, at: string, read: Reader): object {
-  const zero = draft.quote === "zero";
+  const zero = draft.quote === 'zero';
   return {
-    kind: "pillars",
+    kind: 'pillars',
     quote: draft.quote,
     ...(zero ? { compounding: draft.compounding, dayCount: draft.dayCount } : {}),
     interpolation: draft.interpolation,
     pillars: sent(draft.rows, `${at}/pillars`, (row, place) =>
       members({
         at: read.maturity(row.at, `${place}/at`),
-        value: read.number(row.value, zero ? "percent" : "plain", `${place}/value`),
+        value: read.number(row.value, zero ? 'percent' : 'plain', `${place}/value`),
       }),
     ),
   };
 }
 
 function fixedCurve(draft: FixedCurveDraft, at: string, read: Reader): object {
-  return draft.kind === "flat" ? neededRate(draft.flat, at, read) : pillars(draft.pillars, at, read);
+  return draft.kind === 'flat' ? neededRate(draft.flat, at, read) : pillars(draft.pillars, at, read);
 }
 
 function shortRate(model: string, draft: ShortRateDraft, volatility: NumberKind, at: string, read: Reader): object {
   return {
-    kind: "random",
+    kind: 'random',
     model,
     ...members({
-      r0: read.number(draft.r0, "percent", `${at}/r0`),
-      meanReversion: read.number(draft.meanReversion, "plain", `${at}/meanReversion`),
-      longRun: read.number(draft.longRun, "percent", `${at}/longRun`),
+      r0: read.number(draft.r0, 'percent', `${at}/r0`),
+      meanReversion: read.number(draft.meanReversion, 'plain', `${at}/meanReversion`),
+      longRun: read.number(draft.longRun, 'percent', `${at}/longRun`),
       volatility: read.number(draft.volatility, volatility, `${at}/volatility`),
     }),
   };
@@ -156,58 +142,58 @@ function shortRate(model: string, draft: ShortRateDraft, volatility: NumberKind,
 
 function randomCurve(draft: CurveDraft, at: string, read: Reader): object {
   switch (draft.model) {
-    case "vasicek":
-      return shortRate("vasicek", draft.vasicek, "percent", at, read);
-    case "cox-ingersoll-ross":
-      return shortRate("cox-ingersoll-ross", draft.coxIngersollRoss, "plain", at, read);
-    case "ho-lee":
-    case "hull-white": {
-      const own = draft.model === "ho-lee" ? draft.hoLee : draft.hullWhite;
+    case 'vasicek':
+      return shortRate('vasicek', draft.vasicek, 'percent', at, read);
+    case 'cox-ingersoll-ross':
+      return shortRate('cox-ingersoll-ross', draft.coxIngersollRoss, 'plain', at, read);
+    case 'ho-lee':
+    case 'hull-white': {
+      const own = draft.model === 'ho-lee' ? draft.hoLee : draft.hullWhite;
       return {
-        kind: "random",
+        kind: 'random',
         model: draft.model,
         ...members({
           meanReversion:
-            draft.model === "hull-white"
-              ? read.number(draft.hullWhite.meanReversion, "plain", `${at}/meanReversion`)
+            draft.model === 'hull-white'
+              ? read.number(draft.hullWhite.meanReversion, 'plain', `${at}/meanReversion`)
               : undefined,
-          volatility: read.number(own.volatility, "percent", `${at}/volatility`),
+          volatility: read.number(own.volatility, 'percent', `${at}/volatility`),
           fit: fixedCurve({ kind: own.fit, flat: draft.flat, pillars: draft.pillars }, `${at}/fit`, read),
         }),
       };
     }
-    case "policy-meetings":
+    case 'policy-meetings':
       return {
-        kind: "random",
-        model: "policy-meetings",
-        ...members({ overnight: read.number(draft.meetings.overnight, "percent", `${at}/overnight`) }),
+        kind: 'random',
+        model: 'policy-meetings',
+        ...members({ overnight: read.number(draft.meetings.overnight, 'percent', `${at}/overnight`) }),
         meetings: sent(draft.meetings.rows, `${at}/meetings`, (row, place) => ({
           ...members({ date: read.date(row.date, `${place}/date`) }),
           moves: sent(row.moves, `${place}/moves`, (move, movePlace) =>
             members({
-              by: read.number(move.by, "basis-points", `${movePlace}/by`),
-              probability: read.number(move.probability, "percent", `${movePlace}/probability`),
+              by: read.number(move.by, 'basis-points', `${movePlace}/by`),
+              probability: read.number(move.probability, 'percent', `${movePlace}/probability`),
             }),
           ),
         })),
       };
-    case "scenarios":
+    case 'scenarios':
       return {
-        kind: "random",
-        model: "scenarios",
+        kind: 'random',
+        model: 'scenarios',
         scenarios: draft.scenarios.rows.map((row, index) => ({
-          ...members({ weight: read.number(row.weight, "percent", `${at}/scenarios/${index}/weight`) }),
+          ...members({ weight: read.number(row.weight, 'percent', `${at}/scenarios/${index}/weight`) }),
           curve: fixedCurve(row.curve, `${at}/scenarios/${index}/curve`, read),
         })),
       };
-    case "samples":
-      return { kind: "random", model: "samples", ...read.samples(draft.samples.text, at) };
+    case 'samples':
+      return { kind: 'random', model: 'samples', ...read.samples(draft.samples.text, at) };
   }
 }
 
 function curve(draft: CurveDraft, at: string, read: Reader): Curve {
   const made =
-    draft.kind === "random"
+    draft.kind === 'random'
       ? randomCurve(draft, at, read)
       : fixedCurve({ kind: draft.kind, flat: draft.flat, pillars: draft.pillars }, at, read);
   return made as Curve;
@@ -217,69 +203,68 @@ function funding(draft: FundingDraft, at: string, read: Reader): Funding {
   return {
     curve: curve(draft.curve, `${at}/curve`, read),
     ...members({
-      lendSpread: read.number(draft.lendSpread, "basis-points", `${at}/lendSpread`),
-      borrowSpread: read.number(draft.borrowSpread, "basis-points", `${at}/borrowSpread`),
+      lendSpread: read.number(draft.lendSpread, 'basis-points', `${at}/lendSpread`),
+      borrowSpread: read.number(draft.borrowSpread, 'basis-points', `${at}/borrowSpread`),
     }),
   };
 }
 
 /** Codes apart by spaces or commas; `weekends` is the empty list. */
 function codes(text: string): readonly string[] | undefined {
-  const words = text.split(/[\s,;]+/).filter((word) => word !== "");
+  const words = text.split(/[\s,;]+/).filter((word) => word !== '');
   if (words.length === 0) return undefined;
-  if (words.length === 1 && words[0]?.toLowerCase() === "weekends") return [];
+  if (words.length === 1 && words[0]?.toLowerCase() === 'weekends') return [];
   return words.map((word) => word.toUpperCase());
 }
 
-function settlementLag(draft: MarketDraft["asset"], at: string, read: Reader): unknown {
+function settlementLag(draft: MarketDraft['asset'], at: string, read: Reader): unknown {
   const later = draft.laterLags.filter((row) => !isBlank(row));
-  if (later.length === 0) return read.number(draft.lag, "count", at);
-  const first = { from: "1900-01-01", ...members({ lag: read.number(draft.lag, "count", `${at}/0/lag`) }) };
+  if (later.length === 0) return read.number(draft.lag, 'count', at);
+  const first = { from: '1900-01-01', ...members({ lag: read.number(draft.lag, 'count', `${at}/0/lag`) }) };
   const rows = later.map((row, index) =>
     members({
       from: read.date(row.from, `${at}/${index + 1}/from`),
-      lag: read.number(row.lag, "count", `${at}/${index + 1}/lag`),
+      lag: read.number(row.lag, 'count', `${at}/${index + 1}/lag`),
     }),
   );
   return [first, ...rows];
 }
 
-function asset(draft: MarketDraft["asset"], read: Reader): object {
-  const at = "/market/asset";
+function asset(draft: MarketDraft['asset'], read: Reader): object {
+  const at = '/market/asset';
   return {
     kind: draft.kind,
     ...members({
-      name: draft.name.trim() === "" ? undefined : draft.name.trim(),
-      currency: draft.currency.trim() === "" ? undefined : draft.currency.trim().toUpperCase(),
-      base:
-        draft.kind === "currency-pair" && draft.base.trim() !== "" ? draft.base.trim().toUpperCase() : undefined,
+      name: draft.name.trim() === '' ? undefined : draft.name.trim(),
+      currency: draft.currency.trim() === '' ? undefined : draft.currency.trim().toUpperCase(),
+      base: draft.kind === 'currency-pair' && draft.base.trim() !== '' ? draft.base.trim().toUpperCase() : undefined,
       settlementLag: settlementLag(draft, `${at}/settlementLag`, read),
       calendars: codes(draft.calendars),
       lagCalendars: codes(draft.lagCalendars),
       holidays: read.dateList(draft.holidays, `${at}/holidays`),
       openDays: read.dateList(draft.openDays, `${at}/openDays`),
-      tick: read.number(draft.tick, "price", `${at}/tick`),
+      tick: read.number(draft.tick, 'price', `${at}/tick`),
     }),
   };
 }
 
-function income(draft: MarketDraft["income"], read: Reader): object | undefined {
-  const at = "/market/income";
+function income(draft: MarketDraft['income'], read: Reader): object | undefined {
+  const at = '/market/income';
   const cash = sent(draft.cash, `${at}/cash`, (row, place) =>
     members({
       ex: read.date(row.ex, `${place}/ex`),
       pay: read.date(row.pay, `${place}/pay`),
-      amount: read.number(row.amount, "price", `${place}/amount`),
-      low: read.number(row.low, "price", `${place}/low`),
-      high: read.number(row.high, "price", `${place}/high`),
+      amount: read.number(row.amount, 'price', `${place}/amount`),
+      low: read.number(row.low, 'price', `${place}/low`),
+      high: read.number(row.high, 'price', `${place}/high`),
     }),
   );
   const proportional = sent(draft.proportional, `${at}/proportional`, (row, place) =>
     members({
       ex: read.date(row.ex, `${place}/ex`),
-      fraction: read.number(row.fraction, "percent", `${place}/fraction`),
-      low: read.number(row.low, "percent", `${place}/low`),
-      high: read.number(row.high, "percent", `${place}/high`),
+      fraction: read.number(row.fraction, 'percent', `${place}/fraction`),
+      low: read.number(row.low, 'percent', `${place}/low`),
+      high: read.number(row.high, 'percent', `${place}/high`),
     }),
   );
   return members({
@@ -287,63 +272,63 @@ function income(draft: MarketDraft["income"], read: Reader): object | undefined 
     proportional: listOrNothing(proportional),
     yield: rate(draft.yield, `${at}/yield`, read),
     passThrough: members({
-      bid: read.number(draft.passThrough.bid, "percent", `${at}/passThrough/bid`),
-      offer: read.number(draft.passThrough.offer, "percent", `${at}/passThrough/offer`),
+      bid: read.number(draft.passThrough.bid, 'percent', `${at}/passThrough/bid`),
+      offer: read.number(draft.passThrough.offer, 'percent', `${at}/passThrough/offer`),
     }),
   });
 }
 
-function lendingFee(draft: MarketDraft["fee"], read: Reader): object | undefined {
+function lendingFee(draft: MarketDraft['fee'], read: Reader): object | undefined {
   const side = (text: string, name: string): object | undefined =>
     rate({ rate: text, compounding: draft.compounding, dayCount: draft.dayCount }, `/market/lendingFee/${name}`, read);
-  return members({ bid: side(draft.bid, "bid"), offer: side(draft.offer, "offer") });
+  return members({ bid: side(draft.bid, 'bid'), offer: side(draft.offer, 'offer') });
 }
 
 function market(draft: MarketDraft, read: Reader): Market {
-  const pair = draft.asset.kind === "currency-pair";
+  const pair = draft.asset.kind === 'currency-pair';
   const made = {
-    ...members({ asOf: read.date(draft.asOf, "/market/asOf") }),
+    ...members({ asOf: read.date(draft.asOf, '/market/asOf') }),
     asset: asset(draft.asset, read),
     spot:
       members({
-        bid: read.number(draft.spot.bid, "price", "/market/spot/bid"),
-        offer: read.number(draft.spot.offer, "price", "/market/spot/offer"),
+        bid: read.number(draft.spot.bid, 'price', '/market/spot/bid'),
+        offer: read.number(draft.spot.offer, 'price', '/market/spot/offer'),
       }) ?? {},
-    funding: funding(draft.funding, "/market/funding", read),
+    funding: funding(draft.funding, '/market/funding', read),
     ...members({
-      discount: draft.discount.same ? undefined : curve(draft.discount.curve, "/market/discount", read),
+      discount: draft.discount.same ? undefined : curve(draft.discount.curve, '/market/discount', read),
       income: pair ? undefined : income(draft.income, read),
       lendingFee: pair ? undefined : lendingFee(draft.fee, read),
       hedgeCost: members({
-        buy: read.number(draft.hedgeCost.buy, "percent", "/market/hedgeCost/buy"),
-        sell: read.number(draft.hedgeCost.sell, "percent", "/market/hedgeCost/sell"),
+        buy: read.number(draft.hedgeCost.buy, 'percent', '/market/hedgeCost/buy'),
+        sell: read.number(draft.hedgeCost.sell, 'percent', '/market/hedgeCost/sell'),
       }),
-      base: pair ? funding(draft.base, "/market/base", read) : undefined,
+      base: pair ? funding(draft.base, '/market/base', read) : undefined,
     }),
   };
   return made as unknown as Market;
 }
 
 /** The kind of number that a margin's amount is. */
-export function marginKind(unit: DealDraft["inquiry"]["margin"]["unit"]): NumberKind {
-  return unit === "price" ? "price" : "margin-points";
+export function marginKind(unit: DealDraft['inquiry']['margin']['unit']): NumberKind {
+  return unit === 'price' ? 'price' : 'margin-points';
 }
 
 /** The quote asked for, whole, and what could not be read of it. */
 export function buildQuote(deal: DealDraft, writing: Writing): Built<QuoteRequest> {
   const read = new Reader(writing, deal.market.asOf);
   const { inquiry } = deal;
-  const amount = read.number(inquiry.margin.amount, marginKind(inquiry.margin.unit), "/inquiry/margin/amount");
+  const amount = read.number(inquiry.margin.amount, marginKind(inquiry.margin.unit), '/inquiry/margin/amount');
   const request = {
-    format: "forwright/1",
-    task: "quote",
+    format: 'forwright/1',
+    task: 'quote',
     market: market(deal.market, read),
     inquiry: {
       client: inquiry.client,
       ...members({
-        quantity: read.number(inquiry.quantity, "amount", "/inquiry/quantity"),
-        maturity: read.maturity(inquiry.maturity, "/inquiry/maturity"),
-        roll: inquiry.roll === "" ? undefined : inquiry.roll,
+        quantity: read.number(inquiry.quantity, 'amount', '/inquiry/quantity'),
+        maturity: read.maturity(inquiry.maturity, '/inquiry/maturity'),
+        roll: inquiry.roll === '' ? undefined : inquiry.roll,
         margin: amount === undefined ? undefined : { unit: inquiry.margin.unit, amount },
       }),
     },

@@ -2,8 +2,8 @@
  * What the person has typed, as typed. Every value is text; each kind of funding keeps its own draft, so that
  * switching to another and back loses nothing. Values are never changed in place.
  */
-import type { AssetKind, Compounding, MarginUnit } from "./request";
-import type { Client } from "./answer";
+import type { AssetKind, Compounding, MarginUnit } from './request';
+import type { Client } from './answer';
 
 export interface RateDraft {
   readonly rate: string;
@@ -15,9 +15,9 @@ export interface PillarRow {
   readonly at: string;
   readonly value: string;
 }
-export type Interpolation = "log-linear" | "linear-zero" | "monotone-cubic";
+export type Interpolation = 'log-linear' | 'linear-zero' | 'monotone-cubic';
 export interface PillarsDraft {
-  readonly quote: "zero" | "factor";
+  readonly quote: 'zero' | 'factor';
   readonly compounding: Compounding;
   readonly dayCount: string;
   readonly interpolation: Interpolation;
@@ -25,7 +25,7 @@ export interface PillarsDraft {
 }
 /** A curve that is not random: one rate, or pillars. */
 export interface FixedCurveDraft {
-  readonly kind: "flat" | "pillars";
+  readonly kind: 'flat' | 'pillars';
   readonly flat: RateDraft;
   readonly pillars: PillarsDraft;
 }
@@ -51,16 +51,16 @@ export interface ScenarioRow {
   readonly curve: FixedCurveDraft;
 }
 export const models = [
-  "vasicek",
-  "cox-ingersoll-ross",
-  "ho-lee",
-  "hull-white",
-  "policy-meetings",
-  "scenarios",
-  "samples",
+  'vasicek',
+  'cox-ingersoll-ross',
+  'ho-lee',
+  'hull-white',
+  'policy-meetings',
+  'scenarios',
+  'samples',
 ] as const;
 export type ModelName = (typeof models)[number];
-export type CurveKind = "flat" | "pillars" | "random";
+export type CurveKind = 'flat' | 'pillars' | 'random';
 
 export interface CurveDraft {
   readonly kind: CurveKind;
@@ -70,11 +70,11 @@ export interface CurveDraft {
   readonly vasicek: ShortRateDraft;
   readonly coxIngersollRoss: ShortRateDraft;
   /** `fit` says which of this draft's own fixed curves the model is fitted to. */
-  readonly hoLee: { readonly volatility: string; readonly fit: "flat" | "pillars" };
+  readonly hoLee: { readonly volatility: string; readonly fit: 'flat' | 'pillars' };
   readonly hullWhite: {
     readonly meanReversion: string;
     readonly volatility: string;
-    readonly fit: "flat" | "pillars";
+    readonly fit: 'flat' | 'pillars';
   };
   readonly meetings: { readonly overnight: string; readonly rows: readonly MeetingRow[] };
   readonly scenarios: { readonly rows: readonly ScenarioRow[] };
@@ -145,7 +145,7 @@ export interface InquiryDraft {
   readonly client: Client;
   readonly quantity: string;
   readonly maturity: string;
-  readonly roll: "" | "following" | "modified-following" | "preceding";
+  readonly roll: '' | 'following' | 'modified-following' | 'preceding';
   readonly margin: { readonly unit: MarginUnit; readonly amount: string };
 }
 /** One asset's market and what is asked of it. */
@@ -162,7 +162,7 @@ export interface AgreedRow {
   /** Which of the deals' markets it stands in. */
   readonly market: string;
   readonly reference: string;
-  readonly client: "bought" | "sold";
+  readonly client: 'bought' | 'sold';
   readonly price: string;
   readonly quantity: string;
   readonly maturity: string;
@@ -175,77 +175,77 @@ export interface Draft {
   readonly agreed: readonly AgreedRow[];
 }
 
-export const emptyRate: RateDraft = { rate: "", compounding: "continuous", dayCount: "ACT/365.FIXED" };
+export const emptyRate: RateDraft = { rate: '', compounding: 'continuous', dayCount: 'ACT/365.FIXED' };
 export const emptyPillars: PillarsDraft = {
-  quote: "zero",
-  compounding: "continuous",
-  dayCount: "ACT/365.FIXED",
-  interpolation: "log-linear",
+  quote: 'zero',
+  compounding: 'continuous',
+  dayCount: 'ACT/365.FIXED',
+  interpolation: 'log-linear',
   rows: [],
 };
-export const emptyFixedCurve: FixedCurveDraft = { kind: "flat", flat: emptyRate, pillars: emptyPillars };
-const emptyShortRate: ShortRateDraft = { r0: "", meanReversion: "", longRun: "", volatility: "" };
+export const emptyFixedCurve: FixedCurveDraft = { kind: 'flat', flat: emptyRate, pillars: emptyPillars };
+const emptyShortRate: ShortRateDraft = { r0: '', meanReversion: '', longRun: '', volatility: '' };
 export const emptyCurve: CurveDraft = {
-  kind: "flat",
-  model: "vasicek",
+  kind: 'flat',
+  model: 'vasicek',
   flat: emptyRate,
   pillars: emptyPillars,
   vasicek: emptyShortRate,
   coxIngersollRoss: emptyShortRate,
-  hoLee: { volatility: "", fit: "flat" },
-  hullWhite: { meanReversion: "", volatility: "", fit: "flat" },
-  meetings: { overnight: "", rows: [] },
+  hoLee: { volatility: '', fit: 'flat' },
+  hullWhite: { meanReversion: '', volatility: '', fit: 'flat' },
+  meetings: { overnight: '', rows: [] },
   scenarios: { rows: [] },
-  samples: { text: "" },
+  samples: { text: '' },
 };
-export const emptyFunding: FundingDraft = { curve: emptyCurve, lendSpread: "", borrowSpread: "" };
+export const emptyFunding: FundingDraft = { curve: emptyCurve, lendSpread: '', borrowSpread: '' };
 export const emptyDeal: DealDraft = {
   inquiry: {
-    client: "two-way",
-    quantity: "",
-    maturity: "",
-    roll: "",
-    margin: { unit: "bp-of-spot", amount: "" },
+    client: 'two-way',
+    quantity: '',
+    maturity: '',
+    roll: '',
+    margin: { unit: 'bp-of-spot', amount: '' },
   },
   market: {
-    asOf: "",
+    asOf: '',
     asset: {
-      kind: "share",
-      name: "",
-      currency: "",
-      base: "",
-      lag: "",
+      kind: 'share',
+      name: '',
+      currency: '',
+      base: '',
+      lag: '',
       laterLags: [],
-      calendars: "",
-      lagCalendars: "",
-      holidays: "",
-      openDays: "",
-      tick: "",
+      calendars: '',
+      lagCalendars: '',
+      holidays: '',
+      openDays: '',
+      tick: '',
     },
-    spot: { bid: "", offer: "" },
+    spot: { bid: '', offer: '' },
     funding: emptyFunding,
     discount: { same: true, curve: emptyCurve },
     income: {
       cash: [],
       proportional: [],
       yield: emptyRate,
-      passThrough: { bid: "", offer: "" },
+      passThrough: { bid: '', offer: '' },
     },
-    fee: { bid: "", offer: "", compounding: "continuous", dayCount: "ACT/365.FIXED" },
-    hedgeCost: { buy: "", sell: "" },
+    fee: { bid: '', offer: '', compounding: 'continuous', dayCount: 'ACT/365.FIXED' },
+    hedgeCost: { buy: '', sell: '' },
     base: emptyFunding,
   },
-  madeAt: "",
-  validUntil: "",
+  madeAt: '',
+  validUntil: '',
   demonstration: false,
 };
 
 /** One row of each list, to tell what belongs where when a draft is read back from a file. */
 export const draftShape: Draft = {
-  current: "",
+  current: '',
   deals: {},
-  tenors: { maturities: "" },
-  agreed: [{ id: 0, market: "", reference: "", client: "bought", price: "", quantity: "", maturity: "" }],
+  tenors: { maturities: '' },
+  agreed: [{ id: 0, market: '', reference: '', client: 'bought', price: '', quantity: '', maturity: '' }],
 };
 
 /** An id that no row of the list has. */
@@ -256,8 +256,8 @@ export function nextId(rows: readonly { readonly id: number }[]): number {
 /** Whether nothing stands in a row: such a row is not sent. */
 export function isBlank(row: object): boolean {
   return Object.entries(row).every(([name, value]) => {
-    if (name === "id") return true;
-    if (typeof value === "string") return value.trim() === "";
+    if (name === 'id') return true;
+    if (typeof value === 'string') return value.trim() === '';
     if (Array.isArray(value)) return value.every((inner) => isBlank(inner as object));
     return false;
   });

@@ -1,5 +1,5 @@
 /** From a request to the texts that would make it: how demonstrations, market sheets and recorded quotes are opened. */
-import { fromNumber, toText, type DecimalSign } from '../input/decimal';
+import { fromNumber, grouped, toText, type DecimalSign } from '../input/decimal';
 import { placesOf, type NumberKind } from '../input/quantities';
 import { dateToText } from '../input/step';
 import type { Curve, Funding, Market, QuoteRequest, Rate } from './request';
@@ -11,7 +11,9 @@ class Writer {
   constructor(private readonly sign: DecimalSign) {}
 
   number(value: number | undefined, kind: NumberKind): string {
-    return value === undefined ? '' : toText(fromNumber(value), this.sign, -placesOf(kind));
+    if (value === undefined) return '';
+    const text = toText(fromNumber(value), this.sign, -placesOf(kind));
+    return kind === 'amount' ? grouped(text, this.sign) : text;
   }
 
   date(value: string | undefined): string {
@@ -45,10 +47,7 @@ function pillars(from: Extract<Curve, { kind: 'pillars' }>, write: Writer): Fixe
 
 type FixedCurve = Exclude<Curve, { kind: 'random' }>;
 
-function fixed(
-  from: FixedCurve,
-  write: Writer,
-): Pick<FixedCurveDraft, 'flat'> | Pick<FixedCurveDraft, 'pillars'> {
+function fixed(from: FixedCurve, write: Writer): Pick<FixedCurveDraft, 'flat'> | Pick<FixedCurveDraft, 'pillars'> {
   if (typeof from === 'number' || !('kind' in from)) return { flat: rate(from, write) };
   return { pillars: pillars(from, write) };
 }
@@ -120,7 +119,10 @@ function onto(draft: CurveDraft, from: Curve, write: Writer): CurveDraft {
       return {
         ...random,
         samples: {
-          text: [from.dates.map(dateToText), ...from.factors.map((row) => row.map((factor) => write.number(factor, 'plain')))]
+          text: [
+            from.dates.map(dateToText),
+            ...from.factors.map((row) => row.map((factor) => write.number(factor, 'plain'))),
+          ]
             .map((row) => row.join('\t'))
             .join('\n'),
         },
@@ -138,7 +140,7 @@ function funding(from: Funding | undefined, before: FundingDraft, write: Writer)
 }
 
 function both<T>(value: T | { readonly bid: T; readonly offer: T }): { readonly bid: T; readonly offer: T } {
-  return typeof value === 'object' && value !== null && 'bid' in value ? value : { bid: value as T, offer: value as T };
+  return typeof value === 'object' && value !== null && 'bid' in value ? value : { bid: value, offer: value };
 }
 
 function asset(from: Market['asset'], write: Writer): MarketDraft['asset'] {

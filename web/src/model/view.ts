@@ -7,7 +7,15 @@
 import type { ReadonlySignal } from '@preact/signals';
 import type { Assumed, PathResult, QuoteResult, Remark } from './answer';
 import type { QuoteRequest } from './request';
-import { beforeSwitch, coreTrouble as trouble, faults, pathShown, preferences, quoteShown } from '../store/signals';
+import {
+  beforeSwitch,
+  coreTrouble as trouble,
+  faults,
+  pathShown,
+  preferences,
+  quoteSettled,
+  quoteShown,
+} from '../store/signals';
 
 export type * from './answer';
 export type { QuoteRequest } from './request';
@@ -57,6 +65,8 @@ export interface Preferences {
 
 /** The quote on screen. */
 export const quoteAnswer: ReadonlySignal<Shown<QuoteResult>> = quoteShown;
+/** The same a moment later, once the price itself is painted: for pictures and proofs, which take longer to draw. */
+export const settledAnswer: ReadonlySignal<Shown<QuoteResult>> = quoteSettled;
 /** The forward by delivery date, for the chart; it may come a little later than the quote. */
 export const pathAnswer: ReadonlySignal<Shown<PathResult>> = pathShown;
 /** What is wrong in the request as typed, by JSON pointer. */

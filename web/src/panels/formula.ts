@@ -213,8 +213,20 @@ class Reader {
   }
 }
 
+/** Formulas are few and come again with every quote. */
+const known = new Map<string, MathNode | null>();
+
 /** The formula as MathML, or null where it cannot be read. */
 export function readFormula(formula: string): MathNode | null {
+  let root = known.get(formula);
+  if (root === undefined) {
+    root = freshlyRead(formula);
+    known.set(formula, root);
+  }
+  return root;
+}
+
+function freshlyRead(formula: string): MathNode | null {
   try {
     return new Reader(tokens(formula)).whole();
   } catch (trouble) {

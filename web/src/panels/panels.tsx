@@ -1,6 +1,6 @@
 import type { FunctionComponent } from 'preact';
 import { useEffect, useRef } from 'preact/hooks';
-import { panel, panels, quoteAnswer, showPanel } from '../model/view';
+import { panel, panels, settledAnswer, showPanel } from '../model/view';
 import type { Panel, QuoteRequest, QuoteResult } from '../model/view';
 import { Income } from './income';
 import { Ledger } from './ledger';
@@ -56,7 +56,7 @@ function useTabInSight(shown: Panel) {
 
 /** The proof of the price, one subject a tab. */
 export function Panels() {
-  const { good, stale } = quoteAnswer.value;
+  const { good, stale } = settledAnswer.value;
   const shown = panel.value;
   const { view: View } = contents[shown];
   const list = useTabInSight(shown);

@@ -85,7 +85,7 @@ function Today({ row }: { readonly row: AgreedRow }) {
     <>
       <td class="num strong">{formatNumber(result.fair, between)}</td>
       <td class="num">{formatNumber(ending, between)}</td>
-      <td>{formatLongDate(result.dates.settlement)}</td>
+      <td class="date">{formatLongDate(result.dates.settlement)}</td>
     </>
   );
 }
@@ -128,7 +128,12 @@ function AgreedLine({ row, index }: { readonly row: AgreedRow; readonly index: n
           type="button"
           class="quiet remove"
           aria-label={`Take out forward ${index + 1}`}
-          onClick={() => editDraft('agreed', agreed.filter((other) => other.id !== row.id))}
+          onClick={() =>
+            editDraft(
+              'agreed',
+              agreed.filter((other) => other.id !== row.id),
+            )
+          }
         >
           ×
         </button>
@@ -150,8 +155,8 @@ export function AgreedPlace() {
       <section class="block">
         <h1>Forwards agreed</h1>
         <p class="muted">
-          Each forward beside the same one in today’s market: what would be fair now, and the break-even at which it would
-          be ended.
+          Each forward beside the same one in today’s market: what would be fair now, and the break-even at which it
+          would be ended.
         </p>
         {agreed.length === 0 ? (
           <p>None is written down yet.</p>

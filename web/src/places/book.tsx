@@ -46,7 +46,9 @@ function Row({ record }: { readonly record: QuoteRecord }) {
   if (read === null)
     return (
       <tr>
-        <th scope="row">{when}</th>
+        <th scope="row" class="date">
+          {when}
+        </th>
         <td colSpan={5}>
           <span class="wrong">This record cannot be read any more: it was altered after it was given.</span>
         </td>
@@ -58,10 +60,12 @@ function Row({ record }: { readonly record: QuoteRecord }) {
   const price = (value: number | null): string => (value === null ? '–' : formatNumber(value, dealt));
   return (
     <tr>
-      <th scope="row">{when}</th>
+      <th scope="row" class="date">
+        {when}
+      </th>
       <td>
-        Client {clientWords[request.inquiry.client]} {formatNumber(request.inquiry.quantity)} {asset.name ?? asset.currency}{' '}
-        for {formatDate(result.dates.maturity)}
+        Client {clientWords[request.inquiry.client]} {formatNumber(request.inquiry.quantity)}{' '}
+        {asset.name ?? asset.currency} for {formatDate(result.dates.maturity)}
       </td>
       <td class="num strong">{price(result.quote.bid)}</td>
       <td class="num strong">{price(result.quote.offer)}</td>
@@ -127,8 +131,8 @@ export function BookPlace() {
           />
         </div>
         <p class="muted">
-          The book is kept by this browser for this file. In some browsers a file that was moved or renamed finds an empty
-          book: save it to a file first, and add it there.
+          The book is kept by this browser for this file. In some browsers a file that was moved or renamed finds an
+          empty book: save it to a file first, and add it there.
         </p>
         {list.length === 0 ? (
           <p>No quote was given yet. “Give this quote” beside a price, or Alt+G, puts it here.</p>

@@ -1,6 +1,6 @@
 import { useRef } from 'preact/hooks';
 import { Cards } from '../cards/cards';
-import { open, save } from '../files/open-save';
+import { openFile, save } from '../files/open-save';
 import { SheetFields } from '../cards/sheet-fields';
 import { deal, draft } from '../store/session';
 import { addMarket, chooseMarket, removeMarket } from '../store/markets';
@@ -71,7 +71,7 @@ export function MarketPlace() {
             aria-label="File to open"
             onChange={(event) => {
               const [chosen] = event.currentTarget.files ?? [];
-              if (chosen !== undefined) void open(chosen);
+              if (chosen !== undefined) void openFile(chosen);
               event.currentTarget.value = '';
             }}
           />
@@ -90,6 +90,7 @@ export function MarketPlace() {
         <SheetFields />
       </div>
       <div class="sheet-cards">
+        <h2 class="sr-only">What the prices rest on</h2>
         <Cards alwaysOpen />
       </div>
       <Cautions />

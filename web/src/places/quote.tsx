@@ -8,11 +8,13 @@ import { QuoteCard } from '../quote/quote-card';
 import { Cautions } from '../shell/cautions';
 import { Inquiry } from '../shell/inquiry';
 
+/** What should be known of the quote; where there is nothing, what giving it means. Its room stays the same. */
 function Notices() {
   const { good, stale } = quoteAnswer.value;
-  if (good === null || stale || good.notices.length === 0) return null;
+  if (good === null || stale || good.notices.length === 0)
+    return <p class="given-note muted">It goes into the book with everything that makes its number again.</p>;
   return (
-    <ul class="notices" aria-label="Notices">
+    <ul class="given-note notices" aria-label="Notices" tabIndex={0}>
       {good.notices.map((notice) => (
         <li class="notice" key={`${notice.at} ${notice.code}`}>
           {notice.message}
@@ -26,10 +28,10 @@ export function QuotePlace() {
   return (
     <main class="place place-quote" id="here">
       <h1 class="sr-only">Quote</h1>
-      <Inquiry />
+      <Inquiry forOneMaturity />
       <div class="area-quote block">
         <QuoteCard />
-        <div class="row">
+        <div class="give">
           <button
             type="button"
             class="plain"
@@ -40,9 +42,8 @@ export function QuotePlace() {
           >
             Give this quote
           </button>
-          <span class="muted">It goes into the book with everything that makes its number again.</span>
+          <Notices />
         </div>
-        <Notices />
       </div>
       <aside class="market area-market" aria-label="Market">
         <Cards alwaysOpen={false} />

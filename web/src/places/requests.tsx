@@ -67,8 +67,8 @@ function TenorsTable({ result, words, stale }: { result: TenorsResult; words: re
             return (
               <tr key={`${index} ${row.maturity}`}>
                 <th scope="row">{words[index]?.typed ?? ''}</th>
-                <td>{formatDate(row.maturity)}</td>
-                <td>{formatDate(row.settlement)}</td>
+                <td class="date">{formatDate(row.maturity)}</td>
+                <td class="date">{formatDate(row.settlement)}</td>
                 <td class="num strong">{price(row.quote.bid)}</td>
                 <td class="num strong">{price(row.quote.offer)}</td>
                 <td class="num">{formatNumber(row.fair, between)}</td>
@@ -107,10 +107,11 @@ export function RequestsPlace() {
         };
   const { result, errors: wrong, stale } = useAnswer<TenorsResult>(question);
   const own = wrong.filter((fault) => fault.at.startsWith('/maturities'));
-  const elsewhere = own.length === 0 ? [...errors.value.values()].find((fault) => fault.at !== '/inquiry/maturity') : undefined;
+  const elsewhere =
+    own.length === 0 ? [...errors.value.values()].find((fault) => fault.at !== '/inquiry/maturity') : undefined;
   return (
     <main class="place place-requests" id="here">
-      <Inquiry />
+      <Inquiry forOneMaturity={false} />
       <section class="block" aria-labelledby={`${id}-name`}>
         <h1 id={`${id}-name`}>At several maturities</h1>
         <div class="field">

@@ -1,13 +1,6 @@
-import {
-  formatLongDate,
-  formatMoney,
-  formatNumber,
-  formatPercent,
-  formatSigned,
-  formatSignedPercent,
-} from '../format';
+import { formatLongDate, formatMoney, formatNumber, formatPercent, formatSigned, formatSignedPercent } from '../format';
 import type { Precision } from '../format';
-import { quoteAnswer } from '../model/view';
+import { settledAnswer } from '../model/view';
 import type { Good, QuoteRequest, QuoteResult, Side } from '../model/view';
 import { Working } from '../panels/working';
 import { assetName, pricePrecision, sideName, sides, unitName } from '../quote/words';
@@ -97,7 +90,7 @@ function margin({ request, result }: Quoted): (readonly [string, string])[] {
     return price === null ? [] : [`${formatPercent(result.margin / price, 3)} of the ${side}`];
   });
   const money = result.total ? formatMoney(result.total.margin, request.market.asset.currency) : '';
-  return [['Our margin in it', `${[money, ...parts].filter(Boolean).join(', ')}; before rounding`]];
+  return [['In the price', `${[money, ...parts].filter(Boolean).join(', ')}; before rounding`]];
 }
 
 function deskFacts({ result }: Quoted, { between }: Precision): (readonly [string, string])[] {
@@ -145,7 +138,7 @@ function Sheet({ request, result, notices, assumed }: Good<QuoteResult>) {
       <Facts rows={restsOn(request, forDesk).map(({ name, words }) => [name, words] as const)} />
       {(forDesk || showsMargin) && (
         <>
-          <h2>{forDesk ? 'For the desk' : 'What is in it for us'}</h2>
+          <h2>{forDesk ? 'For the desk' : 'Our margin'}</h2>
           <Facts
             rows={[...(forDesk ? deskFacts({ request, result }, precision) : []), ...margin({ request, result })]}
           />
@@ -191,7 +184,7 @@ function Sheet({ request, result, notices, assumed }: Good<QuoteResult>) {
 
 /** The quote on paper, and the question what it is to show. On screen the sheet is not there. */
 export function PrintSheet() {
-  const { good, stale } = quoteAnswer.value;
+  const { good, stale } = settledAnswer.value;
   return (
     <>
       <PrintDialog />

@@ -20,7 +20,8 @@ export function SideFacts({ request, result, side }: Props & { readonly side: Si
     <p class="side-facts">
       <span class="num">{formatMoney(notional, request.market.asset.currency)}</span>
       <span>
-        hedge today: {act} <span class="num">{formatNumber(Math.abs(hedge), 0)}</span> {unitName(request)}
+        <span class="when">hedge today: </span>
+        {act} <span class="num">{formatNumber(Math.abs(hedge), 0)}</span> {unitName(request)}
       </span>
     </p>
   );

@@ -1,4 +1,4 @@
-import { formatNumber } from '../format';
+import { datesInText, formatNumber } from '../format';
 import type { Precision } from '../format';
 import { coreTrouble, errors, focusField, quoteAnswer } from '../model/view';
 import type { QuoteRequest, QuoteResult, Side } from '../model/view';
@@ -19,7 +19,7 @@ function Standing({ stale }: { readonly stale: boolean }) {
   const fault = errors.value.values().next().value;
   return (
     <p class="standing wrong">
-      <b>Earlier price.</b> {fault ? fault.message : 'The new one is being worked out.'}{' '}
+      <b>Earlier price.</b> {fault ? datesInText(fault.message) : 'The new one is being worked out.'}{' '}
       {fault && (
         <button type="button" class="link" onClick={() => focusField(fault.at)}>
           Go to it
@@ -58,7 +58,7 @@ function Card({ request, result, stale }: Quoted & { readonly stale: boolean }) 
     <>
       <div class="quote-head">
         <Standing stale={stale} />
-        <CopyPrice text={priceInWords(request, result)} />
+        {!stale && <CopyPrice text={priceInWords(request, result)} />}
       </div>
       <div class="prices">
         {sides.map((side) => (

@@ -1,7 +1,7 @@
 import { useRef } from 'preact/hooks';
 import { formatDate } from '../format';
 import { go, place, places, type Place } from '../model/view';
-import { open, save } from '../files/open-save';
+import { openFile, save } from '../files/open-save';
 import { askToPrint } from '../print/options';
 import { canRedo, canUndo, redo, undo } from '../store/session';
 import { sheetTime } from '../store/sheet-time';
@@ -38,7 +38,13 @@ function Actions() {
       <button type="button" class="quiet" onClick={undo} aria-disabled={!canUndo.value} title="Undo (Ctrl+Z)">
         Undo
       </button>
-      <button type="button" class="quiet wide-only" onClick={redo} aria-disabled={!canRedo.value} title="Redo (Ctrl+Shift+Z)">
+      <button
+        type="button"
+        class="quiet wide-only"
+        onClick={redo}
+        aria-disabled={!canRedo.value}
+        title="Redo (Ctrl+Shift+Z)"
+      >
         Redo
       </button>
       <button type="button" class="quiet" onClick={() => file.current?.click()} title="Open a file">
@@ -52,7 +58,7 @@ function Actions() {
         aria-label="File to open"
         onChange={(event) => {
           const [chosen] = event.currentTarget.files ?? [];
-          if (chosen !== undefined) void open(chosen);
+          if (chosen !== undefined) void openFile(chosen);
           event.currentTarget.value = '';
         }}
       />

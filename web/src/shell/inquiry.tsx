@@ -130,27 +130,43 @@ function Resolved() {
   );
 }
 
-function Faults() {
-  const faults = ['/inquiry/client', '/inquiry/quantity', '/inquiry/maturity'].map((at) => faultAt(at));
+function Faults({ maturity }: { readonly maturity: boolean }) {
+  const places = ['/inquiry/client', '/inquiry/quantity', ...(maturity ? ['/inquiry/maturity'] : [])];
+  const faults = places.map((at) => faultAt(at));
   return (
     <span class="inquiry-errors" id="inquiry-errors">
-      {faults.map((fault) => fault !== null && (
-        <small class="field-error" key={fault.at}>
-          {fault.message}
-        </small>
-      ))}
+      {faults.map(
+        (fault) =>
+          fault !== null && (
+            <small class="field-error" key={fault.at}>
+              {fault.message}
+            </small>
+          ),
+      )}
     </span>
   );
 }
 
+interface InquiryProps {
+  /** Where the place itself lists the maturities, the sentence leaves its own out. */
+  readonly forOneMaturity: boolean;
+}
+
 /** The inquiry as one sentence, whose words are its fields. */
-export function Inquiry() {
+export function Inquiry({ forOneMaturity }: InquiryProps) {
   const twoWay = deal.value.inquiry.client === 'two-way';
   return (
     <form class="inquiry area-inquiry" aria-label="Inquiry" onSubmit={(event) => event.preventDefault()}>
       <span class="word">Client</span> <ClientField /> {twoWay && <span class="word">in</span>} <QuantityField />{' '}
-      <AssetField /> <span class="word">for</span> <MaturityField /> <Resolved />
-      <Faults />
+      <AssetField />{' '}
+      {forOneMaturity ? (
+        <>
+          <span class="word">for</span> <MaturityField /> <Resolved />
+        </>
+      ) : (
+        <span class="word">at several maturities</span>
+      )}
+      <Faults maturity={forOneMaturity} />
     </form>
   );
 }

@@ -2,7 +2,7 @@
  * From the draft to the answers on screen. A request goes out with every change; while the core works only the
  * newest waits, and an answer to anything but the newest request is dropped.
  */
-import { computed, effect, untracked } from '@preact/signals';
+import { batch, computed, effect, untracked } from '@preact/signals';
 import type { Core } from '../core/open';
 import type { Assumed, PathResult, QuoteResult, Remark } from '../model/answer';
 import { buildQuote, type Built } from '../model/build';
@@ -11,7 +11,7 @@ import type { QuoteRequest } from '../model/request';
 import type { DealDraft } from '../model/draft';
 import type { Fault, Shown } from '../model/view';
 import { deal, draft } from './session';
-import { beforeSwitch, coreTrouble, faults, pathShown, preferences, quoteShown } from './signals';
+import { beforeSwitch, coreTrouble, faults, pathShown, preferences, quoteSettled, quoteShown } from './signals';
 
 /** How long an answer may take before the page says that it is being worked out. */
 const lateMilliseconds = 250;
@@ -98,33 +98,69 @@ function sameButFunding(one: DealDraft, two: DealDraft): boolean {
   return names.every((name) => name === 'funding' || one.market[name] === two.market[name]);
 }
 
-let working = false;
-let next: Wanted | null = null;
+/** How long a page that paints nothing, as one in the background, is waited for. */
+const mostPaintMilliseconds = 100;
 
-async function quote(wanted: Wanted): Promise<void> {
-  const text = JSON.stringify(wanted.request);
-  const answerText = await ask(text);
-  if (next !== null) return;
-  const answer = JSON.parse(answerText) as Answered<QuoteResult>;
-  const own = wanted.faults;
-  if (answer.ok && own.length === 0) {
-    lastGood = { request: text, answer: answerText };
-    faults.value = new Map();
-    quoteShown.value = shown(wanted.request, answer);
-    noteSwitch(wanted, answer.result);
-    await path(wanted.request);
-  } else {
-    faults.value = byPlace(own, answer.ok ? [] : answer.errors);
-    quoteShown.value = { good: quoteShown.peek().good, stale: true, busy: false };
-    pathShown.value = { good: pathShown.peek().good, stale: true, busy: false };
-  }
+/** Once what was shown is painted. */
+function painted(): Promise<void> {
+  return new Promise((done) => {
+    const late = setTimeout(done, mostPaintMilliseconds);
+    requestAnimationFrame(() => {
+      clearTimeout(late);
+      setTimeout(done, 0);
+    });
+  });
 }
 
-async function path(of: QuoteRequest): Promise<void> {
-  const { market, inquiry } = of;
-  const answer = await askFor<PathResult>({ format: 'forwright/1', task: 'path', market, inquiry });
-  if (next !== null) return;
-  pathShown.value = answer.ok ? shown(of, answer) : { good: pathShown.peek().good, stale: true, busy: false };
+let working = false;
+let next: Wanted | null = null;
+/** The newest request, whether or not it has been answered. */
+let latest: Wanted | null = null;
+
+/** Prices what is wanted and shows it; false where something newer is wanted by then. */
+async function quote(wanted: Wanted): Promise<boolean> {
+  const late = setTimeout(() => {
+    quoteShown.value = { ...quoteShown.peek(), busy: true };
+  }, lateMilliseconds);
+  const text = JSON.stringify(wanted.request);
+  const answerText = await ask(text).finally(() => clearTimeout(late));
+  if (next !== null) return false;
+  const answer = JSON.parse(answerText) as Answered<QuoteResult>;
+  const own = wanted.faults;
+  batch(() => {
+    if (answer.ok && own.length === 0) {
+      lastGood = { request: text, answer: answerText };
+      faults.value = new Map();
+      quoteShown.value = shown(wanted.request, answer);
+      noteSwitch(wanted, answer.result);
+    } else {
+      const anotherMarket = lastQuoted?.market !== wanted.market;
+      faults.value = byPlace(own, answer.ok ? [] : answer.errors);
+      quoteShown.value = { good: anotherMarket ? null : quoteShown.peek().good, stale: true, busy: false };
+      if (anotherMarket) pathShown.value = { good: null, stale: true, busy: false };
+    }
+  });
+  return true;
+}
+
+/** What takes longer to work out and to draw than the price, once that is painted. */
+async function rest(wanted: Wanted): Promise<void> {
+  const { market, inquiry } = wanted.request;
+  const { stale } = quoteShown.peek();
+  const asked = stale ? null : askFor<PathResult>({ format: 'forwright/1', task: 'path', market, inquiry });
+  await painted();
+  const answer = await asked;
+  if (latest !== wanted) return;
+  batch(() => {
+    quoteSettled.value = quoteShown.peek();
+    pathShown.value =
+      answer?.ok === true ? shown(wanted.request, answer) : { good: pathShown.peek().good, stale: true, busy: false };
+  });
+}
+
+function sayStopped(): void {
+  coreTrouble.value =
+    'The calculation stopped and could not be started again. What you typed is kept: close this page and open it again.';
 }
 
 async function work(): Promise<void> {
@@ -133,17 +169,10 @@ async function work(): Promise<void> {
   while (next !== null) {
     const wanted = next;
     next = null;
-    const late = setTimeout(() => {
-      quoteShown.value = { ...quoteShown.peek(), busy: true };
-    }, lateMilliseconds);
     try {
-      await quote(wanted);
+      if (await quote(wanted)) rest(wanted).catch(sayStopped);
     } catch {
-      coreTrouble.value =
-        'The calculation stopped and could not be started again. What you typed is kept: close this page and open it again.';
-    } finally {
-      clearTimeout(late);
-      if (quoteShown.peek().busy) quoteShown.value = { ...quoteShown.peek(), busy: false };
+      sayStopped();
     }
   }
   working = false;
@@ -156,6 +185,7 @@ export function calculateWith(opened: Core): void {
     const wanted = { ...built.value, deal: deal.value, market: draft.value.current };
     untracked(() => {
       next = wanted;
+      latest = wanted;
       void work();
     });
   });

@@ -49,10 +49,7 @@ function demonstrated(request: QuoteRequest, sign: DecimalSign): DealDraft {
 export function demonstrationDraft(sign: DecimalSign): Draft {
   const requests = [share, index, pair, commodity] as unknown as readonly QuoteRequest[];
   const deals = Object.fromEntries(
-    requests.map((request) => [
-      (request.market.asset.name ?? '').replaceAll('/', ' '),
-      demonstrated(request, sign),
-    ]),
+    requests.map((request) => [(request.market.asset.name ?? '').replaceAll('/', ' '), demonstrated(request, sign)]),
   );
   return {
     current: Object.keys(deals)[0] ?? '',

@@ -25,5 +25,5 @@ function replaced(tree: Tree, names: readonly string[], value: unknown): Tree {
   if (name === undefined) return tree;
   const inner = rest.length === 0 ? value : replaced(step(tree, name) as Tree, rest, value);
   if (Array.isArray(tree)) return tree.map((item: unknown, index) => (String(index) === name ? inner : item));
-  return { ...tree, [name]: inner };
+  return { ...(tree as Readonly<Record<string, unknown>>), [name]: inner };
 }

@@ -6,6 +6,8 @@ import type { Fault, Preferences, Previous, Shown } from '../model/view';
 const nothing = { good: null, stale: false, busy: false } as const;
 
 export const quoteShown = signal<Shown<QuoteResult>>(nothing);
+/** The quote once more, after the price itself is painted: for what takes longer to draw. */
+export const quoteSettled = signal<Shown<QuoteResult>>(nothing);
 export const pathShown = signal<Shown<PathResult>>(nothing);
 export const faults = signal<ReadonlyMap<string, Fault>>(new Map());
 export const beforeSwitch = signal<Previous | null>(null);
