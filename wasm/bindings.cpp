@@ -2,6 +2,7 @@
 #include "contract/answer.hpp"
 
 #include <emscripten/bind.h>
+
 #include <string>
 
 namespace {

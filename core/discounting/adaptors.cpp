@@ -1,7 +1,6 @@
+#include "dates/date.hpp"
 #include "discounting/checks.hpp"
 #include "discounting/curves.hpp"
-
-#include "dates/date.hpp"
 
 #include <cmath>
 
@@ -9,7 +8,8 @@ namespace forwright::discounting {
 
 namespace {
 
-/// The review of the curve below, and a fault where this curve's own factor for `last` leaves what is accepted.
+/// The review of the curve below, and a fault where this curve's own factor for `last` leaves what is
+/// accepted.
 outcome::Review withOwnEnd(outcome::Review below, const Curve& self, Date last) {
     if (!below.faults.empty()) {
         return below;
@@ -17,7 +17,8 @@ outcome::Review withOwnEnd(outcome::Review below, const Curve& self, Date last) 
     const double log = self.logFactor(last);
     if (std::fabs(log) > largestLogFactor) {
         below.faults.push_back({"", "not-finite",
-                                "The discount factor for " + dates::toIso(last) + " would be e^" + detail::toText(log) +
+                                "The discount factor for " + dates::toIso(last) + " would be e^" +
+                                    detail::toText(log) +
                                     ", beyond what a number holds; use a smaller rate or a nearer date."});
     }
     return below;
@@ -25,19 +26,20 @@ outcome::Review withOwnEnd(outcome::Review below, const Curve& self, Date last) 
 
 class SpreadCurve final : public Curve {
   public:
-    SpreadCurve(CurvePtr curve, double spread) : Curve(curve->asOf()), curve_(std::move(curve)), spread_(spread) {}
+    SpreadCurve(CurvePtr curve, double spread)
+        : Curve(curve->asOf()), curve_(std::move(curve)), spread_(spread) {}
 
     [[nodiscard]] double logFactor(Date u) const override {
         return curve_->logFactor(u) - spread_ * dates::years(asOf(), u);
     }
     [[nodiscard]] std::vector<Parameter> parameters() const override { return curve_->parameters(); }
-    [[nodiscard]] std::vector<double> logFactorGradient(Date u) const override { return curve_->logFactorGradient(u); }
+    [[nodiscard]] std::vector<double> logFactorGradient(Date u) const override {
+        return curve_->logFactorGradient(u);
+    }
     [[nodiscard]] outcome::Review review(Date last) const override {
         return withOwnEnd(curve_->review(last), *this, last);
     }
-    [[nodiscard]] std::string convention() const override {
-        return curve_->convention() + ", with a spread";
-    }
+    [[nodiscard]] std::string convention() const override { return curve_->convention() + ", with a spread"; }
 
   private:
     CurvePtr curve_;

@@ -30,14 +30,16 @@ void requireWithin(outcome::Faults& faults, std::string_view at, double value, d
                       std::string(what) + " has to be from " + toText(low) + " to " + toText(high) + "."});
 }
 
-void requireLater(outcome::Faults& faults, std::string_view at, Date date, Date asOf, std::optional<Date> previous,
-                  std::string_view what) {
+void requireLater(outcome::Faults& faults, std::string_view at, Date date, Date asOf,
+                  std::optional<Date> previous, std::string_view what) {
     if (date <= asOf) {
-        faults.push_back({std::string(at), "not-after-as-of",
-                          std::string(what) + " has to be after " + dates::toIso(asOf) + ", the date of the market."});
+        faults.push_back(
+            {std::string(at), "not-after-as-of",
+             std::string(what) + " has to be after " + dates::toIso(asOf) + ", the date of the market."});
     } else if (previous && date <= *previous) {
-        faults.push_back({std::string(at), "not-rising",
-                          std::string(what) + " has to be after the one before it, " + dates::toIso(*previous) + "."});
+        faults.push_back(
+            {std::string(at), "not-rising",
+             std::string(what) + " has to be after the one before it, " + dates::toIso(*previous) + "."});
     }
 }
 
@@ -56,10 +58,11 @@ std::optional<outcome::Fault> notFinite(const Curve& curve, Date last, double bo
     for (Date day = last; day > curve.asOf(); day -= std::chrono::days{1}) {
         const double log = curve.logFactor(day);
         if (std::fabs(log) > largestLogFactor) {
-            return outcome::Fault{"", "not-finite",
-                                  "The discount factor for " + dates::toIso(day) + " would be e^" + toText(log) +
-                                      ", beyond what a number holds; use smaller rates, a smaller volatility or a "
-                                      "nearer date."};
+            return outcome::Fault{
+                "", "not-finite",
+                "The discount factor for " + dates::toIso(day) + " would be e^" + toText(log) +
+                    ", beyond what a number holds; use smaller rates, a smaller volatility or a "
+                    "nearer date."};
         }
     }
     return std::nullopt;

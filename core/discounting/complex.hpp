@@ -4,25 +4,41 @@
 
 #include <cmath>
 
-/// Internal to the folder: the little complex arithmetic that inverting a transform needs. Written out, because the library's own division and
-/// functions differ between compilers by a bit.
+/// Internal to the folder: the little complex arithmetic that inverting a transform needs. Written out,
+/// because the library's own division and functions differ between compilers by a bit.
 namespace forwright::discounting::detail {
 
 struct Complex {
     double re = 0.0;
     double im = 0.0;
 
-    constexpr Complex(double real = 0.0, double imaginary = 0.0) // NOLINT(google-explicit-constructor): constants mix in formulas
+    constexpr Complex(
+        double real = 0.0,
+        double imaginary = 0.0) // NOLINT(google-explicit-constructor): constants mix in formulas
         : re(real), im(imaginary) {}
 };
 
-constexpr Complex operator-(Complex a) { return {-a.re, -a.im}; }
-constexpr Complex operator+(Complex a, Complex b) { return {a.re + b.re, a.im + b.im}; }
-constexpr Complex operator-(Complex a, Complex b) { return {a.re - b.re, a.im - b.im}; }
-constexpr Complex operator*(Complex a, Complex b) { return {a.re * b.re - a.im * b.im, a.re * b.im + a.im * b.re}; }
-constexpr Complex operator*(double a, Complex b) { return {a * b.re, a * b.im}; }
-constexpr Complex operator*(Complex a, double b) { return b * a; }
-constexpr Complex operator/(Complex a, double b) { return {a.re / b, a.im / b}; }
+constexpr Complex operator-(Complex a) {
+    return {-a.re, -a.im};
+}
+constexpr Complex operator+(Complex a, Complex b) {
+    return {a.re + b.re, a.im + b.im};
+}
+constexpr Complex operator-(Complex a, Complex b) {
+    return {a.re - b.re, a.im - b.im};
+}
+constexpr Complex operator*(Complex a, Complex b) {
+    return {a.re * b.re - a.im * b.im, a.re * b.im + a.im * b.re};
+}
+constexpr Complex operator*(double a, Complex b) {
+    return {a * b.re, a * b.im};
+}
+constexpr Complex operator*(Complex a, double b) {
+    return b * a;
+}
+constexpr Complex operator/(Complex a, double b) {
+    return {a.re / b, a.im / b};
+}
 
 /// a/b for b not 0, by way of the larger part of b (R. L. Smith, Communications of the ACM 5 (1962)).
 inline Complex operator/(Complex a, Complex b) {
@@ -36,7 +52,9 @@ inline Complex operator/(Complex a, Complex b) {
     return {(a.re * ratio + a.im) / below, (a.im * ratio - a.re) / below};
 }
 
-inline double magnitude(Complex x) { return std::fabs(x.re) + std::fabs(x.im); }
+inline double magnitude(Complex x) {
+    return std::fabs(x.re) + std::fabs(x.im);
+}
 
 /// |x|, without overflow.
 inline double modulus(Complex x) {
@@ -60,7 +78,9 @@ inline Complex exponential(Complex x) {
 }
 
 /// The logarithm with its imaginary part in (−π, π]; x not 0.
-inline Complex logarithm(Complex x) { return {numeric::log(modulus(x)), numeric::argument(x.im, x.re)}; }
+inline Complex logarithm(Complex x) {
+    return {numeric::log(modulus(x)), numeric::argument(x.im, x.re)};
+}
 
 /// The square root with a real part that is not negative.
 inline Complex squareRoot(Complex x) {

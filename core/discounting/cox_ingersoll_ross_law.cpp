@@ -13,16 +13,18 @@ namespace {
 /// Where ∫r is as good as 0: e^(−1e-18) is 1.
 constexpr double nothing = 1e-18;
 
-/// Below this ratio of deviation to mean the law is taken as normal: the quantile's error, of the order of deviation² / mean, is then
-/// 1e-12 of the mean.
+/// Below this ratio of deviation to mean the law is taken as normal: the quantile's error, of the order of
+/// deviation² / mean, is then 1e-12 of the mean.
 constexpr double normalBelow = 1e-6;
 
 /// The law of I = ∫r over `years` from its transform φ(λ) = E[e^(−λI)]:
 ///     P(I ≤ y) = 1/(2πi) ∫ e^(λy) φ(λ)/λ dλ,    density 1/(2πi) ∫ e^(λy) φ(λ) dλ
-/// over a line that crosses the real axis at the saddle point c > 0 of the integrand, where nothing is lost by cancellation, and is bent a
-/// little to the left into the hyperbola λ(v) = c + s·(sin δ·(1 − cosh v) + i·cos δ·sinh v), s the width of the saddle: φ has its
-/// singularities on the negative real axis only. In v the integrand is analytic in a strip of half-width δ about the real axis and dies
-/// double-exponentially, so that the trapezoidal rule with step h errs by about e^(−2πδ/h); it is cut where the integrand has fallen by e^(−42).
+/// over a line that crosses the real axis at the saddle point c > 0 of the integrand, where nothing is lost
+/// by cancellation, and is bent a little to the left into the hyperbola λ(v) = c + s·(sin δ·(1 − cosh v) +
+/// i·cos δ·sinh v), s the width of the saddle: φ has its singularities on the negative real axis only. In v
+/// the integrand is analytic in a strip of half-width δ about the real axis and dies double-exponentially, so
+/// that the trapezoidal rule with step h errs by about e^(−2πδ/h); it is cut where the integrand has fallen
+/// by e^(−42).
 class IntegratedRateLaw final : public LogLaw {
   public:
     IntegratedRateLaw(const CoxIngersollRoss& model, double years, double mean, double variance)
@@ -32,7 +34,9 @@ class IntegratedRateLaw final : public LogLaw {
         return x >= 0.0 ? 1.0 : std::clamp(1.0 - at(std::fmax(-x, nothing)).probability, 0.0, 1.0);
     }
 
-    [[nodiscard]] double quantile(double probability) const override { return -integralQuantile(1.0 - probability, probability); }
+    [[nodiscard]] double quantile(double probability) const override {
+        return -integralQuantile(1.0 - probability, probability);
+    }
 
     [[nodiscard]] double work() const override { return 200.0; }
 
@@ -56,7 +60,8 @@ class IntegratedRateLaw final : public LogLaw {
         return logTransform(Dual<1>::parameter(lambda, 0)).slope[0] + y - 1.0 / lambda;
     }
 
-    /// Where that derivative is 0, to a tenth: it only has to be near. Begun where it would be for a normal law.
+    /// Where that derivative is 0, to a tenth: it only has to be near. Begun where it would be for a normal
+    /// law.
     [[nodiscard]] double saddle(double y) const {
         const double above = y - mean_;
         const double root = std::sqrt(above * above + 4.0 * variance_);
@@ -83,7 +88,8 @@ class IntegratedRateLaw final : public LogLaw {
     [[nodiscard]] At at(double y) const {
         const double cross = saddle(y);
         const double nudge = 1e-3 * cross;
-        const double curvature = (saddleSlope(cross + nudge, y) - saddleSlope(cross - nudge, y)) / (2.0 * nudge);
+        const double curvature =
+            (saddleSlope(cross + nudge, y) - saddleSlope(cross - nudge, y)) / (2.0 * nudge);
         const double width = curvature > 0.0 ? std::fmin(1.0 / std::sqrt(curvature), cross) : cross;
         At sum;
         double crest = 0.0;
@@ -109,7 +115,8 @@ class IntegratedRateLaw final : public LogLaw {
         return {sum.probability * step * width / pi, sum.density * step * width / pi};
     }
 
-    /// The y with P(I ≤ y) = below, above = 1 − below: Newton's steps, kept inside a bracket that Cantelli's inequality gives.
+    /// The y with P(I ≤ y) = below, above = 1 − below: Newton's steps, kept inside a bracket that Cantelli's
+    /// inequality gives.
     [[nodiscard]] double integralQuantile(double below, double above) const {
         const double deviation = std::sqrt(variance_);
         double low = mean_ - deviation * std::sqrt(above / below);
@@ -121,7 +128,8 @@ class IntegratedRateLaw final : public LogLaw {
             low = nothing;
         }
         const double logVariance = numeric::log1p(variance_ / (mean_ * mean_));
-        double y = mean_ * numeric::exp(std::sqrt(logVariance) * numeric::normalQuantile(below) - logVariance / 2.0);
+        double y =
+            mean_ * numeric::exp(std::sqrt(logVariance) * numeric::normalQuantile(below) - logVariance / 2.0);
         for (int steps = 0; steps < 200; ++steps) {
             if (!(y > low && y < high)) {
                 y = high > 4.0 * low ? std::sqrt(low) * std::sqrt(high) : low + (high - low) / 2.0;

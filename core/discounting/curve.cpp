@@ -12,8 +12,8 @@ std::optional<double> RandomDiscount::standardError(std::span<const Date> /*date
     return std::nullopt;
 }
 
-outcome::Outcome<std::vector<Quantile>> RandomDiscount::quantiles(Date u,
-                                                                  std::span<const double> probabilities) const {
+outcome::Outcome<std::vector<Quantile>>
+RandomDiscount::quantiles(Date u, std::span<const double> probabilities) const {
     const outcome::Outcome<LogLawPtr> known = law(u);
     if (!known.ok()) {
         return known.faults();
@@ -23,9 +23,10 @@ outcome::Outcome<std::vector<Quantile>> RandomDiscount::quantiles(Date u,
     for (const double probability : probabilities) {
         const double factor = numeric::exp(known.value()->quantile(probability));
         if (!std::isfinite(factor) || factor <= 0.0) {
-            return outcome::Fault{"", "not-finite",
-                                  "A quantile of the discount factor for " + dates::toIso(u) +
-                                      " is beyond what a number holds; use a smaller volatility or a nearer date."};
+            return outcome::Fault{
+                "", "not-finite",
+                "A quantile of the discount factor for " + dates::toIso(u) +
+                    " is beyond what a number holds; use a smaller volatility or a nearer date."};
         }
         result.push_back({probability, factor});
     }

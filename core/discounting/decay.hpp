@@ -5,9 +5,10 @@
 #include <array>
 #include <cstddef>
 
-/// Internal to the folder: the functions of x = κt by which mean reversion enters the models. Each is entire, and is taken from its series
-/// where |x| ≤ 1, where the closed form loses its digits by cancellation (all of them near κ = 1e-7), and from its closed form beyond.
-/// For T a plain number ≥ 0, a dual, or a complex number of positive real part. Relative error below 1e-14 for plain numbers.
+/// Internal to the folder: the functions of x = κt by which mean reversion enters the models. Each is entire,
+/// and is taken from its series where |x| ≤ 1, where the closed form loses its digits by cancellation (all of
+/// them near κ = 1e-7), and from its closed form beyond. For T a plain number ≥ 0, a dual, or a complex
+/// number of positive real part. Relative error below 1e-14 for plain numbers.
 namespace forwright::discounting::detail {
 
 /// The coefficients of x⁰, x¹, … of a series: (−1)ⁿ·factor(n)/n! at xⁿ⁻ᶠⁱʳˢᵗ, n from `first`.
@@ -34,10 +35,11 @@ inline constexpr auto varianceSeries =
     decayCoefficients<23>(3, [](std::size_t n) { return 2.0 - powerOfTwo(n - 1); });
 inline constexpr auto startVarianceSeries =
     decayCoefficients<23>(3, [](std::size_t n) { return 2.0 * static_cast<double>(n) - powerOfTwo(n); });
-inline constexpr auto longRunVarianceSeries =
-    decayCoefficients<23>(3, [](std::size_t n) { return powerOfTwo(n - 1) + 2.0 - 2.0 * static_cast<double>(n); });
+inline constexpr auto longRunVarianceSeries = decayCoefficients<23>(
+    3, [](std::size_t n) { return powerOfTwo(n - 1) + 2.0 - 2.0 * static_cast<double>(n); });
 
-template <class T, std::size_t Terms> T polynomial(const std::array<double, Terms>& coefficients, const T& x) {
+template <class T, std::size_t Terms>
+T polynomial(const std::array<double, Terms>& coefficients, const T& x) {
     T sum = coefficients[Terms - 1];
     for (std::size_t i = Terms - 1; i-- > 0;) {
         sum = sum * x + coefficients[i];
@@ -68,7 +70,8 @@ template <class T> T decayVariance(const T& x) {
     return (x - 1.5 + 2.0 * e - 0.5 * e * e) / (x * x * x);
 }
 
-/// (1 − e^(−2x) − 2x·e^(−x))/x³, ⅓ at 0: the variance of Cox–Ingersoll–Ross's ∫r is σ²t³ times r0 times this …
+/// (1 − e^(−2x) − 2x·e^(−x))/x³, ⅓ at 0: the variance of Cox–Ingersoll–Ross's ∫r is σ²t³ times r0 times this
+/// …
 template <class T> T decayStartVariance(const T& x) {
     if (nearZero(x)) {
         return polynomial(startVarianceSeries, x);

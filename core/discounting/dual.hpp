@@ -6,7 +6,8 @@
 #include <cmath>
 #include <cstddef>
 
-/// Internal to the folder: a number that carries its derivatives along, so that a formula written once gives both.
+/// Internal to the folder: a number that carries its derivatives along, so that a formula written once gives
+/// both.
 namespace forwright::discounting::detail {
 
 /// A value and its derivatives by N parameters (forward-mode differentiation: exact but for rounding).
@@ -14,7 +15,8 @@ template <std::size_t N> struct Dual {
     double value = 0.0;
     std::array<double, N> slope{};
 
-    constexpr Dual(double constant = 0.0) : value(constant) {} // NOLINT(google-explicit-constructor): constants mix in formulas
+    constexpr Dual(double constant = 0.0)
+        : value(constant) {} // NOLINT(google-explicit-constructor): constants mix in formulas
 
     /// The i-th parameter itself.
     static constexpr Dual parameter(double at, std::size_t i) {
@@ -59,26 +61,50 @@ template <std::size_t N> constexpr Dual<N> operator/(const Dual<N>& a, const Dua
     const double ratio = a.value / b.value;
     return chain(a, b, ratio, 1.0 / b.value, -ratio / b.value);
 }
-template <std::size_t N> constexpr Dual<N> operator+(const Dual<N>& a, double b) { return a + Dual<N>(b); }
-template <std::size_t N> constexpr Dual<N> operator+(double a, const Dual<N>& b) { return Dual<N>(a) + b; }
-template <std::size_t N> constexpr Dual<N> operator-(const Dual<N>& a, double b) { return a - Dual<N>(b); }
-template <std::size_t N> constexpr Dual<N> operator-(double a, const Dual<N>& b) { return Dual<N>(a) - b; }
-template <std::size_t N> constexpr Dual<N> operator*(const Dual<N>& a, double b) { return chain(a, a.value * b, b); }
-template <std::size_t N> constexpr Dual<N> operator*(double a, const Dual<N>& b) { return b * a; }
+template <std::size_t N> constexpr Dual<N> operator+(const Dual<N>& a, double b) {
+    return a + Dual<N>(b);
+}
+template <std::size_t N> constexpr Dual<N> operator+(double a, const Dual<N>& b) {
+    return Dual<N>(a) + b;
+}
+template <std::size_t N> constexpr Dual<N> operator-(const Dual<N>& a, double b) {
+    return a - Dual<N>(b);
+}
+template <std::size_t N> constexpr Dual<N> operator-(double a, const Dual<N>& b) {
+    return Dual<N>(a) - b;
+}
+template <std::size_t N> constexpr Dual<N> operator*(const Dual<N>& a, double b) {
+    return chain(a, a.value * b, b);
+}
+template <std::size_t N> constexpr Dual<N> operator*(double a, const Dual<N>& b) {
+    return b * a;
+}
 template <std::size_t N> constexpr Dual<N> operator/(const Dual<N>& a, double b) {
     return chain(a, a.value / b, 1.0 / b);
 }
-template <std::size_t N> constexpr Dual<N> operator/(double a, const Dual<N>& b) { return Dual<N>(a) / b; }
+template <std::size_t N> constexpr Dual<N> operator/(double a, const Dual<N>& b) {
+    return Dual<N>(a) / b;
+}
 
 // The functions of formulas that are written for plain numbers, duals and complex numbers alike.
 
 /// How far from 0: what decides between a series and a closed form.
-inline double magnitude(double x) { return std::fabs(x); }
-inline double exponential(double x) { return numeric::exp(x); }
-inline double logarithm(double x) { return numeric::log(x); }
-inline double squareRoot(double x) { return std::sqrt(x); }
+inline double magnitude(double x) {
+    return std::fabs(x);
+}
+inline double exponential(double x) {
+    return numeric::exp(x);
+}
+inline double logarithm(double x) {
+    return numeric::log(x);
+}
+inline double squareRoot(double x) {
+    return std::sqrt(x);
+}
 
-template <std::size_t N> double magnitude(const Dual<N>& x) { return std::fabs(x.value); }
+template <std::size_t N> double magnitude(const Dual<N>& x) {
+    return std::fabs(x.value);
+}
 template <std::size_t N> Dual<N> exponential(const Dual<N>& x) {
     const double value = numeric::exp(x.value);
     return chain(x, value, value);

@@ -9,7 +9,8 @@ namespace {
 
 class FlatCurve final : public Curve {
   public:
-    FlatCurve(Date asOf, const Rate& rate, std::string rateAt) : Curve(asOf), rate_(rate), rateAt_(std::move(rateAt)) {}
+    FlatCurve(Date asOf, const Rate& rate, std::string rateAt)
+        : Curve(asOf), rate_(rate), rateAt_(std::move(rateAt)) {}
 
     [[nodiscard]] double logFactor(Date u) const override { return discounting::logFactor(rate_, asOf(), u); }
 

@@ -15,7 +15,9 @@ class NormalLaw final : public LogLaw {
   public:
     NormalLaw(double mean, double deviation) : mean_(mean), deviation_(deviation) {}
 
-    [[nodiscard]] double probabilityAtMost(double x) const override { return numeric::normalProbability((x - mean_) / deviation_); }
+    [[nodiscard]] double probabilityAtMost(double x) const override {
+        return numeric::normalProbability((x - mean_) / deviation_);
+    }
     [[nodiscard]] double quantile(double probability) const override {
         return mean_ + deviation_ * numeric::normalQuantile(probability);
     }
@@ -57,7 +59,8 @@ class SumLaw final : public LogLaw {
         if (atHigh.probability < wanted) {
             return high; // the odds sum to a little less than 1
         }
-        // From here on P(≤ low) < wanted ≤ P(≤ high): halve until the sums in between are few enough to be listed.
+        // From here on P(≤ low) < wanted ≤ P(≤ high): halve until the sums in between are few enough to be
+        // listed.
         while (atHigh.count - atLow.count > fewSums) {
             const double middle = low + (high - low) / 2.0;
             if (!(middle > low && middle < high)) {
@@ -105,7 +108,8 @@ class SumLaw final : public LogLaw {
         return result;
     }
 
-    /// The smallest of the sums in (low, high] with which the probability reaches `wanted`, it being `below` at low.
+    /// The smallest of the sums in (low, high] with which the probability reaches `wanted`, it being `below`
+    /// at low.
     [[nodiscard]] double firstReaching(double low, double high, double below, double wanted) const {
         std::vector<std::pair<double, double>> sums;
         std::size_t upTo = other_.values.size();
@@ -204,8 +208,9 @@ LogLawPtr sumLaw(Outcomes one, Outcomes other) {
 outcome::Outcome<LogLawPtr> mixtureLaw(std::vector<double> weights, std::vector<LogLawPtr> parts) {
     auto mixture = std::make_shared<const MixtureLaw>(std::move(weights), std::move(parts));
     if (mixture->work() > mostWork) {
-        return outcome::Fault{"", "too-many-outcomes",
-                              "The quantiles of so many random curves together would take too long; use fewer of them."};
+        return outcome::Fault{
+            "", "too-many-outcomes",
+            "The quantiles of so many random curves together would take too long; use fewer of them."};
     }
     return LogLawPtr(std::move(mixture));
 }

@@ -22,7 +22,8 @@ Blend harmonicMeanOfOrdered(double a, double b, double weightA, double weightB) 
     const double ratio = a / b;
     const double total = weightA + weightB;
     const double below = weightA + weightB * ratio;
-    return {total * a / below, total * weightA / (below * below), total * weightB * ratio * ratio / (below * below)};
+    return {total * a / below, total * weightA / (below * below),
+            total * weightB * ratio * ratio / (below * below)};
 }
 
 Blend innerSlope(double left, double right, double leftWidth, double rightWidth) {
@@ -56,8 +57,12 @@ Blend endSlope(double near, double far, double nearWidth, double farWidth) {
 
 std::vector<KnotSlope> monotoneSlopes(std::span<const double> x, std::span<const double> y) {
     const std::size_t knots = x.size();
-    const auto width = [&](std::size_t i) { return x[i + 1] - x[i]; };
-    const auto secant = [&](std::size_t i) { return (y[i + 1] - y[i]) / width(i); };
+    const auto width = [&](std::size_t i) {
+        return x[i + 1] - x[i];
+    };
+    const auto secant = [&](std::size_t i) {
+        return (y[i + 1] - y[i]) / width(i);
+    };
     std::vector<KnotSlope> slopes(knots);
     if (knots == 2) {
         const KnotSlope straight{secant(0), 0, {-1.0 / width(0), 1.0 / width(0), 0.0}};

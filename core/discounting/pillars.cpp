@@ -1,8 +1,7 @@
+#include "dates/date.hpp"
 #include "discounting/checks.hpp"
 #include "discounting/curves.hpp"
 #include "discounting/monotone_cubic.hpp"
-
-#include "dates/date.hpp"
 #include "numeric/elementary.hpp"
 
 #include <algorithm>
@@ -15,7 +14,8 @@ namespace {
 
 constexpr std::array<std::string_view, 3> interpolationNames{"log-linear", "linear-zero", "monotone-cubic"};
 
-/// The knots of a curve: t in years, y = −ln P, the start (0, 0) among them, and how each y follows its pillar's parameter.
+/// The knots of a curve: t in years, y = −ln P, the start (0, 0) among them, and how each y follows its
+/// pillar's parameter.
 struct Knots {
     std::vector<double> time{0.0};
     std::vector<double> y{0.0};
@@ -32,8 +32,9 @@ using KnotWeights = std::vector<KnotWeight>;
 std::string conventionOf(const Pillars& points) {
     const std::size_t count = points.pillars.size();
     return std::to_string(count) + (count == 1 ? " pillar, " : " pillars, ") +
-           (points.quote == PillarQuote::factor ? "discount factors"
-                                                : "zero rates " + discounting::conventionOf(points.convention)) +
+           (points.quote == PillarQuote::factor
+                ? "discount factors"
+                : "zero rates " + discounting::conventionOf(points.convention)) +
            ", " + std::string(nameOf(points.interpolation));
 }
 
@@ -71,9 +72,10 @@ class PillarCurve : public Curve {
             fault.at = "/pillars";
         }
         if (last > lastPillar_) {
-            review.notices.push_back({detail::place("/pillars", parameters_.size() - 1) + "/at", "beyond-last-pillar",
-                                      "The curve ends on " + dates::toIso(lastPillar_) + " and is needed to " +
-                                          dates::toIso(last) + "; " + heldBeyond() + "."});
+            review.notices.push_back(
+                {detail::place("/pillars", parameters_.size() - 1) + "/at", "beyond-last-pillar",
+                 "The curve ends on " + dates::toIso(lastPillar_) + " and is needed to " +
+                     dates::toIso(last) + "; " + heldBeyond() + "."});
         }
         return review;
     }
@@ -85,7 +87,8 @@ class PillarCurve : public Curve {
     [[nodiscard]] std::size_t upperKnot(double time) const {
         const auto from = knots_.time.begin() + 1;
         const auto found = std::lower_bound(from, knots_.time.end(), time);
-        return static_cast<std::size_t>((found == knots_.time.end() ? found - 1 : found) - knots_.time.begin());
+        return static_cast<std::size_t>((found == knots_.time.end() ? found - 1 : found) -
+                                        knots_.time.begin());
     }
 
   private:
@@ -146,7 +149,8 @@ class LinearZeroCurve final : public PillarCurve {
             return {{upper, time / knots().time[upper]}};
         }
         const double share = shareAt(time, upper);
-        return {{upper - 1, (1.0 - share) * time / knots().time[upper - 1]}, {upper, share * time / knots().time[upper]}};
+        return {{upper - 1, (1.0 - share) * time / knots().time[upper - 1]},
+                {upper, share * time / knots().time[upper]}};
     }
     [[nodiscard]] std::string heldBeyond() const override { return "its last zero rate is held"; }
 
@@ -165,7 +169,8 @@ class MonotoneCubicCurve final : public PillarCurve {
           slopes_(detail::monotoneSlopes(this->knots().time, this->knots().y)) {}
 
   private:
-    /// The four Hermite polynomials of the interval that ends at `upper`; past the last knot they are those of the straight line on.
+    /// The four Hermite polynomials of the interval that ends at `upper`; past the last knot they are those
+    /// of the straight line on.
     struct Hermite {
         double lowerY, upperY, lowerSlope, upperSlope;
     };
@@ -178,14 +183,15 @@ class MonotoneCubicCurve final : public PillarCurve {
         const double width = end - start;
         const double s = (time - start) / width;
         const double rest = 1.0 - s;
-        return {(1.0 + 2.0 * s) * rest * rest, s * s * (3.0 - 2.0 * s), width * s * rest * rest, -width * s * s * rest};
+        return {(1.0 + 2.0 * s) * rest * rest, s * s * (3.0 - 2.0 * s), width * s * rest * rest,
+                -width * s * s * rest};
     }
 
     [[nodiscard]] double yAt(double time) const override {
         const std::size_t upper = upperKnot(time);
         const Hermite h = hermiteAt(time, upper);
-        return h.lowerY * knots().y[upper - 1] + h.upperY * knots().y[upper] + h.lowerSlope * slopes_[upper - 1].slope +
-               h.upperSlope * slopes_[upper].slope;
+        return h.lowerY * knots().y[upper - 1] + h.upperY * knots().y[upper] +
+               h.lowerSlope * slopes_[upper - 1].slope + h.upperSlope * slopes_[upper].slope;
     }
 
     [[nodiscard]] KnotWeights weightsAt(double time) const override {
@@ -217,7 +223,8 @@ outcome::Faults faultsOf(Date asOf, const Pillars& points) {
         detail::requireLater(faults, at + "/at", pillar.at, asOf, previous, "A pillar's date");
         if (points.quote == PillarQuote::factor) {
             if (!std::isfinite(pillar.value) || pillar.value <= 0.0) {
-                faults.push_back({at + "/value", "not-positive", "A discount factor has to be a positive number."});
+                faults.push_back(
+                    {at + "/value", "not-positive", "A discount factor has to be a positive number."});
             }
             continue;
         }
@@ -274,9 +281,11 @@ Outcome<CurvePtr> pillars(Date asOf, const Pillars& points) {
     }
     switch (points.interpolation) {
     case Interpolation::linearZero:
-        return CurvePtr(std::make_shared<LinearZeroCurve>(asOf, std::move(parameters), std::move(knots), points));
+        return CurvePtr(
+            std::make_shared<LinearZeroCurve>(asOf, std::move(parameters), std::move(knots), points));
     case Interpolation::monotoneCubic:
-        return CurvePtr(std::make_shared<MonotoneCubicCurve>(asOf, std::move(parameters), std::move(knots), points));
+        return CurvePtr(
+            std::make_shared<MonotoneCubicCurve>(asOf, std::move(parameters), std::move(knots), points));
     case Interpolation::logLinear:
         break;
     }

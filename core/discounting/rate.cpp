@@ -12,7 +12,8 @@ namespace forwright::discounting {
 
 namespace {
 
-constexpr std::array<std::string_view, 6> names{"continuous", "simple", "annual", "semiannual", "quarterly", "monthly"};
+constexpr std::array<std::string_view, 6> names{"continuous", "simple",    "annual",
+                                                "semiannual", "quarterly", "monthly"};
 
 /// How often interest is added in a year; for the periodic compoundings only.
 double timesAYear(Compounding compounding) {
@@ -32,8 +33,8 @@ double timeBetween(const Rate& rate, Date from, Date to) {
     return from == to ? 0.0 : dates::yearFraction(rate.dayCount, from, to);
 }
 
-/// The longest year fraction from `from` to a day up to `to`. ACT/365L alone shrinks on the way, on a 29 February, as its
-/// denominator becomes 366.
+/// The longest year fraction from `from` to a day up to `to`. ACT/365L alone shrinks on the way, on a 29
+/// February, as its denominator becomes 366.
 double longestTime(const Rate& rate, Date from, Date to) {
     double longest = timeBetween(rate, from, to);
     if (rate.dayCount.kind != dates::DayCount::act365L) {
@@ -84,7 +85,8 @@ double logFactor(const Rate& rate, Date from, Date to) {
     default: {
         const double times = timesAYear(rate.compounding);
         const double interest = rate.value / times;
-        return interest > -1.0 ? -times * time * numeric::log1p(interest) : std::numeric_limits<double>::infinity();
+        return interest > -1.0 ? -times * time * numeric::log1p(interest)
+                               : std::numeric_limits<double>::infinity();
     }
     }
 }
@@ -130,15 +132,17 @@ std::optional<outcome::Fault> refusal(const Rate& rate, Date from, Date to) {
             return std::nullopt;
         }
         return outcome::Fault{"", "rate-too-low",
-                              "At this simple rate one unit at " + dates::toIso(from) + " would be worth nothing by " +
-                                  dates::toIso(to) + ": 1 + rate × years has to be positive."};
+                              "At this simple rate one unit at " + dates::toIso(from) +
+                                  " would be worth nothing by " + dates::toIso(to) +
+                                  ": 1 + rate × years has to be positive."};
     }
     if (1.0 + rate.value / timesAYear(rate.compounding) > 0.0) {
         return std::nullopt;
     }
-    return outcome::Fault{"", "rate-too-low",
-                          "At this rate one unit would be worth nothing after one period: 1 + rate / (times a year) has "
-                          "to be positive."};
+    return outcome::Fault{
+        "", "rate-too-low",
+        "At this rate one unit would be worth nothing after one period: 1 + rate / (times a year) has "
+        "to be positive."};
 }
 
 std::string conventionOf(const Rate& rate) {

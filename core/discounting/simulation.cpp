@@ -60,7 +60,7 @@ std::string_view nameOf(SimulationMethod method) {
 }
 
 std::optional<outcome::Fault> SimulationPlan::refusal() const {
-    const long fewest = method == SimulationMethod::pseudo ? 4 : scramblings;
+    const long fewest = method == SimulationMethod::pseudo ? 4 : 2 * scramblings;
     if (paths < fewest || paths > mostPaths) {
         return outcome::Fault{"/paths", "out-of-range",
                               "The number of paths has to be from " + std::to_string(fewest) + " to " +
@@ -197,9 +197,8 @@ void Simulation::measure(Tile& tile, std::size_t count) const {
 
 BlockSums Simulation::block(long index, BinCounts& counts) const {
     assert(index >= 0 && index < plan_.blocks() && counts.size() == bins_.count + 2);
-    const bool pairs = !isQuasi(plan_);
-    const long terms = plan_.pathsIn(index) / (pairs ? 2 : 1);
-    const long first = pairs ? index * (blockPaths / 2) : index / scramblings * terms;
+    const long terms = plan_.pathsIn(index) / 2;
+    const long first = isQuasi(plan_) ? index / scramblings * terms : index * (blockPaths / 2);
 
     Tile tile;
     tile.words.resize(maker_->numbers() * tilePaths);
@@ -217,22 +216,16 @@ BlockSums Simulation::block(long index, BinCounts& counts) const {
         fillWords(index, first + done, tile);
         maker_->make(tile.words.data(), count, tile.logFactors.data());
         measure(tile, count);
-        if (pairs) {
-            factors.swap(tile.factor);
-            values.swap(tile.value);
-            for (std::size_t path = 0; path < count; path += lanes::count) {
-                ratio.add(lanes::load(&tile.ratio[path]));
-            }
-            maker_->mirror(tile.words.data(), count, tile.logFactors.data());
-            measure(tile, count);
-        }
+        factors.swap(tile.factor);
+        values.swap(tile.value);
         for (std::size_t path = 0; path < count; path += lanes::count) {
-            Lanes x = lanes::load(&tile.factor[path]);
-            Lanes y = lanes::load(&tile.value[path]);
-            if (pairs) {
-                x = 0.5 * (x + lanes::load(&factors[path]));
-                y = 0.5 * (y + lanes::load(&values[path]));
-            }
+            ratio.add(lanes::load(&tile.ratio[path]));
+        }
+        maker_->mirror(tile.words.data(), count, tile.logFactors.data());
+        measure(tile, count);
+        for (std::size_t path = 0; path < count; path += lanes::count) {
+            const Lanes x = 0.5 * (lanes::load(&tile.factor[path]) + lanes::load(&factors[path]));
+            const Lanes y = 0.5 * (lanes::load(&tile.value[path]) + lanes::load(&values[path]));
             factor.add(x);
             value.add(y);
             factorSquared.add(x * x);
@@ -262,12 +255,12 @@ SimulationEstimate Simulation::estimate(std::span<const long> indices,
         const long paths = plan_.pathsIn(indices[i]);
         estimate.paths += paths;
         Spread& set = bySet[static_cast<std::size_t>(scramblingOf(indices[i]))];
-        set.terms += static_cast<double>(paths);
+        set.terms += static_cast<double>(paths / 2);
         set.factor += block.factor;
         set.value += block.value;
     }
     const auto paths = static_cast<double>(estimate.paths);
-    const double terms = isQuasi(plan_) ? paths : paths / 2.0;
+    const double terms = paths / 2.0;
     const double factorMean = all.factor / terms;
     const double valueMean = all.value / terms;
     estimate.factor = expectedFactor_ + factorMean;

@@ -1,6 +1,7 @@
 // The native program: one request a line in, one answer a line out (JSON Lines).
 #include "contract/answer.hpp"
 
+#include <algorithm>
 #include <array>
 #include <cerrno>
 #include <cstdio>
@@ -8,6 +9,7 @@
 #include <string>
 #include <string_view>
 #include <unistd.h>
+#include <vector>
 
 namespace {
 
@@ -54,11 +56,16 @@ class LineReader {
 
     void keep(std::string_view bytes) {
         begun_ = begun_ || !bytes.empty();
-        line_.append(bytes.substr(0, mostKept - line_.size()));
+        bytes = bytes.substr(0, mostKept - line_.size());
+        const std::size_t needed = line_.size() + bytes.size();
+        if (needed > line_.capacity()) {
+            line_.reserve(std::min(std::max(needed, 2 * line_.capacity()), mostKept));
+        }
+        line_.insert(line_.end(), bytes.begin(), bytes.end());
     }
 
     template <class Take> void finish(Take&& take) {
-        take(std::string_view{line_});
+        take(std::string_view{line_.data(), line_.size()});
         line_.clear();
         begun_ = false;
         if (line_.capacity() > ordinaryCapacity) {
@@ -66,7 +73,7 @@ class LineReader {
         }
     }
 
-    std::string line_;
+    std::vector<char> line_; ///< its capacity is what is reserved, where a string's may be twice that
     bool begun_ = false;
 };
 

@@ -7,7 +7,6 @@
 #include <cmath>
 #include <filesystem>
 #include <fstream>
-#include <regex>
 #include <set>
 #include <sstream>
 
@@ -56,6 +55,44 @@ void checkExpectation(const json& answer, const json& expected) {
     }
 }
 
+/// What stands in quotes from `begin` on, where it is a code: small letters and hyphens, and a comma after
+/// it.
+std::string codeAt(const std::string& sources, std::size_t begin) {
+    const std::size_t end = sources.find_first_not_of("abcdefghijklmnopqrstuvwxyz-", begin);
+    const bool isCode = end != begin && end != std::string::npos && sources.compare(end, 2, "\",") == 0;
+    return isCode ? sources.substr(begin, end - begin) : "";
+}
+
+/// Whether a sentence of a fault or notice begins at `begin`: a capital in quotes, or a text that is put
+/// together.
+bool isSentence(const std::string& sources, std::size_t begin) {
+    begin = sources.find_first_not_of(" \n", begin);
+    const bool isText = sources[begin] == '"' && sources[begin + 1] >= 'A' && sources[begin + 1] <= 'Z';
+    return isText || sources.compare(begin, 11, "std::string") == 0 ||
+           sources.compare(begin, 7, "dates::") == 0;
+}
+
+/// Every code that stands right before its sentence, in a statement that makes a fault or a notice.
+std::vector<std::string> codesBeforeSentences(const std::string& sources) {
+    std::vector<std::string> codes;
+    for (std::size_t quote = sources.find('"'); quote != std::string::npos;
+         quote = sources.find('"', quote + 1)) {
+        const std::string code = codeAt(sources, quote + 1);
+        if (code.empty() || !isSentence(sources, quote + code.size() + 3)) {
+            continue;
+        }
+        const std::size_t begin = sources.rfind(';', quote) + 1;
+        const std::string statement = sources.substr(begin, quote - begin);
+        for (const char* maker : {"fault", "Fault", "notice", "Notice", "push_back"}) {
+            if (statement.find(maker) != std::string::npos) {
+                codes.push_back(code);
+                break;
+            }
+        }
+    }
+    return codes;
+}
+
 } // namespace
 
 TEST_SUITE("contract golden") {
@@ -87,15 +124,11 @@ TEST_SUITE("contract golden") {
             known.insert(std::string{entry.code});
             CHECK_MESSAGE(sources.find('"' + std::string{entry.code} + '"') != std::string::npos, entry.code);
         }
-        // A fault or a notice is made by its code, right before its sentence.
-        const std::regex remark{
-            R"re((?:[Ff]ault|[Nn]otice|push_back)\b[^;]*?"([a-z]+(?:-[a-z]+)*)",\s*(?:"[A-Z]|std::string|dates::))re"};
-        int found = 0;
-        for (std::sregex_iterator match{sources.begin(), sources.end(), remark}, end; match != end; ++match) {
-            ++found;
-            CHECK_MESSAGE(known.count((*match)[1]) == 1, (*match)[1].str());
+        const std::vector<std::string> used = codesBeforeSentences(sources);
+        for (const std::string& code : used) {
+            CHECK_MESSAGE(known.count(code) == 1, "core/contract/catalogue.cpp lacks: " << code);
         }
-        CHECK(found >= 20);
+        CHECK(used.size() >= 20);
     }
 
     TEST_CASE("the list of codes that people read is the catalogue") {

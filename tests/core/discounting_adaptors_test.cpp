@@ -8,7 +8,8 @@ TEST_SUITE("discounting: adaptors") {
         const CurvePtr curve = made(vasicek(asOf, {0.03, 0.1, 0.05, 0.01}));
         const CurvePtr moved = withSpread(curve, 0.002);
         for (const int days : {0, 1, 500, 9000}) {
-            checkNear(moved->logFactor(afterDays(days)), curve->logFactor(afterDays(days)) - 0.002 * days / 365, 1e-15);
+            checkNear(moved->logFactor(afterDays(days)),
+                      curve->logFactor(afterDays(days)) - 0.002 * days / 365, 1e-15);
             CHECK(moved->logFactorGradient(afterDays(days)) == curve->logFactorGradient(afterDays(days)));
         }
         CHECK(moved->parameters().size() == 4);
@@ -41,14 +42,16 @@ TEST_SUITE("discounting: adaptors") {
         CHECK(held->logFactor(later) == 0);
         CHECK(true_->logFactor(later) == 0);
         CHECK(held->logFactor(afterDays(730)) == curve->logFactor(afterDays(700)));
-        checkRelative(true_->factor(afterDays(730)), curve->factor(afterDays(730)) / curve->factor(later), 1e-15);
+        checkRelative(true_->factor(afterDays(730)), curve->factor(afterDays(730)) / curve->factor(later),
+                      1e-15);
         CHECK(held->logFactorGradient(afterDays(730)) == curve->logFactorGradient(afterDays(700)));
         CHECK(held->review(afterDays(1030)).notices.empty());
         CHECK(held->review(afterDays(1031)).notices.size() == 1);
         CHECK(true_->review(afterDays(1001)).notices.size() == 1);
         for (std::size_t i = 0; i < 2; ++i) {
             checkNear(true_->logFactorGradient(afterDays(730))[i],
-                      curve->logFactorGradient(afterDays(730))[i] - curve->logFactorGradient(later)[i], 1e-16);
+                      curve->logFactorGradient(afterDays(730))[i] - curve->logFactorGradient(later)[i],
+                      1e-16);
         }
         CHECK(held->random() == nullptr);
         CHECK(true_->random() == nullptr);
@@ -58,12 +61,14 @@ TEST_SUITE("discounting: adaptors") {
         CHECK(codes(withSpread(flatAt(6.5), 1.0)->review(afterYears(100)).faults) == " not-finite");
         CHECK(withSpread(flatAt(6.5), -1.0)->review(afterYears(100)).faults.empty());
         CHECK(codes(withSpread(flatAt(8), -8)->review(afterYears(100)).faults) == "/rate not-finite");
-        CHECK(codes(atAverageRate(made(vasicek(asOf, {10, 0, 0, 0.06})))->review(afterYears(100)).faults) == " not-finite");
+        CHECK(codes(atAverageRate(made(vasicek(asOf, {10, 0, 0, 0.06})))->review(afterYears(100)).faults) ==
+              " not-finite");
     }
 
     TEST_CASE("each says what it does") {
         const CurvePtr curve = flatAt(0.03);
-        for (const CurvePtr& adapted : {withSpread(curve, 0.1), heldByTime(curve, afterDays(1)), forwardsComeTrue(curve, afterDays(1))}) {
+        for (const CurvePtr& adapted : {withSpread(curve, 0.1), heldByTime(curve, afterDays(1)),
+                                        forwardsComeTrue(curve, afterDays(1))}) {
             CHECK(adapted->convention().starts_with(curve->convention() + ", "));
         }
     }

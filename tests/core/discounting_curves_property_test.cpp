@@ -1,7 +1,6 @@
 #ifndef __EMSCRIPTEN__
 
 #include "discounting_fixtures.hpp"
-
 #include "numeric/elementary.hpp"
 
 #include <rapidcheck.h>
@@ -13,7 +12,8 @@ using namespace forwright::discounting::testing;
 
 namespace {
 
-constexpr std::array interpolations{Interpolation::logLinear, Interpolation::linearZero, Interpolation::monotoneCubic};
+constexpr std::array interpolations{Interpolation::logLinear, Interpolation::linearZero,
+                                    Interpolation::monotoneCubic};
 
 /// A curve of factors: gaps in days and forward rates between `low` and `high` in basis points.
 Pillars arbitraryFactors(Interpolation interpolation, int low, int high) {
@@ -46,9 +46,11 @@ TEST_SUITE("discounting: properties of curves") {
                 for (const Pillar& pillar : points.pillars) {
                     RC_ASSERT(std::fabs(curve->factor(pillar.at) / pillar.value - 1) < 1e-14);
                 }
-                // The steepest a monotone cubic gets is 3 times the steepest secant; a zero rate's own move is of that order over a day.
+                // The steepest a monotone cubic gets is 3 times the steepest secant; a zero rate's own move
+                // is of that order over a day.
                 for (int days = 0; days < 3000; days += 13) {
-                    const double move = curve->logFactor(afterDays(days + 1)) - curve->logFactor(afterDays(days));
+                    const double move =
+                        curve->logFactor(afterDays(days + 1)) - curve->logFactor(afterDays(days));
                     if (interpolation != Interpolation::linearZero) {
                         RC_ASSERT(std::fabs(move) <= 3 * 0.2 / 365 * (1 + 1e-9));
                     }
@@ -57,18 +59,21 @@ TEST_SUITE("discounting: properties of curves") {
         }
     }
 
-    TEST_CASE("monotone-cubic: forward rates are never negative where the factors never rise, past the end as well") {
+    TEST_CASE("monotone-cubic: forward rates are never negative where the factors never rise, past the end "
+              "as well") {
         CHECK(rc::check("no negative forward", [] {
             const Pillars points = arbitraryFactors(Interpolation::monotoneCubic, 0, 2000);
             const CurvePtr curve = pillars(asOf, points).value();
             const int last = static_cast<int>((points.pillars.back().at - asOf).count()) + 100;
             for (int days = 0; days < last; ++days) {
-                RC_ASSERT(curve->logFactor(afterDays(days + 1)) <= curve->logFactor(afterDays(days)) * (1 - 4e-16));
+                RC_ASSERT(curve->logFactor(afterDays(days + 1)) <=
+                          curve->logFactor(afterDays(days)) * (1 - 4e-16));
             }
         }));
     }
 
-    TEST_CASE("the parts of a gradient move the whole: all zero rates up by a little moves ln P by −t times that") {
+    TEST_CASE(
+        "the parts of a gradient move the whole: all zero rates up by a little moves ln P by −t times that") {
         for (const Interpolation interpolation : interpolations) {
             CHECK(rc::check("parallel move", [interpolation] {
                 // Homogeneous of degree one in the zero rates: ln P is the sum of parameter times derivative.
@@ -91,7 +96,8 @@ TEST_SUITE("discounting: properties of curves") {
             const double low = *rc::gen::inRange(-500, 3000) * 1e-4;
             const double high = low + *rc::gen::inRange(1, 3000) * 1e-4;
             const double weight = *rc::gen::inRange(1, 100) * 0.01;
-            const CurvePtr curve = scenarios(asOf, {{weight, flatAt(low)}, {1 - weight, flatAt(high)}}).value();
+            const CurvePtr curve =
+                scenarios(asOf, {{weight, flatAt(low)}, {1 - weight, flatAt(high)}}).value();
             const Date u = afterDays(*rc::gen::inRange(1, 36500));
             RC_ASSERT(curve->logFactor(u) < flatAt(low)->logFactor(u));
             RC_ASSERT(curve->logFactor(u) > flatAt(high)->logFactor(u));

@@ -72,15 +72,19 @@ inline void checkRelative(double a, double b, double error) {
     checkNear(a, b, error * std::fabs(b));
 }
 
-/// The derivative of f at x by central differences of the eighth order (Fornberg, Mathematics of Computation 51 (1988), table 1).
+/// The derivative of f at x by central differences of the eighth order (Fornberg, Mathematics of Computation
+/// 51 (1988), table 1).
 inline double centralDifference(const std::function<double(double)>& f, double x, double step) {
-    const auto pair = [&](double far) { return f(x + far * step) - f(x - far * step); };
+    const auto pair = [&](double far) {
+        return f(x + far * step) - f(x - far * step);
+    };
     return (4.0 / 5.0 * pair(1) - 1.0 / 5.0 * pair(2) + 4.0 / 105.0 * pair(3) - 1.0 / 280.0 * pair(4)) / step;
 }
 
 /// The same from one side, of the sixth order (table 3).
 inline double forwardDifference(const std::function<double(double)>& f, double x, double step) {
-    constexpr double weights[] = {-49.0 / 20.0, 6.0, -15.0 / 2.0, 20.0 / 3.0, -15.0 / 4.0, 6.0 / 5.0, -1.0 / 6.0};
+    constexpr double weights[] = {-49.0 / 20.0, 6.0,       -15.0 / 2.0, 20.0 / 3.0,
+                                  -15.0 / 4.0,  6.0 / 5.0, -1.0 / 6.0};
     double sum = 0.0;
     for (int i = 0; i < 7; ++i) {
         sum += weights[i] * f(x + i * step);

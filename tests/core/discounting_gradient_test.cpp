@@ -1,5 +1,4 @@
 #include "discounting_fixtures.hpp"
-
 #include "numeric/elementary.hpp"
 
 #include <functional>
@@ -31,13 +30,16 @@ void checkGradient(const Maker& make, const std::vector<double>& at, double step
                 moved[i] = value;
                 return make(moved)->logFactor(afterDays(days));
             };
-            const double difference = at[i] == 0.0 ? forwardDifference(f, 0.0, step) : centralDifference(f, at[i], std::fmin(step, std::fabs(at[i]) / 8));
+            const double difference =
+                at[i] == 0.0 ? forwardDifference(f, 0.0, step)
+                             : centralDifference(f, at[i], std::fmin(step, std::fabs(at[i]) / 8));
             checkNear(gradient[i], difference, error * std::fmax(1.0, std::fabs(difference)));
         }
     }
 }
 
-Maker pillarMaker(PillarQuote quote, Interpolation interpolation, const std::vector<int>& days, const Rate& convention = {}) {
+Maker pillarMaker(PillarQuote quote, Interpolation interpolation, const std::vector<int>& days,
+                  const Rate& convention = {}) {
     return [=](const std::vector<double>& values) {
         Pillars points;
         points.quote = quote;
@@ -45,7 +47,8 @@ Maker pillarMaker(PillarQuote quote, Interpolation interpolation, const std::vec
         points.interpolation = interpolation;
         for (std::size_t i = 0; i < days.size(); ++i) {
             // A factor's parameter is the continuous zero rate.
-            const double value = quote == PillarQuote::zero ? values[i] : numeric::exp(-values[i] * days[i] / 365.0);
+            const double value =
+                quote == PillarQuote::zero ? values[i] : numeric::exp(-values[i] * days[i] / 365.0);
             points.pillars.push_back({afterDays(days[i]), value});
         }
         return made(pillars(asOf, points));
@@ -57,7 +60,9 @@ Maker pillarMaker(PillarQuote quote, Interpolation interpolation, const std::vec
 TEST_SUITE("discounting: gradients against differences of high order") {
     TEST_CASE("flat, every compounding") {
         for (const std::string_view name : compoundingNames()) {
-            const Maker make = [&](const std::vector<double>& p) { return flat(asOf, rateOf(p[0], *parseCompounding(name), dates::DayCount::act360)); };
+            const Maker make = [&](const std::vector<double>& p) {
+                return flat(asOf, rateOf(p[0], *parseCompounding(name), dates::DayCount::act360));
+            };
             checkGradient(make, {0.04}, 2e-4);
             checkGradient(make, {-0.02}, 2e-4);
         }
@@ -66,15 +71,19 @@ TEST_SUITE("discounting: gradients against differences of high order") {
     TEST_CASE("pillars, every interpolation and quote") {
         const std::vector<int> days{91, 182, 365, 730, 1825, 3650};
         const std::vector<double> values{0.021, 0.024, 0.03, 0.033, 0.036, 0.034};
-        for (const Interpolation interpolation : {Interpolation::logLinear, Interpolation::linearZero, Interpolation::monotoneCubic}) {
+        for (const Interpolation interpolation :
+             {Interpolation::logLinear, Interpolation::linearZero, Interpolation::monotoneCubic}) {
             checkGradient(pillarMaker(PillarQuote::factor, interpolation, days), values, 1e-4);
-            checkGradient(pillarMaker(PillarQuote::zero, interpolation, days, rateOf(0, Compounding::annual, dates::DayCount::act360)), values, 1e-4);
+            checkGradient(pillarMaker(PillarQuote::zero, interpolation, days,
+                                      rateOf(0, Compounding::annual, dates::DayCount::act360)),
+                          values, 1e-4);
             checkGradient(pillarMaker(PillarQuote::zero, interpolation, {91}), {0.02}, 1e-4);
             checkGradient(pillarMaker(PillarQuote::zero, interpolation, {91, 500}), {0.02, -0.01}, 1e-4);
         }
     }
 
-    TEST_CASE("monotone-cubic where forwards change sign, and where an end slope is cut to 0 or to three secants") {
+    TEST_CASE(
+        "monotone-cubic where forwards change sign, and where an end slope is cut to 0 or to three secants") {
         const std::vector<int> days{91, 182, 365, 730};
         const auto check = [&](const std::vector<double>& values) {
             checkGradient(pillarMaker(PillarQuote::zero, Interpolation::monotoneCubic, days), values, 2e-5);
@@ -86,7 +95,9 @@ TEST_SUITE("discounting: gradients against differences of high order") {
     }
 
     TEST_CASE("Vasicek") {
-        const Maker make = [](const std::vector<double>& p) { return made(vasicek(asOf, {p[0], p[1], p[2], p[3]})); };
+        const Maker make = [](const std::vector<double>& p) {
+            return made(vasicek(asOf, {p[0], p[1], p[2], p[3]}));
+        };
         checkGradient(make, {0.03, 0.1, 0.06, 0.01}, 1e-3);
         checkGradient(make, {-0.02, 2.0, 0.01, 0.3}, 1e-3);
         checkGradient(make, {0.03, 0.0, 0.06, 0.01}, 1e-3);
@@ -94,7 +105,9 @@ TEST_SUITE("discounting: gradients against differences of high order") {
     }
 
     TEST_CASE("Cox–Ingersoll–Ross") {
-        const Maker make = [](const std::vector<double>& p) { return made(coxIngersollRoss(asOf, {p[0], p[1], p[2], p[3]})); };
+        const Maker make = [](const std::vector<double>& p) {
+            return made(coxIngersollRoss(asOf, {p[0], p[1], p[2], p[3]}));
+        };
         checkGradient(make, {0.03, 0.1, 0.06, 0.1}, 1e-3);
         checkGradient(make, {0.05, 3.0, 0.01, 1.5}, 1e-3);
         checkGradient(make, {0.03, 0.0, 0.06, 0.1}, 2e-4);
@@ -104,9 +117,13 @@ TEST_SUITE("discounting: gradients against differences of high order") {
     }
 
     TEST_CASE("Ho–Lee and Hull–White: the model's own parameters do not move P") {
-        const Maker ho = [](const std::vector<double>& p) { return made(hoLee(asOf, p[0], flatAt(p[1]))); };
+        const Maker ho = [](const std::vector<double>& p) {
+            return made(hoLee(asOf, p[0], flatAt(p[1])));
+        };
         checkGradient(ho, {0.01, 0.03}, 1e-3);
-        const Maker hull = [](const std::vector<double>& p) { return made(hullWhite(asOf, p[0], p[1], flatAt(p[2]))); };
+        const Maker hull = [](const std::vector<double>& p) {
+            return made(hullWhite(asOf, p[0], p[1], flatAt(p[2])));
+        };
         checkGradient(hull, {0.1, 0.01, 0.03}, 1e-3);
         CHECK(hull({0.1, 0.01, 0.03})->parameters()[0].at == "/meanReversion");
         CHECK(hull({0.1, 0.01, 0.03})->parameters()[2].at == "/fit/rate");
@@ -114,7 +131,9 @@ TEST_SUITE("discounting: gradients against differences of high order") {
 
     TEST_CASE("policy meetings: the overnight rate and every move") {
         const Maker make = [](const std::vector<double>& p) {
-            return made(policyMeetings(asOf, p[0], {{afterDays(50), {{p[1], 0.3}, {p[2], 0.7}}}, {afterDays(100), {{p[3], 0.5}, {p[4], 0.5}, {p[5], 0.0}}}}));
+            return made(policyMeetings(asOf, p[0],
+                                       {{afterDays(50), {{p[1], 0.3}, {p[2], 0.7}}},
+                                        {afterDays(100), {{p[3], 0.5}, {p[4], 0.5}, {p[5], 0.0}}}}));
         };
         checkGradient(make, {0.03, -0.0025, 0.0025, -0.05, 0.9, 0.1}, 1e-3);
         CHECK(make({0.03, 0, 0, 0, 0, 0})->parameters()[4].at == "/meetings/1/moves/1/by");
@@ -122,7 +141,11 @@ TEST_SUITE("discounting: gradients against differences of high order") {
 
     TEST_CASE("scenarios, nested") {
         const Maker make = [](const std::vector<double>& p) {
-            return made(scenarios(asOf, {{0.3, flatAt(p[0])}, {0.7, made(scenarios(asOf, {{0.5, flatAt(p[1])}, {0.5, made(vasicek(asOf, {p[2], p[3], p[4], p[5]}))}}))}}));
+            return made(scenarios(
+                asOf,
+                {{0.3, flatAt(p[0])},
+                 {0.7, made(scenarios(asOf, {{0.5, flatAt(p[1])},
+                                             {0.5, made(vasicek(asOf, {p[2], p[3], p[4], p[5]}))}}))}}));
         };
         checkGradient(make, {0.02, 0.05, 0.03, 0.1, 0.06, 0.01}, 1e-3);
     }

@@ -1,8 +1,7 @@
-#include "discounting_fixtures.hpp"
-
 #include "discounting/mean_reversion.hpp"
-#include "numeric/normal.hpp"
+#include "discounting_fixtures.hpp"
 #include "numeric/elementary.hpp"
+#include "numeric/normal.hpp"
 
 #include <array>
 
@@ -21,7 +20,8 @@ CurvePtr coxIngersollRossOf(double r0, double meanReversion, double longRun, dou
 
 constexpr std::array<double, 7> levels{0.01, 0.05, 0.25, 0.5, 0.75, 0.95, 0.99};
 
-std::vector<Quantile> quantilesOf(const CurvePtr& curve, Date u, std::span<const double> probabilities = levels) {
+std::vector<Quantile> quantilesOf(const CurvePtr& curve, Date u,
+                                  std::span<const double> probabilities = levels) {
     REQUIRE(curve->random() != nullptr);
     const auto result = curve->random()->quantiles(u, probabilities);
     REQUIRE(result.ok());
@@ -31,7 +31,8 @@ std::vector<Quantile> quantilesOf(const CurvePtr& curve, Date u, std::span<const
 } // namespace
 
 TEST_SUITE("discounting: short-rate models") {
-    TEST_CASE("Vasicek as printed (Hull, Options, Futures and Other Derivatives; from memory, reproduced by independent arithmetic)") {
+    TEST_CASE("Vasicek as printed (Hull, Options, Futures and Other Derivatives; from memory, reproduced by "
+              "independent arithmetic)") {
         checkNear(vasicekOf(0.10, 0.1, 0.1, 0.02)->factor(afterYears(10)), 0.38046, 5e-6);
         const CurvePtr curve = vasicekOf(0.05, 0.1, 0.08, 0.015);
         checkNear(curve->factor(afterYears(1)), 0.94988, 5e-6);
@@ -46,9 +47,12 @@ TEST_SUITE("discounting: short-rate models") {
     }
 
     TEST_CASE("Cox–Ingersoll–Ross as printed (Hull; from memory, reproduced by independent arithmetic)") {
-// The book's 0.0632 is 0.02/√0.1 rounded: from it comes the figure printed; 0.0632 itself gives 0.37984.
-        checkNear(coxIngersollRossOf(0.10, 0.1, 0.1, 0.02 / std::sqrt(0.1))->factor(afterYears(10)), 0.37986, 5e-6);
-        checkNear(coxIngersollRossOf(0.10, 0.1, 0.1, 0.0632)->factor(afterYears(10)), 0.379839484134608, 1e-14);
+        // The book's 0.0632 is 0.02/√0.1 rounded: from it comes the figure printed; 0.0632 itself gives
+        // 0.37984.
+        checkNear(coxIngersollRossOf(0.10, 0.1, 0.1, 0.02 / std::sqrt(0.1))->factor(afterYears(10)), 0.37986,
+                  5e-6);
+        checkNear(coxIngersollRossOf(0.10, 0.1, 0.1, 0.0632)->factor(afterYears(10)), 0.379839484134608,
+                  1e-14);
     }
 
     TEST_CASE("Cox–Ingersoll–Ross with the volatility matched at r0 (computed from the closed form)") {
@@ -58,13 +62,17 @@ TEST_SUITE("discounting: short-rate models") {
         checkNear(curve->factor(afterYears(30)), 0.1473544690, 5e-11);
     }
 
-    TEST_CASE("Ho–Lee over a flat 5 % with no drift correction is Vasicek without mean reversion (computed: e^(−rT + σ²T³/6))") {
+    TEST_CASE("Ho–Lee over a flat 5 % with no drift correction is Vasicek without mean reversion (computed: "
+              "e^(−rT + σ²T³/6))") {
         checkNear(vasicekOf(0.05, 0, 0, 0.01)->factor(afterYears(10)), 0.6167242144, 5e-11);
     }
 
-    TEST_CASE("futures over forward from the gap and the variance of ∫r (Cox, Ingersoll and Ross 1981; computed)") {
-        const auto ratio = [](double assetVolatility, double correlation, double volatility, double meanReversion, double years) {
-            return numeric::exp(correlation * assetVolatility * volatility * reversionGap(meanReversion, years) +
+    TEST_CASE(
+        "futures over forward from the gap and the variance of ∫r (Cox, Ingersoll and Ross 1981; computed)") {
+        const auto ratio = [](double assetVolatility, double correlation, double volatility,
+                              double meanReversion, double years) {
+            return numeric::exp(correlation * assetVolatility * volatility *
+                                    reversionGap(meanReversion, years) +
                                 integralVariance(meanReversion, volatility, years));
         };
         checkNear(ratio(0.2, 0.5, 0.01, 0, 1), 1.000533475581, 5e-13);
@@ -84,7 +92,8 @@ TEST_SUITE("discounting: short-rate models") {
         // Hull–White fitted to Vasicek's own curve is that model.
         const CurvePtr model = vasicekOf(0.05, 0.1, 0.08, 0.01);
         checkRelative(*reverting->random()->varianceLog(to), *model->random()->varianceLog(to), 1e-15);
-        CHECK(made(hullWhite(asOf, 0, 0.01, fit))->random()->varianceLog(to) == plain->random()->varianceLog(to));
+        CHECK(made(hullWhite(asOf, 0, 0.01, fit))->random()->varianceLog(to) ==
+              plain->random()->varianceLog(to));
     }
 
     TEST_CASE("P = e^(mean + variance/2) and the quantiles are the normal law's") {
@@ -94,7 +103,8 @@ TEST_SUITE("discounting: short-rate models") {
         const double variance = *curve->random()->varianceLog(to);
         checkRelative(curve->logFactor(to), mean + variance / 2, 1e-15);
         for (const Quantile& quantile : quantilesOf(curve, to)) {
-            checkNear((numeric::log(quantile.factor) - mean) / std::sqrt(variance), numeric::normalQuantile(quantile.probability), 1e-13);
+            checkNear((numeric::log(quantile.factor) - mean) / std::sqrt(variance),
+                      numeric::normalQuantile(quantile.probability), 1e-13);
         }
         CHECK(curve->random()->quantileError() == 0);
         CHECK(curve->random()->paths() == 0);
@@ -122,17 +132,23 @@ TEST_SUITE("discounting: short-rate models") {
         const Date to = afterYears(30);
         for (const double tiny : {1e-3, 1e-5, 1e-7, 1e-9, 1e-12, 1e-100, 1e-150, 1e-300, 5e-324}) {
             CAPTURE(tiny);
-            checkNear(vasicekOf(0.03, tiny, 0.06, 0.01)->logFactor(to), vasicekOf(0.03, 0, 0.06, 0.01)->logFactor(to), 30 * tiny + 1e-15);
-            checkNear(coxIngersollRossOf(0.03, tiny, 0.06, 0.1)->logFactor(to), coxIngersollRossOf(0.03, 0, 0.06, 0.1)->logFactor(to), 30 * tiny + 1e-15);
-            checkNear(coxIngersollRossOf(0.03, 0.1, 0.06, tiny)->logFactor(to), coxIngersollRossOf(0.03, 0.1, 0.06, 0)->logFactor(to), 500 * tiny * tiny + 1e-15);
-            checkNear(coxIngersollRossOf(0.03, 0, 0.06, tiny)->logFactor(to), -0.9, 500 * tiny * tiny + 1e-15);
-            checkNear(coxIngersollRossOf(0.03, tiny, 0.06, tiny)->logFactor(to), -0.9, 30 * tiny + 500 * tiny * tiny + 1e-15);
+            checkNear(vasicekOf(0.03, tiny, 0.06, 0.01)->logFactor(to),
+                      vasicekOf(0.03, 0, 0.06, 0.01)->logFactor(to), 30 * tiny + 1e-15);
+            checkNear(coxIngersollRossOf(0.03, tiny, 0.06, 0.1)->logFactor(to),
+                      coxIngersollRossOf(0.03, 0, 0.06, 0.1)->logFactor(to), 30 * tiny + 1e-15);
+            checkNear(coxIngersollRossOf(0.03, 0.1, 0.06, tiny)->logFactor(to),
+                      coxIngersollRossOf(0.03, 0.1, 0.06, 0)->logFactor(to), 500 * tiny * tiny + 1e-15);
+            checkNear(coxIngersollRossOf(0.03, 0, 0.06, tiny)->logFactor(to), -0.9,
+                      500 * tiny * tiny + 1e-15);
+            checkNear(coxIngersollRossOf(0.03, tiny, 0.06, tiny)->logFactor(to), -0.9,
+                      30 * tiny + 500 * tiny * tiny + 1e-15);
         }
     }
 
     TEST_CASE("at its own date every curve is 1, and its law a point") {
-        for (const CurvePtr& curve : {vasicekOf(0.03, 0.1, 0.06, 0.01), coxIngersollRossOf(0.03, 0.1, 0.06, 0.1), coxIngersollRossOf(0, 0, 0, 0),
-                                      made(hoLee(asOf, 0.01, flatAt(0.02)))}) {
+        for (const CurvePtr& curve :
+             {vasicekOf(0.03, 0.1, 0.06, 0.01), coxIngersollRossOf(0.03, 0.1, 0.06, 0.1),
+              coxIngersollRossOf(0, 0, 0, 0), made(hoLee(asOf, 0.01, flatAt(0.02)))}) {
             CHECK(curve->logFactor(asOf) == 0);
             CHECK(curve->random()->meanLog(asOf) == 0);
             CHECK(curve->random()->varianceLog(asOf) == 0);
@@ -157,7 +173,8 @@ TEST_SUITE("discounting: short-rate models") {
                                 const double log = curve->logFactor(afterDays(days));
                                 REQUIRE(std::isfinite(log));
                                 const auto faults = curve->review(afterDays(days)).faults;
-                                REQUIRE((std::fabs(log) <= largestLogFactor || codes(faults) == " not-finite"));
+                                REQUIRE(
+                                    (std::fabs(log) <= largestLogFactor || codes(faults) == " not-finite"));
                                 for (const double slope : curve->logFactorGradient(afterDays(days))) {
                                     REQUIRE(std::isfinite(slope));
                                 }
@@ -171,14 +188,17 @@ TEST_SUITE("discounting: short-rate models") {
 
     TEST_CASE("review looks at every day, not the last alone") {
         // At 10 for 75 years, e^-750; from then on at -10, so that the end is e^-500 again.
-        const CurvePtr curve = made(policyMeetings(asOf, 10, {{afterYears(75), {{-10, 1}}}, {afterDays(365 * 75 + 1), {{-10, 1}}}}));
+        const CurvePtr curve = made(
+            policyMeetings(asOf, 10, {{afterYears(75), {{-10, 1}}}, {afterDays(365 * 75 + 1), {{-10, 1}}}}));
         checkNear(curve->logFactor(afterYears(100)), -500, 0.1);
         CHECK(codes(curve->review(afterYears(100)).faults) == " not-finite");
         CHECK(curve->review(afterYears(70)).faults.empty());
     }
 
-    TEST_CASE("Cox–Ingersoll–Ross probabilities against another inversion of the transform, and quantiles undo them") {
-        // Computed with mpmath 1.3 at 40 digits: adaptive quadrature of the published transform on a straight vertical line.
+    TEST_CASE("Cox–Ingersoll–Ross probabilities against another inversion of the transform, and quantiles "
+              "undo them") {
+        // Computed with mpmath 1.3 at 40 digits: adaptive quadrature of the published transform on a straight
+        // vertical line.
         struct Row {
             CoxIngersollRoss model;
             int years;
@@ -199,28 +219,35 @@ TEST_SUITE("discounting: short-rate models") {
         for (const Row& row : rows) {
             const CurvePtr curve = made(coxIngersollRoss(asOf, row.model));
             CHECK(curve->random()->quantileError() == 1e-9);
-            checkNear(curve->random()->law(afterYears(row.years)).value()->probabilityAtMost(row.logFactor), row.probability, 2e-12);
+            checkNear(curve->random()->law(afterYears(row.years)).value()->probabilityAtMost(row.logFactor),
+                      row.probability, 2e-12);
             const std::array at{row.probability};
-            checkRelative(quantilesOf(curve, afterYears(row.years), at).front().factor, numeric::exp(row.logFactor), 1e-9);
+            checkRelative(quantilesOf(curve, afterYears(row.years), at).front().factor,
+                          numeric::exp(row.logFactor), 1e-9);
         }
     }
 
-    TEST_CASE("Cox–Ingersoll–Ross at its limits: where volatility fades the law is normal, and quantiles never cross") {
+    TEST_CASE("Cox–Ingersoll–Ross at its limits: where volatility fades the law is normal, and quantiles "
+              "never cross") {
         const Date to = afterYears(5);
         for (const double volatility : {1e-3, 1e-4, 1e-5, 2e-6, 1e-6, 1e-8, 1e-12}) {
             const CurvePtr curve = coxIngersollRossOf(0.05, 0.3, 0.05, volatility);
             const double deviation = std::sqrt(*curve->random()->varianceLog(to));
             // A law that leans to high rates: its median is off its mean, until no double can show it.
             const double median = numeric::log(quantilesOf(curve, to)[3].factor);
-            CHECK((volatility < 1e-5 || median > curve->random()->meanLog(to) + 0.1 * deviation * deviation / 0.25));
+            CHECK((volatility < 1e-5 ||
+                   median > curve->random()->meanLog(to) + 0.1 * deviation * deviation / 0.25));
             for (const Quantile& quantile : quantilesOf(curve, to)) {
-                const double normal = curve->random()->meanLog(to) + deviation * numeric::normalQuantile(quantile.probability);
+                const double normal =
+                    curve->random()->meanLog(to) + deviation * numeric::normalQuantile(quantile.probability);
                 // What the law's skewness, about 4 deviations over the mean, moves a quantile by.
                 checkNear(numeric::log(quantile.factor), normal, 20 * deviation * deviation / 0.25 + 1e-15);
             }
         }
-        for (const CoxIngersollRoss& model : {CoxIngersollRoss{0, 0.1, 0.05, 0.1}, CoxIngersollRoss{0.03, 0, 0, 10}, CoxIngersollRoss{1e-8, 0, 0, 1},
-                                              CoxIngersollRoss{10, 100, 10, 10}, CoxIngersollRoss{1e-300, 0, 0, 10}}) {
+        for (const CoxIngersollRoss& model :
+             {CoxIngersollRoss{0, 0.1, 0.05, 0.1}, CoxIngersollRoss{0.03, 0, 0, 10},
+              CoxIngersollRoss{1e-8, 0, 0, 1}, CoxIngersollRoss{10, 100, 10, 10},
+              CoxIngersollRoss{1e-300, 0, 0, 10}}) {
             for (const int days : {1, 30, 3650}) {
                 const CurvePtr curve = made(coxIngersollRoss(asOf, model));
                 if (curve->review(afterDays(days)).faults.empty()) {

@@ -1,5 +1,4 @@
 #include "discounting_fixtures.hpp"
-
 #include "numeric/elementary.hpp"
 
 #include <algorithm>
@@ -26,7 +25,8 @@ double listed(std::vector<std::pair<double, double>> outcomes, double probabilit
 }
 
 /// Every path of the meetings before u: ln D and its odds.
-std::vector<std::pair<double, double>> everyPath(double overnight, const std::vector<PolicyMeeting>& meetings, Date u) {
+std::vector<std::pair<double, double>> everyPath(double overnight, const std::vector<PolicyMeeting>& meetings,
+                                                 Date u) {
     std::vector<std::pair<double, double>> paths{{-overnight * forwright::dates::years(asOf, u), 1.0}};
     for (const PolicyMeeting& meeting : meetings) {
         if (meeting.date >= u) {
@@ -35,7 +35,8 @@ std::vector<std::pair<double, double>> everyPath(double overnight, const std::ve
         std::vector<std::pair<double, double>> next;
         for (const auto& [log, odds] : paths) {
             for (const RateMove& move : meeting.moves) {
-                next.emplace_back(log - move.by * forwright::dates::years(meeting.date, u), odds * move.probability);
+                next.emplace_back(log - move.by * forwright::dates::years(meeting.date, u),
+                                  odds * move.probability);
             }
         }
         paths = next;
@@ -64,13 +65,16 @@ double quantileOf(const CurvePtr& curve, Date u, double probability) {
 
 TEST_SUITE("discounting: policy meetings") {
     TEST_CASE("one meeting by hand: a half-year in force") {
-        const CurvePtr curve = made(policyMeetings(asOf, 0.03, {{afterDays(365), {{-0.01, 0.25}, {0.02, 0.75}}}}));
+        const CurvePtr curve =
+            made(policyMeetings(asOf, 0.03, {{afterDays(365), {{-0.01, 0.25}, {0.02, 0.75}}}}));
         CHECK(curve->factor(asOf) == 1);
         checkRelative(curve->logFactor(afterDays(365)), -0.03, 1e-15);
-        checkRelative(curve->factor(afterDays(730)), std::exp(-0.06) * (0.25 * std::exp(0.01) + 0.75 * std::exp(-0.02)), 1e-15);
+        checkRelative(curve->factor(afterDays(730)),
+                      std::exp(-0.06) * (0.25 * std::exp(0.01) + 0.75 * std::exp(-0.02)), 1e-15);
         checkRelative(curve->random()->meanLog(afterDays(730)), -0.06 - 0.0125, 1e-15);
         checkRelative(*curve->random()->varianceLog(afterDays(730)), 0.25 * 0.75 * 0.03 * 0.03, 1e-14);
-        CHECK(curve->convention() == "overnight rate continuous ACT/365.FIXED with 1 policy meeting, expected discount factor");
+        CHECK(curve->convention() ==
+              "overnight rate continuous ACT/365.FIXED with 1 policy meeting, expected discount factor");
     }
 
     TEST_CASE("P, mean, variance and quantiles against the list of every path") {
@@ -102,8 +106,10 @@ TEST_SUITE("discounting: policy meetings") {
         }
     }
 
-    TEST_CASE("a probability that is just reached is reached: 0.3 + 0.35 + 0.1 is 0.75, though the sum rounds below it") {
-        const CurvePtr curve = made(policyMeetings(asOf, 0.0, {{afterDays(1), {{-0.01, 0.25}, {0.0, 0.1}, {0.01, 0.35}, {0.02, 0.3}}}}));
+    TEST_CASE("a probability that is just reached is reached: 0.3 + 0.35 + 0.1 is 0.75, though the sum "
+              "rounds below it") {
+        const CurvePtr curve = made(policyMeetings(
+            asOf, 0.0, {{afterDays(1), {{-0.01, 0.25}, {0.0, 0.1}, {0.01, 0.35}, {0.02, 0.3}}}}));
         CHECK(0.3 + 0.35 + 0.1 < 0.75);
         checkNear(quantileOf(curve, afterDays(366), 0.75), 0, 3e-16);
         checkNear(quantileOf(curve, afterDays(366), 0.750001), 0.01, 3e-16);
@@ -111,7 +117,8 @@ TEST_SUITE("discounting: policy meetings") {
         checkNear(quantileOf(curve, afterDays(366), 0.300001), -0.01, 3e-16);
     }
 
-    TEST_CASE("24 meetings of 3 moves have their quantiles, as a simulation with a printed seed sees them; too many have none") {
+    TEST_CASE("24 meetings of 3 moves have their quantiles, as a simulation with a printed seed sees them; "
+              "too many have none") {
         const std::vector<PolicyMeeting> meetings = meetingsOf(24, 40);
         const CurvePtr curve = made(policyMeetings(asOf, 0.03, meetings));
         const Date u = afterDays(1000);
@@ -132,8 +139,10 @@ TEST_SUITE("discounting: policy meetings") {
         const auto law = curve->random()->law(u).value();
         for (const double probability : levels) {
             const double quantile = law->quantile(probability);
-            const auto below = std::count_if(simulated.begin(), simulated.end(), [&](double log) { return log <= quantile; });
-            checkNear(static_cast<double>(below) / 200000.0, probability, 5 * std::sqrt(probability * (1 - probability) / 200000));
+            const auto below = std::count_if(simulated.begin(), simulated.end(),
+                                             [&](double log) { return log <= quantile; });
+            checkNear(static_cast<double>(below) / 200000.0, probability,
+                      5 * std::sqrt(probability * (1 - probability) / 200000));
             // It is the smallest that reaches the probability.
             CHECK(law->probabilityAtMost(quantile) >= probability - 1e-12);
             CHECK(law->probabilityAtMost(quantile - 1e-12) < probability);
@@ -150,20 +159,32 @@ TEST_SUITE("discounting: policy meetings") {
 
     TEST_CASE("a move that can't happen changes nothing, however large; equal moves are one") {
         const CurvePtr plain = made(policyMeetings(asOf, 0.03, {{afterDays(100), {{0.01, 1.0}}}}));
-        const CurvePtr odd = made(policyMeetings(asOf, 0.03, {{afterDays(100), {{-10, 0.0}, {0.01, 0.5}, {0.01, 0.5}}}}));
+        const CurvePtr odd =
+            made(policyMeetings(asOf, 0.03, {{afterDays(100), {{-10, 0.0}, {0.01, 0.5}, {0.01, 0.5}}}}));
         for (const int days : {50, 100, 101, 36500}) {
-            checkNear(odd->logFactor(afterDays(days)), plain->logFactor(afterDays(days)), 1e-16 + 1e-15 * days / 365);
-            checkNear(quantileOf(odd, afterDays(days), 0.5), plain->logFactor(afterDays(days)), 1e-16 + 1e-15 * days / 365);
+            checkNear(odd->logFactor(afterDays(days)), plain->logFactor(afterDays(days)),
+                      1e-16 + 1e-15 * days / 365);
+            checkNear(quantileOf(odd, afterDays(days), 0.5), plain->logFactor(afterDays(days)),
+                      1e-16 + 1e-15 * days / 365);
         }
     }
 
     TEST_CASE("faults") {
-        CHECK(codes(policyMeetings(asOf, 11, {{asOf, {}}, {afterDays(5), {{-11, 0.5}, {0, 1.5}}}, {afterDays(5), {{0, 0.5}, {0.01, 0.4}}}, {afterDays(4), {{0, 1 + 2e-9}}}})) ==
-              "/overnight out-of-range /meetings/0/date not-after-as-of /meetings/0/moves empty-list /meetings/1/moves/0/by out-of-range "
-              "/meetings/1/moves/1/probability out-of-range /meetings/2/date not-rising /meetings/2/moves sum-not-one /meetings/3/date not-rising "
+        CHECK(codes(policyMeetings(asOf, 11,
+                                   {{asOf, {}},
+                                    {afterDays(5), {{-11, 0.5}, {0, 1.5}}},
+                                    {afterDays(5), {{0, 0.5}, {0.01, 0.4}}},
+                                    {afterDays(4), {{0, 1 + 2e-9}}}})) ==
+              "/overnight out-of-range /meetings/0/date not-after-as-of /meetings/0/moves empty-list "
+              "/meetings/1/moves/0/by out-of-range "
+              "/meetings/1/moves/1/probability out-of-range /meetings/2/date not-rising /meetings/2/moves "
+              "sum-not-one /meetings/3/date not-rising "
               "/meetings/3/moves/0/probability out-of-range");
         CHECK(made(policyMeetings(asOf, 0.01, {}))->logFactor(afterYears(1)) == -0.01);
-        CHECK(codes(made(policyMeetings(asOf, 10, {{afterDays(1), {{10, 1}}}}))->review(afterYears(50)).faults) == " not-finite");
+        CHECK(
+            codes(
+                made(policyMeetings(asOf, 10, {{afterDays(1), {{10, 1}}}}))->review(afterYears(50)).faults) ==
+            " not-finite");
     }
 }
 
@@ -198,10 +219,11 @@ TEST_SUITE("discounting: scenarios") {
     }
 
     TEST_CASE("random scenarios: the quantile is where the mixed probabilities reach it") {
-        const CurvePtr curve = made(scenarios(asOf, {{0.3, made(vasicek(asOf, {0.03, 0.1, 0.05, 0.02}))},
-                                                     {0.4, made(coxIngersollRoss(asOf, {0.05, 0.3, 0.02, 0.1}))},
-                                                     {0.1, made(policyMeetings(asOf, 0.02, meetingsOf(6, 50)))},
-                                                     {0.2, made(scenarios(asOf, {{0.5, flatAt(0.01)}, {0.5, flatAt(0.10)}}))}}));
+        const CurvePtr curve =
+            made(scenarios(asOf, {{0.3, made(vasicek(asOf, {0.03, 0.1, 0.05, 0.02}))},
+                                  {0.4, made(coxIngersollRoss(asOf, {0.05, 0.3, 0.02, 0.1}))},
+                                  {0.1, made(policyMeetings(asOf, 0.02, meetingsOf(6, 50)))},
+                                  {0.2, made(scenarios(asOf, {{0.5, flatAt(0.01)}, {0.5, flatAt(0.10)}}))}}));
         const Date u = afterYears(4);
         const auto law = curve->random()->law(u).value();
         for (const double probability : levels) {
@@ -229,13 +251,15 @@ TEST_SUITE("discounting: scenarios") {
 
     TEST_CASE("faults and notices come from below with their place") {
         CHECK(codes(scenarios(asOf, {})) == "/scenarios empty-list");
-        CHECK(codes(scenarios(asOf, {{-0.1, flatAt(0)}, {0.5, flatAt(0)}})) == "/scenarios/0/weight out-of-range");
+        CHECK(codes(scenarios(asOf, {{-0.1, flatAt(0)}, {0.5, flatAt(0)}})) ==
+              "/scenarios/0/weight out-of-range");
         CHECK(codes(scenarios(asOf, {{0.6, flatAt(0)}, {0.5, flatAt(0)}})) == "/scenarios sum-not-one");
         Pillars points;
         points.quote = PillarQuote::factor;
         points.pillars = {{afterDays(10), 0.99}};
         const CurvePtr curve = made(scenarios(asOf, {{0.5, made(pillars(asOf, points))}, {0.5, flatAt(10)}}));
-        CHECK(codes(curve->review(afterDays(11)).notices) == "/scenarios/0/curve/pillars/0/at beyond-last-pillar");
+        CHECK(codes(curve->review(afterDays(11)).notices) ==
+              "/scenarios/0/curve/pillars/0/at beyond-last-pillar");
         CHECK(codes(curve->review(afterYears(90)).faults) == "/scenarios/1/curve/rate not-finite");
         std::vector<Scenario> many(200, {1.0 / 200, made(coxIngersollRoss(asOf, {0.05, 0.3, 0.02, 0.1}))});
         const auto refused = made(scenarios(asOf, many))->random()->quantiles(afterYears(1), levels);
@@ -245,19 +269,27 @@ TEST_SUITE("discounting: scenarios") {
             meetings.push_back({afterDays(10 * k), {{-0.0025 - 1e-5 * k, 0.3}, {0.0, 0.4}, {0.0025, 0.3}}});
         }
         const CurvePtr nested = made(scenarios(asOf, {{1.0, made(policyMeetings(asOf, 0.03, meetings))}}));
-        CHECK(codes(nested->random()->quantiles(afterYears(3), levels)) == "/scenarios/0/curve/meetings too-many-outcomes");
-        CHECK(codes(made(hullWhite(asOf, 0, 10, flatAt(0.05)))->random()->quantiles(afterYears(50), levels)) == " not-finite");
-        CHECK(codes(hullWhite(asOf, -1, 11, nested)) == "/meanReversion out-of-range /volatility out-of-range /fit random-fit");
+        CHECK(codes(nested->random()->quantiles(afterYears(3), levels)) ==
+              "/scenarios/0/curve/meetings too-many-outcomes");
+        CHECK(
+            codes(made(hullWhite(asOf, 0, 10, flatAt(0.05)))->random()->quantiles(afterYears(50), levels)) ==
+            " not-finite");
+        CHECK(codes(hullWhite(asOf, -1, 11, nested)) ==
+              "/meanReversion out-of-range /volatility out-of-range /fit random-fit");
         CHECK(codes(hoLee(asOf, std::nan(""), flatAt(0))) == "/volatility out-of-range");
-        CHECK(codes(made(hoLee(asOf, 0.01, made(pillars(asOf, points))))->review(afterDays(11)).notices) == "/fit/pillars/0/at beyond-last-pillar");
-        CHECK(codes(vasicek(asOf, {-1, -1, 11, 11})) == "/r0 out-of-range /meanReversion out-of-range /longRun out-of-range /volatility out-of-range");
-        CHECK(codes(coxIngersollRoss(asOf, {-0.01, 101, -0.01, std::nan("")})) == "/r0 out-of-range /meanReversion out-of-range /longRun out-of-range /volatility out-of-range");
+        CHECK(codes(made(hoLee(asOf, 0.01, made(pillars(asOf, points))))->review(afterDays(11)).notices) ==
+              "/fit/pillars/0/at beyond-last-pillar");
+        CHECK(codes(vasicek(asOf, {-1, -1, 11, 11})) ==
+              "/r0 out-of-range /meanReversion out-of-range /longRun out-of-range /volatility out-of-range");
+        CHECK(codes(coxIngersollRoss(asOf, {-0.01, 101, -0.01, std::nan("")})) ==
+              "/r0 out-of-range /meanReversion out-of-range /longRun out-of-range /volatility out-of-range");
     }
 }
 
 TEST_SUITE("discounting: samples") {
     TEST_CASE("by hand: means at the dates, log-linear between, the last forward after") {
-        const CurvePtr curve = made(samples(asOf, {{afterDays(100), afterDays(200)}, {0.99, 0.97, 0.97, 0.93}}));
+        const CurvePtr curve =
+            made(samples(asOf, {{afterDays(100), afterDays(200)}, {0.99, 0.97, 0.97, 0.93}}));
         checkRelative(curve->factor(afterDays(100)), 0.98, 1e-15);
         checkRelative(curve->factor(afterDays(200)), 0.95, 1e-15);
         checkRelative(curve->factor(afterDays(50)), std::sqrt(0.98), 1e-15);
@@ -273,13 +305,16 @@ TEST_SUITE("discounting: samples") {
         CHECK(curve->convention() == "mean of 2 simulated paths, log-linear");
         // Linear in D between the order statistics 0.93 and 0.97.
         checkRelative(quantileOf(curve, afterDays(200), 0.25), std::log(0.94), 1e-14);
-        checkNear(curve->random()->law(afterDays(200)).value()->probabilityAtMost(std::log(0.94)), 0.25, 1e-14);
+        checkNear(curve->random()->law(afterDays(200)).value()->probabilityAtMost(std::log(0.94)), 0.25,
+                  1e-14);
     }
 
     TEST_CASE("quantiles of five values: positions p·(n − 1), as spreadsheets and R's default take them") {
         const CurvePtr curve = made(samples(asOf, {{afterDays(365)}, {0.95, 0.91, 0.99, 0.90, 0.97}}));
         const auto law = curve->random()->law(afterDays(365)).value();
-        const auto factorAt = [&](double probability) { return numeric::exp(law->quantile(probability)); };
+        const auto factorAt = [&](double probability) {
+            return numeric::exp(law->quantile(probability));
+        };
         checkRelative(factorAt(0.5), 0.95, 1e-15);
         checkRelative(factorAt(0.25), 0.91, 1e-15);
         checkRelative(factorAt(0.9), 0.97 + 0.6 * 0.02, 1e-14);
@@ -289,24 +324,35 @@ TEST_SUITE("discounting: samples") {
 
     TEST_CASE("standard error of the mean and of a sum over whole paths") {
         // Two dates that move together: the sum of both has twice the deviation, the difference none.
-        const CurvePtr curve = made(samples(asOf, {{afterDays(100), afterDays(200)}, {0.98, 0.97, 0.96, 0.95, 0.97, 0.96, 0.97, 0.96}}));
+        const CurvePtr curve = made(samples(
+            asOf, {{afterDays(100), afterDays(200)}, {0.98, 0.97, 0.96, 0.95, 0.97, 0.96, 0.97, 0.96}}));
         const auto& random = *curve->random();
-        const double deviation = std::sqrt((0.01 * 0.01 + 0.01 * 0.01) / 3); // mean 0.97 of 0.98, 0.96, 0.97, 0.97
+        const double deviation =
+            std::sqrt((0.01 * 0.01 + 0.01 * 0.01) / 3); // mean 0.97 of 0.98, 0.96, 0.97, 0.97
         const auto error = [&](double first, double second) {
-            return *random.standardError(std::array{afterDays(100), afterDays(200)}, std::array{first, second});
+            return *random.standardError(std::array{afterDays(100), afterDays(200)},
+                                         std::array{first, second});
         };
         checkRelative(error(1, 0), deviation / 2, 1e-12);
         checkRelative(error(1, 1), 2 * deviation / 2, 1e-12);
         checkNear(error(1, -1), 0, 3e-16);
-        checkRelative(*random.standardError(std::array{afterDays(50)}, std::array{1.0}), curve->factor(afterDays(50)) * 0.5 / 0.97 * deviation / 2, 1e-12);
-        CHECK_FALSE(made(samples(asOf, {{afterDays(1)}, {0.9}}))->random()->standardError(std::array{afterDays(1)}, std::array{1.0}).has_value());
-        checkRelative(quantileOf(made(samples(asOf, {{afterDays(1)}, {0.9}})), afterDays(1), 0.3), std::log(0.9), 1e-15);
+        checkRelative(*random.standardError(std::array{afterDays(50)}, std::array{1.0}),
+                      curve->factor(afterDays(50)) * 0.5 / 0.97 * deviation / 2, 1e-12);
+        CHECK_FALSE(made(samples(asOf, {{afterDays(1)}, {0.9}}))
+                        ->random()
+                        ->standardError(std::array{afterDays(1)}, std::array{1.0})
+                        .has_value());
+        checkRelative(quantileOf(made(samples(asOf, {{afterDays(1)}, {0.9}})), afterDays(1), 0.3),
+                      std::log(0.9), 1e-15);
     }
 
-    TEST_CASE("the standard error is the spread of the mean over many simulations (printed seed, 400 of 500 paths)") {
+    TEST_CASE("the standard error is the spread of the mean over many simulations (printed seed, 400 of 500 "
+              "paths)") {
         std::mt19937_64 generator(7);
         MESSAGE("seed 7");
-        const auto uniform = [&] { return static_cast<double>(generator() >> 11U) * 0x1p-53; };
+        const auto uniform = [&] {
+            return static_cast<double>(generator() >> 11U) * 0x1p-53;
+        };
         double sum = 0, square = 0, claimed = 0;
         for (int run = 0; run < 400; ++run) {
             SamplePaths paths{{afterDays(365), afterDays(730)}, {}};
@@ -330,11 +376,15 @@ TEST_SUITE("discounting: samples") {
     TEST_CASE("faults") {
         CHECK(codes(samples(asOf, {})) == "/dates empty-list /factors empty-list");
         CHECK(codes(samples(asOf, {{asOf, afterDays(5), afterDays(5)}, {1, 0, -1, std::nan("")}})) ==
-              "/dates/0 not-after-as-of /dates/2 not-rising /factors row-length /factors/0/1 not-positive /factors/0/2 not-positive /factors/1/0 not-positive");
+              "/dates/0 not-after-as-of /dates/2 not-rising /factors row-length /factors/0/1 not-positive "
+              "/factors/0/2 not-positive /factors/1/0 not-positive");
         const auto all = samples(asOf, {{afterDays(1)}, std::vector<double>(150, -1.0)}).faults();
         CHECK(all.size() == 101);
         CHECK(all.back().at == "/factors");
-        CHECK(codes(samples(asOf, {{afterDays(1)}, std::vector<double>(2000001, 1.0)})) == "/factors too-many");
-        CHECK(codes(made(samples(asOf, {{afterDays(1), afterDays(2)}, {1, 1e-10}}))->review(afterYears(1)).faults) == " not-finite");
+        CHECK(codes(samples(asOf, {{afterDays(1)}, std::vector<double>(2000001, 1.0)})) ==
+              "/factors too-many");
+        CHECK(codes(made(samples(asOf, {{afterDays(1), afterDays(2)}, {1, 1e-10}}))
+                        ->review(afterYears(1))
+                        .faults) == " not-finite");
     }
 }

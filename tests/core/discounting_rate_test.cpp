@@ -1,5 +1,4 @@
 #include "discounting_fixtures.hpp"
-
 #include "numeric/elementary.hpp"
 
 using namespace forwright;
@@ -18,9 +17,12 @@ TEST_SUITE("discounting: rates") {
         CHECK(conventionOf(rateOf(0.03, Compounding::simple, dates::DayCount::act360)) == "simple ACT/360");
     }
 
-    TEST_CASE("the factor of one unit a year ahead, each compounding (computed: e^-0.06, 1/1.06, 1.03^-2 …)") {
+    TEST_CASE(
+        "the factor of one unit a year ahead, each compounding (computed: e^-0.06, 1/1.06, 1.03^-2 …)") {
         const Date to = afterYears(1);
-        const auto factor = [&](Compounding compounding) { return numeric::exp(logFactor(rateOf(0.06, compounding), asOf, to)); };
+        const auto factor = [&](Compounding compounding) {
+            return numeric::exp(logFactor(rateOf(0.06, compounding), asOf, to));
+        };
         checkRelative(factor(Compounding::continuous), 0.9417645335842487, 1e-15);
         checkRelative(factor(Compounding::simple), 1 / 1.06, 1e-15);
         checkRelative(factor(Compounding::annual), 1 / 1.06, 1e-15);
@@ -29,7 +31,8 @@ TEST_SUITE("discounting: rates") {
         checkRelative(factor(Compounding::monthly), std::pow(1.005, -12), 1e-14);
     }
 
-    TEST_CASE("simple interest, 272 days at 4 %: 2.9808 % on ACT/365.FIXED, 3.0222 % on ACT/360 (printed in a treasurers' handbook)") {
+    TEST_CASE("simple interest, 272 days at 4 %: 2.9808 % on ACT/365.FIXED, 3.0222 % on ACT/360 (printed in "
+              "a treasurers' handbook)") {
         const Date to = afterDays(272);
         const auto interest = [&](dates::DayCount dayCount) {
             return numeric::exp(-logFactor(rateOf(0.04, Compounding::simple, dayCount), asOf, to)) - 1;
@@ -40,7 +43,8 @@ TEST_SUITE("discounting: rates") {
 
     TEST_CASE("BUS/252 daily factor of 16.62 % a year: 0.00061031 (printed)") {
         const Date monday = day("2026-06-01");
-        const double log = logFactor(rateOf(0.1662, Compounding::annual, dates::DayCount::bus252), monday, day("2026-06-02"));
+        const double log = logFactor(rateOf(0.1662, Compounding::annual, dates::DayCount::bus252), monday,
+                                     day("2026-06-02"));
         checkNear(numeric::exp(-log) - 1, 0.00061031, 5e-9);
     }
 
@@ -57,7 +61,8 @@ TEST_SUITE("discounting: rates") {
                     return logFactor(moved, asOf, to);
                 };
                 checkNear(logFactorSlope(rate, asOf, to), centralDifference(logAt, value, 1e-2), 1e-8);
-                checkNear(valueFromLogFactor(rate, asOf, to, logFactor(rate, asOf, to)), value, 1e-14 * (1 + std::fabs(value)));
+                checkNear(valueFromLogFactor(rate, asOf, to, logFactor(rate, asOf, to)), value,
+                          1e-14 * (1 + std::fabs(value)));
             }
         }
     }
@@ -82,7 +87,8 @@ TEST_SUITE("discounting: rates") {
     }
 
     TEST_CASE("ACT/365L shrinks on a 29 February: what is refused the day before stays refused after it") {
-        // From 2027-03-01, 365/365 of a year has passed on 2028-02-29 − 1 day, and 365/366 on 2028-02-29 itself is less.
+        // From 2027-03-01, 365/365 of a year has passed on 2028-02-29 − 1 day, and 365/366 on 2028-02-29
+        // itself is less.
         const Date from = day("2027-02-28");
         const Rate rate = rateOf(-1.0, Compounding::simple, dates::DayCount::act365L);
         CHECK_FALSE(refusal(rate, from, day("2028-02-27")));

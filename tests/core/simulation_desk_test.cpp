@@ -126,7 +126,7 @@ TEST_SUITE("simulation: desk") {
         const forward::Market market =
             withFunding(plain(forward::AssetKind::share, "2026-12-01", 100.0, 0.0),
                         vasicekOf(plain(forward::AssetKind::share, "2026-12-01", 100.0, 0.0)));
-        const discounting::SimulationPlan plan{discounting::SimulationMethod::quasi, 16, 3};
+        const discounting::SimulationPlan plan{discounting::SimulationMethod::quasi, 32, 3};
         const desk::RateFan exact = *valueOf(desk::simulate(market, askedFor("2030-12-02", plan))).fan;
         CHECK(exact.closedForm);
         REQUIRE(exact.steps.size() == 24);

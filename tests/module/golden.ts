@@ -1,5 +1,5 @@
-import { readdirSync, readFileSync } from "node:fs";
-import { fileURLToPath } from "node:url";
+import { readdirSync, readFileSync } from 'node:fs';
+import { fileURLToPath } from 'node:url';
 
 /** What an answer must hold at a place. */
 export interface Expectation {
@@ -24,17 +24,17 @@ export interface GoldenCase {
   readonly expect: readonly Expectation[];
 }
 
-const folder = fileURLToPath(new URL("../golden/", import.meta.url));
+const folder = fileURLToPath(new URL('../golden/', import.meta.url));
 
 /** Every case of every file of tests/golden: {"cases": [GoldenCase, …]}. */
 export function goldenCases(): GoldenCase[] {
   return readdirSync(folder)
-    .filter((file) => file.endsWith(".json"))
+    .filter((file) => file.endsWith('.json'))
     .sort()
     .flatMap((file) => {
-      const { cases } = JSON.parse(readFileSync(folder + file, "utf8")) as { cases?: GoldenCase[] };
+      const { cases } = JSON.parse(readFileSync(folder + file, 'utf8')) as { cases?: GoldenCase[] };
       if (!Array.isArray(cases)) throw new Error(`tests/golden/${file} has no list "cases".`);
-      return cases.map((row) => ({ ...row, name: `${file.replace(/\.json$/, "")}: ${row.name}` }));
+      return cases.map((row) => ({ ...row, name: `${file.replace(/\.json$/, '')}: ${row.name}` }));
     });
 }
 
@@ -49,12 +49,12 @@ export function requestText({ name, request, text }: GoldenCase): string {
 /** What stands at a pointer (RFC 6901); nothing where nothing does. */
 export function found(document: unknown, pointer: string): unknown {
   return pointer
-    .split("/")
+    .split('/')
     .slice(1)
-    .map((part) => part.replaceAll("~1", "/").replaceAll("~0", "~"))
+    .map((part) => part.replaceAll('~1', '/').replaceAll('~0', '~'))
     .reduce<unknown>(
       (value, part) =>
-        typeof value === "object" && value !== null ? (value as Record<string, unknown>)[part] : undefined,
+        typeof value === 'object' && value !== null ? (value as Record<string, unknown>)[part] : undefined,
       document,
     );
 }

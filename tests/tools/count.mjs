@@ -1,18 +1,18 @@
 // Prints "<passed> <failed>" as a run of tests reported it.
 //
 //   node tests/tools/count.mjs doctest <its output> | vitest <its JSON report>
-import { readFileSync } from "node:fs";
+import { readFileSync } from 'node:fs';
 
 const [kind, file] = process.argv.slice(2);
-const report = readFileSync(file, "utf8");
+const report = readFileSync(file, 'utf8');
 
 function counted() {
-  if (kind === "vitest") {
+  if (kind === 'vitest') {
     const { numPassedTests, numFailedTests, testResults } = JSON.parse(report);
     // A file that breaks before its first test has failed without a failed test.
     const broken = testResults.filter(
       ({ status, assertionResults }) =>
-        status === "failed" && !assertionResults.some((test) => test.status === "failed"),
+        status === 'failed' && !assertionResults.some((test) => test.status === 'failed'),
     ).length;
     return [numPassedTests, numFailedTests + broken];
   }
@@ -21,4 +21,4 @@ function counted() {
   return summary.slice(1);
 }
 
-console.log(counted().join(" "));
+console.log(counted().join(' '));

@@ -1,10 +1,10 @@
-// Makes the two cores that Emscripten built ready for the page: their scripts shortened and without any means
-// to reach a network, each part gzipped and written as base64.
+// Makes the core that Emscripten built ready for the page: its script shortened and without any means to reach a
+// network, each part gzipped and written as base64.
 //
 //   node web/tools/pack-core.mjs <folder of Emscripten's build> <folder to write to>
 //
-// Written: module.js, module.wasm and plain.js, the very files that the tests under Node.js load, and
-// packed.json, the same three as the page carries them.
+// Written: module.wasm and module.js, the very files that the tests under Node.js load, and packed.json, the same two
+// as the page carries them.
 import { mkdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { gzipSync } from 'node:zlib';
@@ -28,7 +28,6 @@ const [from, to] = process.argv.slice(2);
 const parts = {
   'module.wasm': readFileSync(join(from, 'forwright-module.wasm')),
   'module.js': shortenedScript(join(from, 'forwright-module.js')),
-  'plain.js': shortenedScript(join(from, 'forwright-plain.js')),
 };
 
 mkdirSync(to, { recursive: true });

@@ -24,7 +24,6 @@ const cores = Object.values(zipped).reduce((sum, size) => sum + size, 0);
 console.log('Size, gzipped:');
 row('module, WebAssembly', zipped['module.wasm']);
 row('module, its script', zipped['module.js']);
-row('plain-script core', zipped['plain.js']);
 row('page and packing', total - cores);
 row(`all (budget ${budgetKilobytes} KB)`, total);
 row('on disk, as it is', whole.length);

@@ -1,8 +1,8 @@
 import { readFileSync } from 'node:fs';
 
 /**
- * The packed cores as a module of the page:
- * `import { moduleWasm, moduleScript, plainScript } from "virtual:packed-core"`, each gzipped and in base64.
+ * The packed core as a module of the page:
+ * `import { moduleWasm, moduleScript } from "virtual:packed-core"`, each gzipped and in base64.
  *
  * @param {string} packedFile packed.json as pack-core.mjs wrote it
  * @returns {import("vite").Plugin}
@@ -18,11 +18,7 @@ export function packedCore(packedFile) {
       this.addWatchFile(packedFile);
       const packed = JSON.parse(readFileSync(packedFile, 'utf8'));
       const constant = (as, part) => `export const ${as} = ${JSON.stringify(packed[part])};\n`;
-      return (
-        constant('moduleWasm', 'module.wasm') +
-        constant('moduleScript', 'module.js') +
-        constant('plainScript', 'plain.js')
-      );
+      return constant('moduleWasm', 'module.wasm') + constant('moduleScript', 'module.js');
     },
   };
 }

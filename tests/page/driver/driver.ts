@@ -1,54 +1,54 @@
-import { pathToFileURL } from "node:url";
-import puppeteer, { type Browser, type KeyInput, type LaunchOptions, type Page } from "puppeteer-core";
+import { pathToFileURL } from 'node:url';
+import puppeteer, { type Browser, type KeyInput, type LaunchOptions, type Page } from 'puppeteer-core';
 
 /** The browsers that the page is tested in. The hardened one has no WebAssembly, as company policy may have it. */
-export type BrowserName = "chromium" | "firefox" | "hardened chromium";
-export const everyBrowser: readonly BrowserName[] = ["chromium", "firefox", "hardened chromium"];
+export type BrowserName = 'chromium' | 'firefox' | 'hardened chromium';
+export const everyBrowser: readonly BrowserName[] = ['chromium', 'firefox', 'hardened chromium'];
 
 /** What Chromium and Firefox ask for on their own behalf, however quiet they are told to be: never resolved here. */
-const chromiumsOwnHosts = ["clients2.google.com", "update.googleapis.com"];
-const firefoxsOwnHosts = ["firefox.settings.services.mozilla.com"];
+const chromiumsOwnHosts = ['clients2.google.com', 'update.googleapis.com'];
+const firefoxsOwnHosts = ['firefox.settings.services.mozilla.com'];
 
 const chromiumArguments = [
-  "--no-sandbox",
-  "--disable-gpu",
-  "--disable-quic",
-  "--no-first-run",
-  "--disable-background-networking",
-  "--disable-component-update",
-  "--disable-sync",
-  "--disable-dev-shm-usage",
-  `--host-resolver-rules=${chromiumsOwnHosts.map((host) => `MAP ${host} ~NOTFOUND`).join(",")}`,
+  '--no-sandbox',
+  '--disable-gpu',
+  '--disable-quic',
+  '--no-first-run',
+  '--disable-background-networking',
+  '--disable-component-update',
+  '--disable-sync',
+  '--disable-dev-shm-usage',
+  `--host-resolver-rules=${chromiumsOwnHosts.map((host) => `MAP ${host} ~NOTFOUND`).join(',')}`,
 ];
 
 /** What Firefox would fetch by itself, switched off, and one origin for each path, as it is for a person. */
 const firefoxPreferences = {
-  "security.fileuri.strict_origin_policy": true,
-  "network.captive-portal-service.enabled": false,
-  "network.connectivity-service.enabled": false,
-  "network.dns.disablePrefetch": true,
-  "network.trr.mode": 5,
-  "network.dns.localDomains": firefoxsOwnHosts.join(","),
-  "app.normandy.enabled": false,
-  "extensions.getAddons.cache.enabled": false,
-  "extensions.systemAddon.update.enabled": false,
-  "browser.safebrowsing.update.enabled": false,
-  "browser.region.update.enabled": false,
-  "media.gmp-manager.updateEnabled": false,
+  'security.fileuri.strict_origin_policy': true,
+  'network.captive-portal-service.enabled': false,
+  'network.connectivity-service.enabled': false,
+  'network.dns.disablePrefetch': true,
+  'network.trr.mode': 5,
+  'network.dns.localDomains': firefoxsOwnHosts.join(','),
+  'app.normandy.enabled': false,
+  'extensions.getAddons.cache.enabled': false,
+  'extensions.systemAddon.update.enabled': false,
+  'browser.safebrowsing.update.enabled': false,
+  'browser.region.update.enabled': false,
+  'media.gmp-manager.updateEnabled': false,
 };
 
 function launchOptions(name: BrowserName): LaunchOptions {
-  if (name === "firefox") {
+  if (name === 'firefox') {
     return {
-      browser: "firefox",
-      executablePath: process.env.FORWRIGHT_FIREFOX ?? "/usr/bin/firefox-esr",
+      browser: 'firefox',
+      executablePath: process.env.FORWRIGHT_FIREFOX ?? '/usr/bin/firefox-esr',
       extraPrefsFirefox: firefoxPreferences,
     };
   }
-  const hardening = name === "hardened chromium" ? ["--js-flags=--jitless"] : [];
+  const hardening = name === 'hardened chromium' ? ['--js-flags=--jitless'] : [];
   return {
-    browser: "chrome",
-    executablePath: process.env.FORWRIGHT_CHROMIUM ?? "/usr/bin/chromium",
+    browser: 'chrome',
+    executablePath: process.env.FORWRIGHT_CHROMIUM ?? '/usr/bin/chromium',
     args: [...chromiumArguments, ...hardening],
     pipe: true,
   };
@@ -70,9 +70,9 @@ export class TestBrowser {
     const page = await this.browser.newPage();
     await page.setViewport(viewport);
     const messages: string[] = [];
-    page.on("console", (message) => messages.push(`${message.type()}: ${message.text()}`));
-    page.on("pageerror", (error) => messages.push(`uncaught: ${String(error)}`));
-    await page.goto(pathToFileURL(file).href, { waitUntil: "load" });
+    page.on('console', (message) => messages.push(`${message.type()}: ${message.text()}`));
+    page.on('pageerror', (error) => messages.push(`uncaught: ${String(error)}`));
+    await page.goto(pathToFileURL(file).href, { waitUntil: 'load' });
     return new TestPage(page, messages);
   }
 
@@ -96,15 +96,11 @@ export class TestPage {
   /** The text of the one element that the selector names, as soon as it is there. */
   async text(selector: string): Promise<string> {
     const element = await this.raw.waitForSelector(selector);
-    return (await element!.evaluate((found) => found.textContent ?? "")).trim();
+    return (await element!.evaluate((found) => found.textContent ?? '')).trim();
   }
 
   /** Waits until the element's text is what is looked for; the error tells what it was instead. */
-  async untilText(
-    selector: string,
-    wanted: (text: string) => boolean,
-    milliseconds = 10_000,
-  ): Promise<string> {
+  async untilText(selector: string, wanted: (text: string) => boolean, milliseconds = 10_000): Promise<string> {
     const deadline = Date.now() + milliseconds;
     for (;;) {
       const text = await this.text(selector);
@@ -119,7 +115,7 @@ export class TestPage {
     const field = await this.raw.waitForSelector(selector);
     await field!.focus();
     await field!.evaluate((element) => (element as HTMLInputElement).select());
-    await this.raw.keyboard.press("Backspace");
+    await this.raw.keyboard.press('Backspace');
     await this.raw.keyboard.type(text);
   }
 
@@ -140,7 +136,7 @@ export class TestPage {
   }
 
   async pdf(file: string): Promise<void> {
-    await this.raw.pdf({ path: file, format: "A4", printBackground: true });
+    await this.raw.pdf({ path: file, format: 'A4', printBackground: true });
   }
 
   async close(): Promise<void> {

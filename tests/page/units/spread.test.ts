@@ -1,22 +1,19 @@
-import fc from "fast-check";
-import { describe, expect, it } from "vitest";
-import { spread } from "../../../web/src/charts/spread";
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { spread } from '../../../web/src/charts/spread';
 
 const gap = 8;
 const labels = fc
-  .array(
-    fc.record({ at: fc.double({ min: 0, max: 400, noNaN: true }), width: fc.integer({ min: 10, max: 70 }) }),
-    {
-      minLength: 1,
-      maxLength: 5,
-    },
-  )
+  .array(fc.record({ at: fc.double({ min: 0, max: 400, noNaN: true }), width: fc.integer({ min: 10, max: 70 }) }), {
+    minLength: 1,
+    maxLength: 5,
+  })
   .map((list) => list.sort((a, b) => a.at - b.at));
 
 const seeded = { seed: 20261201, numRuns: 500 };
 
-describe("labels on a line", () => {
-  it("stay where they are when there is room", () => {
+describe('labels on a line', () => {
+  it('stay where they are when there is room', () => {
     expect(
       spread(
         [
@@ -30,7 +27,7 @@ describe("labels on a line", () => {
     ).toEqual([50, 150]);
   });
 
-  it("at one place move to both sides alike", () => {
+  it('at one place move to both sides alike', () => {
     expect(
       spread(
         [
@@ -44,11 +41,11 @@ describe("labels on a line", () => {
     ).toEqual([76, 124]);
   });
 
-  it("none of none", () => {
+  it('none of none', () => {
     expect(spread([], 0, 100, gap)).toEqual([]);
   });
 
-  it("never lie over each other and stay inside", () => {
+  it('never lie over each other and stay inside', () => {
     fc.assert(
       fc.property(labels, (list) => {
         const places = spread(list, 0, 500, gap);
@@ -58,9 +55,7 @@ describe("labels on a line", () => {
           expect(place + width / 2).toBeLessThanOrEqual(500 + 1e-9);
           const before = list[i - 1];
           if (before)
-            expect(place - (places[i - 1] ?? 0)).toBeGreaterThanOrEqual(
-              (before.width + width) / 2 + gap - 1e-9,
-            );
+            expect(place - (places[i - 1] ?? 0)).toBeGreaterThanOrEqual((before.width + width) / 2 + gap - 1e-9);
         });
       }),
       seeded,
@@ -68,7 +63,7 @@ describe("labels on a line", () => {
   });
 
   // The problem is convex: where no shift of a run of neighbours lowers the sum of squares, none does.
-  it("move as little as can be", () => {
+  it('move as little as can be', () => {
     const cost = (list: readonly { at: number }[], places: readonly number[]): number =>
       list.reduce((sum, { at }, i) => sum + ((places[i] ?? 0) - at) ** 2, 0);
     fc.assert(

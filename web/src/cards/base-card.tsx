@@ -1,12 +1,12 @@
 import { fundingInWords } from '../model/funding-words';
-import { deal } from '../store/session';
+import { market } from '../store/session';
 import { Card, type CardView } from './card';
 import { CurveEditor } from './curve-editor';
 import { Spreads } from './funding-card';
 import { curveValue, curveWords, said, spreadWords } from './words';
 
 export function BaseCard({ alwaysOpen }: CardView) {
-  const { base, asset } = deal.value.market;
+  const { base, asset } = market.value;
   return (
     <Card
       id="base"

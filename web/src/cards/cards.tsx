@@ -1,6 +1,6 @@
 /** The cards of a market, in the order in which they are changed. */
 import type { FunctionComponent } from 'preact';
-import { deal } from '../store/session';
+import { market } from '../store/session';
 import { BaseCard } from './base-card';
 import type { CardView } from './card';
 import { ConventionsCard } from './conventions-card';
@@ -39,7 +39,7 @@ export function cardOf(place: string): string | null {
 }
 
 export function Cards({ alwaysOpen }: CardView) {
-  const pair = deal.value.market.asset.kind === 'currency-pair';
+  const pair = market.value.asset.kind === 'currency-pair';
   return (
     <>
       {listed

@@ -2,7 +2,7 @@ import { Choice } from '../fields/choice';
 import { Field } from '../fields/field';
 import { Rows, type RowColumn } from '../fields/rows';
 import type { AssetKind } from '../model/request';
-import { deal } from '../store/session';
+import { market } from '../store/session';
 import { Card, type CardView } from './card';
 import { said } from './words';
 
@@ -24,7 +24,7 @@ const lagColumns: readonly RowColumn[] = [
 ];
 
 export function ConventionsCard({ alwaysOpen }: CardView) {
-  const { asset } = deal.value.market;
+  const { asset } = market.value;
   const pair = asset.kind === 'currency-pair';
   const calendars = asset.calendars.trim() === '' ? 'weekends only' : asset.calendars.trim().toUpperCase();
   const tick = asset.tick.trim() === '' ? 'no tick' : `tick ${asset.tick.trim()}`;

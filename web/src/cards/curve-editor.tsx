@@ -3,8 +3,7 @@ import { Field } from '../fields/field';
 import type { CurveDraft, CurveKind } from '../model/draft';
 import { models } from '../model/draft';
 import { modelNames } from '../model/funding-words';
-import { deal } from '../store/session';
-import { valueAt } from '../store/paths';
+import { valueOf } from '../store/session';
 import { FitEditor } from './fit-editor';
 import { FlatEditor } from './flat-editor';
 import { MeetingsEditor } from './meetings-editor';
@@ -71,7 +70,7 @@ function ModelEditor({ path, at, model }: CurveEditorProps & { readonly model: C
 
 /** A curve of any kind. Each kind keeps its own draft, so switching to another and back loses nothing. */
 export function CurveEditor({ label, path, at }: CurveEditorProps) {
-  const curve = valueAt(deal.value, path) as CurveDraft;
+  const curve = valueOf(path) as CurveDraft;
   return (
     <>
       <Segmented label={`${label} is`} path={`${path}/kind`} options={kinds} />

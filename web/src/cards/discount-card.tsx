@@ -1,11 +1,11 @@
 import { fundingInWords } from '../model/funding-words';
-import { deal, edit } from '../store/session';
+import { edit, market } from '../store/session';
 import { Card, type CardView } from './card';
 import { CurveEditor } from './curve-editor';
 import { curveValue, curveWords } from './words';
 
 export function DiscountCard({ alwaysOpen }: CardView) {
-  const { discount } = deal.value.market;
+  const { discount } = market.value;
   return (
     <Card
       id="discount"

@@ -1,11 +1,11 @@
 import { RateConvention } from '../fields/conventions';
 import { Field } from '../fields/field';
-import { deal } from '../store/session';
+import { market } from '../store/session';
 import { Card, type CardView } from './card';
 import { twoSides } from './words';
 
 export function FeeCard({ alwaysOpen }: CardView) {
-  const { fee } = deal.value.market;
+  const { fee } = market.value;
   const none = fee.bid.trim() === '' && fee.offer.trim() === '';
   return (
     <Card

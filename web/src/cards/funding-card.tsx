@@ -2,7 +2,7 @@ import { Field } from '../fields/field';
 import { formatPrice } from '../format';
 import { fundingInWords } from '../model/funding-words';
 import { previous, quoteAnswer } from '../model/view';
-import { deal } from '../store/session';
+import { market } from '../store/session';
 import { Card, type CardView } from './card';
 import { CurveEditor } from './curve-editor';
 import { curveValue, curveWords, spreadWords } from './words';
@@ -30,7 +30,7 @@ export function Spreads({ path }: { readonly path: string }) {
 }
 
 export function FundingCard({ alwaysOpen }: CardView) {
-  const { funding } = deal.value.market;
+  const { funding } = market.value;
   const kind = fundingInWords(funding.curve);
   return (
     <Card

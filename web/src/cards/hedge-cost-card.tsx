@@ -1,10 +1,10 @@
 import { Field } from '../fields/field';
-import { deal } from '../store/session';
+import { market } from '../store/session';
 import { Card, type CardView } from './card';
 import { said } from './words';
 
 export function HedgeCostCard({ alwaysOpen }: CardView) {
-  const { buy, sell } = deal.value.market.hedgeCost;
+  const { buy, sell } = market.value.hedgeCost;
   const none = buy.trim() === '' && sell.trim() === '';
   return (
     <Card

@@ -2,7 +2,7 @@ import { RateConvention } from '../fields/conventions';
 import { Field } from '../fields/field';
 import { Rows, type RowColumn } from '../fields/rows';
 import { isBlank } from '../model/draft';
-import { deal } from '../store/session';
+import { market } from '../store/session';
 import { Card, type CardView } from './card';
 import { said, twoSides } from './words';
 
@@ -11,20 +11,20 @@ const ex: RowColumn = {
   label: 'Ex',
   holds: 'date',
   called: ['ex', 'ex date', 'exdate', 'date', 'when'],
-  size: 9,
+  size: 8,
 };
-const low = { name: 'low', label: 'Low', called: ['low', 'lowest', 'min'], size: 5 } as const;
-const high = { name: 'high', label: 'High', called: ['high', 'highest', 'max'], size: 5 } as const;
+const low = { name: 'low', label: 'Low', called: ['low', 'lowest', 'min'], size: 3 } as const;
+const high = { name: 'high', label: 'High', called: ['high', 'highest', 'max'], size: 3 } as const;
 
 const cashColumns: readonly RowColumn[] = [
   ex,
-  { name: 'pay', label: 'Paid', holds: 'date', called: ['pay', 'paid', 'payment', 'pay date'], size: 9 },
+  { name: 'pay', label: 'Paid', holds: 'date', called: ['pay', 'paid', 'payment', 'pay date'], size: 8 },
   {
     name: 'amount',
     label: 'Amount',
     holds: 'price',
     called: ['amount', 'dividend', 'cash', 'expected', 'estimate'],
-    size: 5,
+    size: 4,
   },
   { ...low, holds: 'price' },
   { ...high, holds: 'price' },
@@ -48,7 +48,7 @@ function counted(count: number, one: string, many: string): string {
 }
 
 export function IncomeCard({ alwaysOpen }: CardView) {
-  const { income, asset } = deal.value.market;
+  const { income, asset } = market.value;
   const cash = income.cash.filter((row) => !isBlank(row));
   const proportional = income.proportional.filter((row) => !isBlank(row));
   const amounts = cash.map((row) => `${row.amount.trim()} on ${row.ex.trim()}`);

@@ -2,7 +2,7 @@ import { Choice } from '../fields/choice';
 import { Field } from '../fields/field';
 import { marginKind } from '../model/build';
 import type { MarginUnit } from '../model/request';
-import { deal } from '../store/session';
+import { inquiry } from '../store/session';
 import { Card, type CardView } from './card';
 import { said } from './words';
 
@@ -13,7 +13,7 @@ const unitNames: Readonly<Record<MarginUnit, string>> = {
 };
 
 export function MarginCard({ alwaysOpen }: CardView) {
-  const { margin } = deal.value.inquiry;
+  const { margin } = inquiry.value;
   const none = margin.amount.trim() === '';
   return (
     <Card

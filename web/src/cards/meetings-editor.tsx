@@ -5,8 +5,7 @@ import { faultAt, TextInput } from '../fields/text-input';
 import { bind } from '../fields/binding';
 import type { MeetingRow } from '../model/draft';
 import { nextId, sentIndexes } from '../model/draft';
-import { deal, edit } from '../store/session';
-import { valueAt } from '../store/paths';
+import { edit, valueOf } from '../store/session';
 
 const moveColumns = [
   { name: 'by', label: 'Move', unit: 'bp', holds: 'basis-points', called: ['by', 'move', 'bp', 'change'], size: 6 },
@@ -64,7 +63,7 @@ function Meeting({ path, at, number, remove }: { path: string; at: string; numbe
 /** Central-bank meetings: what each may do to the overnight rate, with the odds of each move. */
 export function MeetingsEditor({ path, at }: { readonly path: string; readonly at: string }) {
   const rowsPath = `${path}/rows`;
-  const rows = (valueAt(deal.value, rowsPath) ?? []) as readonly MeetingRow[];
+  const rows = (valueOf(rowsPath) ?? []) as readonly MeetingRow[];
   const indexes = sentIndexes(rows);
   const add = (): void => edit(rowsPath, [...rows, { id: nextId(rows), date: '', moves: [] }]);
   const listFault = faultAt(`${at}/meetings`);

@@ -3,15 +3,14 @@ import { Field } from '../fields/field';
 import { faultAt } from '../fields/text-input';
 import type { ScenarioRow } from '../model/draft';
 import { emptyFixedCurve, nextId } from '../model/draft';
-import { deal, edit } from '../store/session';
-import { valueAt } from '../store/paths';
+import { edit, valueOf } from '../store/session';
 import { FlatEditor } from './flat-editor';
 import { PillarsEditor } from './pillars-editor';
 
 /** Whole curves, each with its weight: the discount factor is their weighted mean. */
 export function ScenariosEditor({ path, at }: { readonly path: string; readonly at: string }) {
   const rowsPath = `${path}/rows`;
-  const rows = (valueAt(deal.value, rowsPath) ?? []) as readonly ScenarioRow[];
+  const rows = (valueOf(rowsPath) ?? []) as readonly ScenarioRow[];
   const add = (): void => edit(rowsPath, [...rows, { id: nextId(rows), weight: '', curve: emptyFixedCurve }]);
   const listFault = faultAt(`${at}/scenarios`);
   return (

@@ -1,10 +1,10 @@
 import { Field } from '../fields/field';
-import { deal } from '../store/session';
+import { market } from '../store/session';
 import { Card, type CardView } from './card';
 import { said, twoSides } from './words';
 
 export function SpotCard({ alwaysOpen }: CardView) {
-  const { asset, spot, asOf } = deal.value.market;
+  const { asset, spot, asOf } = market.value;
   const currency = asset.currency.toUpperCase();
   return (
     <Card

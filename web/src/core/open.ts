@@ -2,7 +2,8 @@
  * Opens the core wherever this browser lets it run: WebAssembly in a Worker started from the page itself; on the
  * page's own thread where a Worker is refused; as plain script where WebAssembly is switched off.
  */
-import { moduleScript, moduleWasm, plainScript } from 'virtual:packed-core';
+import { moduleScript, moduleWasm } from 'virtual:packed-core';
+import { plainScript } from './plain/script';
 import { unpack } from './unpack';
 
 /** The core as the page uses it: a request in, its answer out. */
@@ -23,7 +24,7 @@ type Open = (given: object) => Promise<OpenedCore>;
 interface Parts {
   readonly kind: Core['kind'];
   readonly script: Uint8Array<ArrayBuffer>;
-  readonly given: { readonly wasmBinary?: Uint8Array<ArrayBuffer> };
+  readonly given: { readonly wasmBinary: Uint8Array<ArrayBuffer> };
 }
 
 /** The smallest WebAssembly with one vector instruction: the module wants both. */
@@ -44,7 +45,9 @@ async function modulePart(): Promise<Parts> {
 }
 
 async function plainPart(): Promise<Parts> {
-  return { kind: 'plain', script: await unpack(plainScript), given: {} };
+  const { script, given } = await modulePart();
+  const text = plainScript(given.wasmBinary, new TextDecoder().decode(script));
+  return { kind: 'plain', script: new TextEncoder().encode(text), given };
 }
 
 /** Runs in the Worker, after the core's own script, of which it knows only `forwrightCore`. */

@@ -3,8 +3,7 @@ import { readRows, type Column } from '../input/pasted-rows';
 import { isBlank, nextId, sentIndexes } from '../model/draft';
 import { errors, format } from '../model/view';
 import { built } from '../store/calculation';
-import { deal, edit } from '../store/session';
-import { valueAt } from '../store/paths';
+import { edit, valueOf } from '../store/session';
 import { faultAt, TextInput } from './text-input';
 
 export interface RowColumn extends Column {
@@ -45,7 +44,7 @@ function rowFaults(at: string, columns: readonly RowColumn[]): readonly string[]
 /** A table of inputs: typing in its last row, which is blank, adds one; rows copied from a spreadsheet paste into any cell. */
 export function Rows({ name, rowName, path, at, columns, before = 0 }: RowsProps) {
   const id = useId();
-  const rows = (valueAt(deal.value, path) ?? []) as readonly Row[];
+  const rows = (valueOf(path) ?? []) as readonly Row[];
   const indexes = sentIndexes(rows);
   const shown = [...rows, blankRow(columns, nextId(rows))];
   const listFault = faultAt(at);
@@ -98,7 +97,7 @@ export function Rows({ name, rowName, path, at, columns, before = 0 }: RowsProps
             return [
               <tr key={row.id}>
                 {columns.map((column) => (
-                  <td key={column.name}>
+                  <td key={column.name} style={{ '--figures': column.size ?? 6 }}>
                     <TextInput
                       id={`${id}-${row.id}-${column.name}`}
                       name={`${rowName} ${index + 1}, ${column.label}`}
@@ -110,7 +109,6 @@ export function Rows({ name, rowName, path, at, columns, before = 0 }: RowsProps
                       at={sent === null ? `${at}/new/${column.name}` : `${rowAt}/${column.name}`}
                       kind={column.holds === 'date-or-tenor' ? 'maturity' : column.holds}
                       describedBy={faults.length > 0 ? faultId : undefined}
-                      size={column.size ?? 6}
                       onPaste={paste(index)}
                     />
                   </td>

@@ -113,7 +113,7 @@ export function RequestsPlace() {
     <main class="place place-requests" id="here">
       <Inquiry forOneMaturity={false} />
       <section class="block" aria-labelledby={`${id}-name`}>
-        <h1 id={`${id}-name`}>At several maturities</h1>
+        <h1 id={`${id}-name`}>Prices by maturity</h1>
         <div class="field">
           <label for={id}>Maturities: tenors apart by spaces, dates by commas</label>
           <textarea

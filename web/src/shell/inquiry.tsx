@@ -5,7 +5,7 @@ import { faultAt, TextInput } from '../fields/text-input';
 import { formatLongDate, formatNumber } from '../format';
 import type { Client } from '../model/answer';
 import { quoteAnswer } from '../model/view';
-import { deal, draft, edit } from '../store/session';
+import { draft, edit, inquiry } from '../store/session';
 import { addMarket, chooseMarket } from '../store/markets';
 import { built } from '../store/calculation';
 
@@ -30,7 +30,7 @@ function ClientField() {
       </label>
       <select
         id="inquiry-client"
-        value={deal.value.inquiry.client}
+        value={inquiry.value.client}
         data-at="/inquiry/client"
         data-path="inquiry/client"
         onChange={(event: TargetedEvent<HTMLSelectElement>) => edit('inquiry/client', event.currentTarget.value)}
@@ -115,7 +115,7 @@ function MaturityField() {
 /** What the dates were resolved to, and the quantity where it was typed short. */
 function Resolved() {
   const { good, stale } = quoteAnswer.value;
-  const short = /[a-z]\s*$/i.test(deal.value.inquiry.quantity);
+  const short = /[a-z]\s*$/i.test(inquiry.value.quantity);
   const quantity: unknown = built.value.request.inquiry.quantity;
   const { dates } = good?.result ?? {};
   return (
@@ -154,7 +154,7 @@ interface InquiryProps {
 
 /** The inquiry as one sentence, whose words are its fields. */
 export function Inquiry({ forOneMaturity }: InquiryProps) {
-  const twoWay = deal.value.inquiry.client === 'two-way';
+  const twoWay = inquiry.value.client === 'two-way';
   return (
     <form class="inquiry area-inquiry" aria-label="Inquiry" onSubmit={(event) => event.preventDefault()}>
       <span class="word">Client</span> <ClientField /> {twoWay && <span class="word">in</span>} <QuantityField />{' '}

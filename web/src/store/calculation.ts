@@ -130,7 +130,7 @@ async function quote(wanted: Wanted): Promise<boolean> {
   batch(() => {
     if (answer.ok && own.length === 0) {
       lastGood = { request: text, answer: answerText };
-      faults.value = new Map();
+      if (faults.peek().size > 0) faults.value = new Map();
       quoteShown.value = shown(wanted.request, answer);
       noteSwitch(wanted, answer.result);
     } else {

@@ -9,12 +9,6 @@ export function valueAt(tree: unknown, path: string): unknown {
   return path.split('/').reduce(step, tree);
 }
 
-/** The text at a path; empty where there is none (yet). */
-export function textAt(tree: unknown, path: string): string {
-  const value = valueAt(tree, path);
-  return typeof value === 'string' ? value : '';
-}
-
 /** The tree with `value` at `path`, everything beside the path shared with the old one. */
 export function withValue<T>(tree: T, path: string, value: unknown): T {
   return replaced(tree as Tree, path.split('/'), value) as T;

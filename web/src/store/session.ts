@@ -1,9 +1,9 @@
 /** What the person has typed, with its history: the one place that is written to, and the deal on screen read from it. */
-import { computed, signal } from '@preact/signals';
+import { computed, signal, type ReadonlySignal } from '@preact/signals';
 import type { DealDraft, Draft } from '../model/draft';
 import { emptyDeal } from '../model/draft';
 import { advance, back, begin, forth, type History } from './history';
-import { textAt, valueAt, withValue } from './paths';
+import { valueAt, withValue } from './paths';
 
 /** Changes at one place that follow each other faster than this are one step to undo. */
 const joinedWithinMilliseconds = 1000;
@@ -54,9 +54,25 @@ export function edit(path: string, value: unknown): void {
   editDraft(dealPath(path), value);
 }
 
-/** The text at a path of the deal on screen. */
+export const inquiry = computed(() => deal.value.inquiry);
+export const market = computed(() => deal.value.market);
+
+const watched = new Map<string, ReadonlySignal<unknown>>();
+
+/** What stands at a path of the deal on screen. Who reads it is told when it changes, and of nothing else. */
+export function valueOf(path: string): unknown {
+  let value = watched.get(path);
+  if (value === undefined) {
+    value = computed(() => valueAt(deal.value, path));
+    watched.set(path, value);
+  }
+  return value.value;
+}
+
+/** The text at a path of the deal on screen; empty where there is none (yet). */
 export function typed(path: string): string {
-  return textAt(deal.value, path);
+  const value = valueOf(path);
+  return typeof value === 'string' ? value : '';
 }
 
 export function undo(): void {

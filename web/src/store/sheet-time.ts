@@ -1,7 +1,7 @@
 /** How old the market on screen is: when it was taken down, until when it may be used, and whether it is stale. */
 import { computed, signal } from '@preact/signals';
 import { readDate } from '../input/dates';
-import { deal } from './session';
+import { typed, valueOf } from './session';
 import { preferences } from './signals';
 
 /** The time by the person's clock, to the minute. */
@@ -37,9 +37,14 @@ function whyStale(asOf: string, validUntil: string, at: Date): string {
 }
 
 export const sheetTime = computed<SheetTime>(() => {
-  const { market, madeAt, validUntil, demonstration } = deal.value;
-  const read = readDate(market.asOf, { locale: preferences.value.locale, after: '' });
-  const asOf = market.asOf.trim() !== '' && read.ok ? read.value : '';
+  const [asOfTyped, madeAt, validUntil] = ['market/asOf', 'madeAt', 'validUntil'].map(typed) as [
+    string,
+    string,
+    string,
+  ];
+  const demonstration = valueOf('demonstration') === true;
+  const read = readDate(asOfTyped, { locale: preferences.value.locale, after: '' });
+  const asOf = asOfTyped.trim() !== '' && read.ok ? read.value : '';
   const why = whyStale(asOf, validUntil, now.value);
   const time = /T(\d\d:\d\d)/.exec(madeAt)?.[1] ?? '';
   return { asOf, time, stale: why !== '', why, demonstration };
