@@ -161,15 +161,17 @@ double annualisedCarry(const Price& fair, const Schedule& schedule) {
     return years > 0.0 ? numeric::log(fair.forward / fair.spot) / years : 0.0;
 }
 
-/// Why what the client would be told is no price; nothing where it is one. `withMargin` is it before rounding.
+/// Why what the client would be told is no price; nothing where it is one. `withMargin` is it before
+/// rounding.
 std::optional<outcome::Fault> notAPrice(const Market& market, const Places& places, double withMargin,
                                         double told) {
     const bool byMargin = !std::isfinite(withMargin) || withMargin <= 0.0;
     const std::string at = byMargin ? places.margin : market.at + "/asset/tick";
     if (!std::isfinite(told)) {
-        return outcome::Fault{at, "not-finite",
-                              byMargin ? "With this margin the quote is too large to be a number: give a smaller one"
-                                       : "This tick is too small to count the quote in: give a larger one"};
+        return outcome::Fault{
+            at, "not-finite",
+            byMargin ? "With this margin the quote is too large to be a number: give a smaller one"
+                     : "This tick is too small to count the quote in: give a larger one"};
     }
     if (told <= 0.0) {
         return outcome::Fault{at, "not-a-price",

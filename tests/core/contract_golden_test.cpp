@@ -132,7 +132,8 @@ TEST_SUITE("contract golden") {
     }
 
     TEST_CASE("the list of codes that people read is the catalogue") {
-        const std::string list = textOf(root / "DEVELOPERS.md");
+        // The table's columns are filled up with spaces, so that it reads well as text.
+        const std::string list = std::regex_replace(textOf(root / "DEVELOPERS.md"), std::regex{" +"}, " ");
         for (const auto& entry : forwright::contract::catalogue()) {
             const std::string what = !entry.isNotice ? "error" : entry.isError ? "error, notice" : "notice";
             const std::string row =

@@ -2,7 +2,6 @@
 
 #include <doctest/doctest.h>
 
-#include <bit>
 #include <cmath>
 #include <cstdlib>
 #include <limits>
@@ -11,18 +10,26 @@
 using namespace forwright;
 using contract::Writer;
 
+namespace {
+
+/// Emscripten's library has no std::bit_cast yet.
+std::uint64_t bitsOf(double value) {
+    return __builtin_bit_cast(std::uint64_t, value);
+}
+
+} // namespace
+
 TEST_SUITE("contract writer") {
     TEST_CASE("a number is read back to the same bits") {
         std::mt19937_64 dice{20261201};
         for (int i = 0; i < 200'000; ++i) {
-            const auto value = std::bit_cast<double>(dice());
+            const auto value = __builtin_bit_cast(double, std::uint64_t{dice()});
             if (!std::isfinite(value)) {
                 continue;
             }
             const std::string text = contract::numberText(value);
             CAPTURE(text);
-            REQUIRE(std::bit_cast<std::uint64_t>(std::strtod(text.c_str(), nullptr)) ==
-                    std::bit_cast<std::uint64_t>(value));
+            REQUIRE(bitsOf(std::strtod(text.c_str(), nullptr)) == bitsOf(value));
             REQUIRE(text.size() <= 24);
         }
     }

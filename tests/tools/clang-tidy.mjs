@@ -30,7 +30,9 @@ function examine({ file, command }) {
   const cleanMark = join(remembered, key);
   if (existsSync(cleanMark)) return Promise.resolve('');
   return new Promise((examined) => {
-    execFile('clang-tidy', ['--quiet', '-p', build, file], { maxBuffer: 1 << 26 }, (error, output, complaints) => {
+    // The compile commands are g++'s, with options that clang does not know.
+    const options = ['--quiet', '-p', build, '--extra-arg=-Wno-unknown-warning-option'];
+    execFile('clang-tidy', [...options, file], { maxBuffer: 1 << 26 }, (error, output, complaints) => {
       if (!error) writeFileSync(cleanMark, file);
       examined(error ? output || complaints : '');
     });

@@ -97,7 +97,7 @@ configure_and_build() {
 build_program() { configure_and_build "$build" "" "forwright" "$@"; }
 
 build_module() {
-    configure_and_build "$build/wasm" emcmake "" "$@" &&
+    configure_and_build "$build/wasm" emcmake forwright-module "$@" &&
         node "$root/web/tools/pack-core.mjs" "$build/wasm" "$build/packed"
 }
 
