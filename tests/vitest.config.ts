@@ -8,6 +8,7 @@ const root = fileURLToPath(new URL('..', import.meta.url));
 const projects = {
   units: { include: ['web/src/**/*.test.{ts,tsx}', 'tests/page/units/**/*.test.{ts,tsx}'], seconds: 10 },
   cores: { include: ['tests/module/**/*.test.ts', 'tests/calendars/**/*.test.ts'], seconds: 120 },
+  pictures: { include: ['tests/page/pictures/**/*.test.ts'], seconds: 60 },
   browsers: { include: ['tests/page/browser/**/*.test.ts'], seconds: 60 },
 };
 

@@ -112,8 +112,8 @@ export function RequestsPlace() {
   return (
     <main class="place place-requests" id="here">
       <Inquiry forOneMaturity={false} />
-      <section class="block" aria-labelledby={`${id}-name`}>
-        <h1 id={`${id}-name`}>Prices by maturity</h1>
+      <section class="block">
+        <h1>Prices by maturity</h1>
         <div class="field">
           <label for={id}>Maturities: tenors apart by spaces, dates by commas</label>
           <textarea
