@@ -149,7 +149,8 @@ TEST_CASE("one basis point on each parameter of a random model agrees with movin
         {"/longRun", &discounting::Vasicek::longRun},
         {"/volatility", &discounting::Vasicek::volatility}};
     REQUIRE(exact.funding.parameters.size() == members.size());
-    for (const auto& [name, member] : members) {
+    for (const auto& entry : members) {
+        const std::string& name = entry.first;
         bool found = false;
         for (const forward::ParameterSensitivity& parameter : exact.funding.parameters) {
             if (parameter.parameter.at != "/market/funding/curve" + name) {
@@ -157,7 +158,7 @@ TEST_CASE("one basis point on each parameter of a random model agrees with movin
             }
             found = true;
             const double numeric = basisPoint * slope(
-                                                    [&, member = member](double h) {
+                                                    [&, member = entry.second](double h) {
                                                         discounting::Vasicek moved = model;
                                                         moved.*member += h;
                                                         return fair(with(moved), "2027-12-15");

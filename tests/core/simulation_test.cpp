@@ -278,7 +278,7 @@ TEST_SUITE("simulation") {
         const Payments payments = dealOver(2);
         for (const CurvePtr& curve : {meetingsCurve(), nestedCurve(), samplesCurve()}) {
             CAPTURE(curve->convention());
-            for (const std::uint64_t seed : {4, 5, 6, 7}) {
+            for (const std::uint64_t seed : std::initializer_list<std::uint64_t>{4, 5, 6, 7}) {
                 checkAgainstClosedForm(*curve, payments, pseudo(16384, seed));
                 checkAgainstClosedForm(*curve, payments, quasi(16384, seed));
             }
