@@ -255,7 +255,8 @@ SimulationEstimate Simulation::estimate(std::span<const long> indices,
         const long paths = plan_.pathsIn(indices[i]);
         estimate.paths += paths;
         Spread& set = bySet[static_cast<std::size_t>(scramblingOf(indices[i]))];
-        set.terms += static_cast<double>(paths / 2);
+        const auto pairs = paths / 2;
+        set.terms += static_cast<double>(pairs);
         set.factor += block.factor;
         set.value += block.value;
     }
