@@ -4,7 +4,8 @@
 import { readFileSync } from 'node:fs';
 
 const [kind, file] = process.argv.slice(2);
-const report = readFileSync(file, 'utf8');
+// Under Node.js doctest colours what it prints.
+const report = readFileSync(file, 'utf8').replace(/\u001b\[[0-9;]*m/g, '');
 
 function counted() {
   if (kind === 'vitest') {
