@@ -296,6 +296,18 @@ TEST_SUITE("contract answer") {
         }
     }
 
+    TEST_CASE("a distribution that is left out is told with the day that decides it") {
+        json request = leastRequest(0.02);
+        request["market"]["income"]["cash"] =
+            read(R"([{"ex":"2026-12-03","amount":1},{"ex":"2027-06-19","amount":1}])");
+        const json notices = ask(request).body["notices"];
+        REQUIRE(notices.size() == 2);
+        CHECK(notices[0]["code"] == "before-hold");
+        CHECK(notices[0]["message"].get<std::string>().find("held, 2026-12-03") != std::string::npos);
+        CHECK(notices[1]["code"] == "after-maturity");
+        CHECK(notices[1]["message"].get<std::string>().find("maturity, 2027-06-18") != std::string::npos);
+    }
+
     TEST_CASE("a grid has at most 10,000 cells") {
         json request = read(R"({"format":"forwright/1","task":"tenors","maturities":["1M"],
             "grid":{"maturity":"1Y","spot":[],"funding":[0]}})");
