@@ -8,7 +8,7 @@
 using namespace forwright::discounting;
 using namespace forwright::discounting::testing;
 
-// RapidCheck prints its seed and takes it back through RC_PARAMS; CMake fixes it for the suite's own runs.
+// RapidCheck prints its seed, which main.cpp fixes, and takes another through RC_PARAMS.
 
 namespace {
 
@@ -65,9 +65,11 @@ TEST_SUITE("discounting: properties of curves") {
             const Pillars points = arbitraryFactors(Interpolation::monotoneCubic, 0, 2000);
             const CurvePtr curve = pillars(asOf, points).value();
             const int last = static_cast<int>((points.pillars.back().at - asOf).count()) + 100;
+            // A level stretch is level but for the last places of the cubic's terms, none of which exceeds
+            // the end.
+            const double slack = 4e-15 * std::fabs(curve->logFactor(afterDays(last)));
             for (int days = 0; days < last; ++days) {
-                RC_ASSERT(curve->logFactor(afterDays(days + 1)) <=
-                          curve->logFactor(afterDays(days)) * (1 - 4e-16));
+                RC_ASSERT(curve->logFactor(afterDays(days + 1)) <= curve->logFactor(afterDays(days)) + slack);
             }
         }));
     }

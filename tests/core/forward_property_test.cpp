@@ -12,7 +12,7 @@ using namespace forwright;
 using namespace forwright::fixtures;
 using forward::Side;
 
-// RapidCheck prints its seed and takes it back through RC_PARAMS; CMake fixes it for the suite's own runs.
+// RapidCheck prints its seed, which main.cpp fixes, and takes another through RC_PARAMS.
 
 namespace {
 
