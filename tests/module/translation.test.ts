@@ -261,8 +261,8 @@ describe('plain script computes as WebAssembly does', () => {
     '0xfd $code: $template',
     async ({ code, template }) => {
       const splats: Record<number, Kind> = { 15: 'i32', 16: 'i32', 17: 'i32', 18: 'i64', 20: 'f64' };
-      const shifts = [171, 172, 173, 203, 204, 205];
-      const tests = [83, 99, 100, 163, 195];
+      const shifts = [107, 108, 109, 139, 140, 141, 171, 172, 173, 203, 204, 205];
+      const tests = [83, 99, 100, 131, 132, 163, 164, 195, 196];
       const operands = Array<Kind>(operandCount(template)).fill('v128');
       if (splats[code]) operands[0] = splats[code];
       if (shifts.includes(code)) operands[1] = 'i32';
@@ -274,7 +274,7 @@ describe('plain script computes as WebAssembly does', () => {
     '0xfd $code, lane $lane',
     async ({ code, lane }) => {
       const scalar: Kind = code <= 28 ? 'i32' : code <= 30 ? 'i64' : 'f64';
-      const replaces = [23, 28, 30, 34].includes(code);
+      const replaces = [23, 26, 28, 30, 34].includes(code);
       await expectAlike(replaces ? ['v128', scalar] : ['v128'], [0xfd, code, lane], replaces ? 'v128' : scalar);
     },
   );
@@ -314,7 +314,7 @@ describe('plain script computes as WebAssembly does', () => {
   });
 
   test('refuses by name what it does not know', () => {
-    expect(() => translate(moduleOf(['v128'], [0xfd, 110], 'v128'))).toThrow('0xfd 110');
+    expect(() => translate(moduleOf(['v128', 'v128'], [0xfd, 130, 1], 'v128'))).toThrow('0xfd 130');
   });
 });
 
