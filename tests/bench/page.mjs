@@ -58,8 +58,12 @@ for (let i = 0; i < 9; ++i) {
   ({ page } = start);
 }
 
-/** From the input event to the changed price in the document, for a quantity and spot typed a hundred times. */
-const latencies = await page.evaluate(async () => {
+/**
+ * From the input event to the changed price in the document, for a spot typed a hundred times, as quickly as hands type:
+ * the next key comes when what follows the price (charts, panels) has been drawn as well.
+ */
+const betweenKeys = 80;
+const latencies = await page.evaluate(async (pause) => {
   document.querySelector('[data-card="spot"] button').click();
   await new Promise((painted) => requestAnimationFrame(painted));
   const field = [...document.querySelectorAll('[data-card="spot"] input')][1];
@@ -79,9 +83,10 @@ const latencies = await page.evaluate(async () => {
     const start = performance.now();
     field.dispatchEvent(new InputEvent('input', { bubbles: true }));
     took.push((await changed) - start);
+    await new Promise((typed) => setTimeout(typed, pause));
   }
   return took;
-});
+}, betweenKeys);
 await browser.close();
 
 console.log(
