@@ -68,6 +68,8 @@ std::span<const CatalogueEntry> catalogue() {
                        "At this rate money is worth nothing at the end of a period."},
         CatalogueEntry{"row-length", true, false, "A path of samples has not one factor for each date."},
         CatalogueEntry{"same-currency", true, false, "A pair's two currencies are the same."},
+        CatalogueEntry{"samples-disagree", false, true,
+                       "Samples are further from the market's curve than chance explains."},
         CatalogueEntry{"sum-not-one", true, false, "Probabilities or weights do not sum to 1."},
         CatalogueEntry{"too-deep", true, false, "Objects and lists are nested deeper than 32."},
         CatalogueEntry{"too-far", true, false, "A date is more than 100 years ahead or after 2199-12-31."},

@@ -224,6 +224,13 @@ CurvePtr readSamples(Reader& object, const CurveContext& context) {
         }
     }) && paths.dates.size() == dates.json().size();
 
+    const Value againstValue = object.optional("against");
+    paths.against = readCurve(againstValue, context);
+    if (againstValue.present() && !paths.against) {
+        (void)object.optional("factors");
+        return nullptr;
+    }
+
     const Value rows = object.required("factors", "the discount factors, one row a path");
     if (!haveDates || !rows.present()) {
         return nullptr;

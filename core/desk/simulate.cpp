@@ -319,6 +319,10 @@ outcome::Outcome<Simulated> wholeOf(const Market& market, const SimulationAsked&
         }
     }
     result.estimate = deal.simulation.estimate(indices, sums);
+    if (result.estimate.priceError) {
+        const double reach = result.estimate.reach95 * *result.estimate.priceError;
+        result.interval95 = {result.estimate.price - reach, result.estimate.price + reach};
+    }
     result.closedForm = {deal.fair.settlementFactor, deal.fair.forward};
     result.pathBias = market.funding.curve->random()->pathBias();
     result.blocksDone = static_cast<long>(sums.size());

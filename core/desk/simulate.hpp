@@ -63,6 +63,7 @@ struct RateFan {
 struct Simulated {
     forward::Schedule schedule;
     discounting::SimulationEstimate estimate;
+    std::optional<income::TwoWay<double>> interval95; ///< of the forward, around the estimate: low, high
     FactorAndForward closedForm;
     double pathBias =
         0.0; ///< relative bound of how far the mean factor can be off however many paths there are

@@ -59,6 +59,37 @@ struct NormalRate {
         false; ///< to a curve given: expected discount factors are that curve's, whatever κ and σ are
 };
 
+/// One level that the overnight rate can stand at, and how likely that is.
+struct RateLevel {
+    double rate = 0.0; ///< continuous, ACT/365.FIXED
+    double probability = 0.0;
+};
+/// A move from one level to another; `from` and `to` are indices into the levels before and after it.
+struct RateBranch {
+    std::size_t from = 0;
+    std::size_t to = 0;
+    double by = 0.0;
+    double probability = 0.0; ///< of the move, at that level
+};
+/// The levels from a date on, by rising rate, and the moves that lead to them. Ways that lead to one level
+/// meet.
+struct RateLevels {
+    Date from;
+    std::vector<RateLevel> levels;
+    std::vector<RateBranch> branches; ///< none to the first levels
+};
+
+/// A column of samples beside the same factor of the curve that they should agree with.
+struct SampleColumn {
+    Date date;
+    double mean = 1.0;
+    std::optional<double> standardError; ///< none of a single path
+    double factor = 1.0;                 ///< the curve's
+    std::optional<double> errors; ///< (mean − factor)/standardError; none where that is 0 or not known
+};
+/// So many standard errors apart, samples and curve are said to disagree: by chance about one column in 370.
+inline constexpr double samplesDisagreeFrom = 3.0;
+
 /// What a random curve knows of the law of D(u), the discount factor that will have been realised from its
 /// `asOf` to u.
 class RandomDiscount {
@@ -87,6 +118,11 @@ class RandomDiscount {
     /// How far the mean of D(u) over such paths can be from P(u), relative to it, however many there are; 0
     /// where paths are exact.
     [[nodiscard]] virtual double pathBias() const { return 0.0; }
+    /// The tree of the overnight rate, level by level from `asOf`, for a curve that moves at meetings; empty
+    /// for the others, and where it has more than `mostRateLevels` levels at one of them.
+    [[nodiscard]] virtual std::vector<RateLevels> rateTree() const { return {}; }
+    /// For samples that were given a curve to be held against: each column beside it; else empty.
+    [[nodiscard]] virtual std::vector<SampleColumn> againstCurve() const { return {}; }
     /// How the short rate moves, where it is normal.
     [[nodiscard]] virtual std::optional<NormalRate> normalRate() const { return std::nullopt; }
 
@@ -95,6 +131,9 @@ class RandomDiscount {
     [[nodiscard]] outcome::Outcome<std::vector<Quantile>>
     quantiles(Date u, std::span<const double> probabilities) const;
 };
+
+/// A tree of rates with more levels at one meeting shows nothing to anybody.
+inline constexpr std::size_t mostRateLevels = 200;
 
 /// The largest |ln P| that is accepted; e^±700 are the last whole hundreds that double precision holds in
 /// full.

@@ -117,14 +117,17 @@ struct Scenario {
 struct SamplePaths {
     std::vector<Date> dates; ///< rising, after `asOf`
     std::vector<double>
-        factors; ///< positive, row by row: `factors[path * dates.size() + date]`; 2,000,000 at most
+        factors;        ///< positive, row by row: `factors[path * dates.size() + date]`; 2,000,000 at most
+    CurvePtr against{}; ///< what the columns' means should be, where it is known: compared, never priced with
 };
 /// P at a date of `dates` is that column's mean; between them ln P is linear in t from (0, 0), and past the
 /// last its last forward rate is held, with the notice `beyond-last-date`. The law of D(u) is that of the
 /// paths, each read in the same way; its quantiles are linear in D between the order statistics, at the
 /// positions p·(n − 1) (type 7 of Hyndman and Fan, The American Statistician 50 (1996)). E[ln D] is the
-/// paths' mean; no variance in closed form. No parameters. Refused: `empty-list`, `not-after-as-of`,
-/// `not-rising`, `not-positive`, `row-length` (factors that fill no whole rows), `too-many`.
+/// paths' mean; no variance in closed form. No parameters. Where a column's mean is `samplesDisagreeFrom`
+/// standard errors or more from the factor of `against`, review says so: `samples-disagree`. Refused:
+/// `empty-list`, `not-after-as-of`, `not-rising`, `not-positive`, `row-length` (factors that fill no whole
+/// rows), `too-many`; `random-fit` where `against` is random itself.
 [[nodiscard]] Outcome<CurvePtr> samples(Date asOf, SamplePaths paths);
 
 /// The curve with every continuous zero rate moved by `spread`: P(u)·e^(−spread·t(u)). Parameters and

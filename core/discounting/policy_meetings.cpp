@@ -112,6 +112,38 @@ class MeetingPaths final : public PathMaker {
     double overnight_;
 };
 
+/// Rates nearer to each other than this are one level: moves that add up to the same differ by rounding only.
+constexpr double oneLevel = 1e-12;
+
+/// Where a meeting leads from these levels.
+RateLevels afterMeeting(const std::vector<RateLevel>& before, const Meeting& meeting) {
+    RateLevels after{meeting.date, {}, {}};
+    for (const RateLevel& level : before) {
+        for (const double move : meeting.moves) {
+            after.levels.push_back({level.rate + move, 0.0});
+        }
+    }
+    const auto byRate = [](const RateLevel& one, const RateLevel& other) {
+        return one.rate < other.rate;
+    };
+    std::sort(after.levels.begin(), after.levels.end(), byRate);
+    after.levels.erase(std::unique(after.levels.begin(), after.levels.end(),
+                                   [](const RateLevel& one, const RateLevel& other) {
+                                       return other.rate - one.rate < oneLevel;
+                                   }),
+                       after.levels.end());
+    for (std::size_t from = 0; from < before.size(); ++from) {
+        for (std::size_t m = 0; m < meeting.moves.size(); ++m) {
+            const RateLevel reached{before[from].rate + meeting.moves[m] + oneLevel, 0.0};
+            const auto past = std::upper_bound(after.levels.begin(), after.levels.end(), reached, byRate);
+            const auto to = static_cast<std::size_t>(past - after.levels.begin()) - 1;
+            after.levels[to].probability += before[from].probability * meeting.odds[m];
+            after.branches.push_back({from, to, meeting.moves[m], meeting.odds[m]});
+        }
+    }
+    return after;
+}
+
 class PolicyMeetingsCurve final : public Curve, public RandomDiscount {
   public:
     PolicyMeetingsCurve(Date asOf, double overnight, const std::vector<PolicyMeeting>& meetings)
@@ -159,6 +191,18 @@ class PolicyMeetingsCurve final : public Curve, public RandomDiscount {
         return "overnight rate continuous ACT/365.FIXED with " + std::to_string(meetings_.size()) +
                (meetings_.size() == 1 ? " policy meeting" : " policy meetings") +
                ", expected discount factor";
+    }
+
+    [[nodiscard]] std::vector<RateLevels> rateTree() const override {
+        std::vector<RateLevels> tree{{asOf(), {{overnight_, 1.0}}, {}}};
+        for (const Meeting& meeting : meetings_) {
+            RateLevels next = afterMeeting(tree.back().levels, meeting);
+            if (next.levels.size() > mostRateLevels) {
+                return {};
+            }
+            tree.push_back(std::move(next));
+        }
+        return tree;
     }
 
     [[nodiscard]] const RandomDiscount* random() const override { return this; }

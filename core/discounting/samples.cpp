@@ -5,6 +5,7 @@
 #include "numeric/elementary.hpp"
 
 #include <algorithm>
+#include <array>
 #include <cmath>
 #include <cstdint>
 
@@ -112,6 +113,9 @@ class SampleCurve final : public Curve, public RandomDiscount {
             logMeans_.push_back(numeric::log(mean.value()));
             meanLogs_.push_back(meanLog.value());
         }
+        if (paths_.against != nullptr) {
+            compare(*paths_.against);
+        }
     }
 
     [[nodiscard]] double logFactor(Date u) const override { return between(logMeans_, placeOf(u)); }
@@ -130,8 +134,11 @@ class SampleCurve final : public Curve, public RandomDiscount {
                                           " and are needed to " + dates::toIso(last) +
                                           "; their last forward rate is held."});
         }
+        noticeDisagreement(review);
         return review;
     }
+
+    [[nodiscard]] std::vector<SampleColumn> againstCurve() const override { return against_; }
 
     [[nodiscard]] std::string convention() const override {
         return "mean of " + std::to_string(count_) + (count_ == 1 ? " simulated path" : " simulated paths") +
@@ -199,6 +206,42 @@ class SampleCurve final : public Curve, public RandomDiscount {
     }
 
   private:
+    void compare(const Curve& curve) {
+        for (std::size_t i = 0; i < paths_.dates.size(); ++i) {
+            const Date date = paths_.dates[i];
+            SampleColumn column{date, means_[i], {}, curve.factor(date), {}};
+            column.standardError = standardError(std::span{&date, 1}, std::array{1.0});
+            if (column.standardError && *column.standardError > 0.0 && std::isfinite(column.factor)) {
+                column.errors = (column.mean - column.factor) / *column.standardError;
+            }
+            against_.push_back(column);
+        }
+    }
+
+    void noticeDisagreement(outcome::Review& review) const {
+        std::size_t apart = 0;
+        const SampleColumn* worst = nullptr;
+        for (const SampleColumn& column : against_) {
+            if (!column.errors || std::fabs(*column.errors) < samplesDisagreeFrom) {
+                continue;
+            }
+            ++apart;
+            if (worst == nullptr || std::fabs(*column.errors) > std::fabs(*worst->errors)) {
+                worst = &column;
+            }
+        }
+        if (worst == nullptr) {
+            return;
+        }
+        review.notices.push_back(
+            {"/factors", "samples-disagree",
+             "The samples disagree with the market's curve on " + std::to_string(apart) + " of " +
+                 std::to_string(against_.size()) + " dates: on " + dates::toIso(worst->date) +
+                 " their mean is " + detail::toText(worst->mean) + " and the curve's factor " +
+                 detail::toText(worst->factor) + ", " + detail::toText(std::fabs(*worst->errors)) +
+                 " standard errors apart. They may come from another day or another curve."});
+    }
+
     static constexpr std::uint64_t mostDrawnFrom = 8'000'000;
 
     /// ln D(u) of every path.
@@ -237,6 +280,7 @@ class SampleCurve final : public Curve, public RandomDiscount {
     std::vector<double> means_;
     std::vector<double> logMeans_;
     std::vector<double> meanLogs_;
+    std::vector<SampleColumn> against_;
 };
 
 constexpr std::size_t mostNumbers = 2'000'000;
@@ -284,6 +328,12 @@ Outcome<CurvePtr> samples(Date asOf, SamplePaths paths) {
             faults.push_back({"/factors", "row-length", "Every path needs one factor for each date."});
         }
         checkFactors(faults, paths);
+    }
+    if (paths.against != nullptr && paths.against->random() != nullptr) {
+        faults.push_back(
+            {"/against", "random-fit", "The curve that samples are held against must not be random itself."});
+    } else if (paths.against != nullptr && !paths.dates.empty() && faults.empty()) {
+        outcome::append(faults, "/against", paths.against->review(paths.dates.back()).faults);
     }
     if (!faults.empty()) {
         return faults;

@@ -6,6 +6,7 @@
 #include "numeric/sobol.hpp"
 
 #include <algorithm>
+#include <array>
 #include <bit>
 #include <cassert>
 #include <cmath>
@@ -51,6 +52,17 @@ struct Spread {
 
 double squareOf(double x) {
     return x * x;
+}
+
+/// The 97.5 % quantiles of the normal law and of Student's with 1, 2, … degrees of freedom (tables of every
+/// statistics textbook; tested against Boost.Math).
+constexpr double normalReach95 = 1.959963984540054;
+double studentReach95(std::size_t freedom) {
+    constexpr std::array reach{12.706204736, 4.302652730, 3.182446305, 2.776445105, 2.570581836,
+                               2.446911851,  2.364624252, 2.306004135, 2.262157163, 2.228138852,
+                               2.200985160,  2.178812830, 2.160368656, 2.144786688, 2.131449546};
+    static_assert(reach.size() == static_cast<std::size_t>(scramblings) - 1);
+    return reach[freedom - 1];
 }
 
 } // namespace
@@ -295,6 +307,8 @@ SimulationEstimate Simulation::estimate(std::span<const long> indices,
             (yy - 2.0 * estimate.price * xy + squareOf(estimate.price) * xx) / (independent - 1.0);
     }
     if (independent > 1.0) {
+        estimate.reach95 =
+            isQuasi(plan_) ? studentReach95(static_cast<std::size_t>(independent) - 1) : normalReach95;
         estimate.factorError = std::sqrt(std::max(factorVariance, 0.0));
         estimate.priceError = std::sqrt(std::max(priceVariance, 0.0)) / estimate.factor;
     }

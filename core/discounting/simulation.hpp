@@ -82,6 +82,8 @@ struct SimulationEstimate {
     double price = 0.0;  ///< mean value over mean factor
     std::optional<double> factorError;
     std::optional<double> priceError; ///< its dependence on the two means taken as linear
+    double reach95 = 0.0; ///< so many errors to each side hold the truth in 95 % of simulations: the normal
+                          ///< law's 1.96 or, over few scramblings, Student's; where there are errors
     double meanRatio =
         0.0; ///< mean of value/factor, path by path: not a price. Not finite where a path's is not
 };

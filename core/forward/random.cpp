@@ -1,8 +1,10 @@
 #include "forward/random.hpp"
 
 #include "discounting/curves.hpp"
+#include "numeric/elementary.hpp"
 
 #include <array>
+#include <cmath>
 
 namespace forwright::forward {
 namespace {
@@ -38,6 +40,13 @@ std::optional<RandomView> randomView(const Market& market, const Schedule& sched
     view.expectedFactor = fair.settlementFactor;
     view.meanLog = random->meanLog(settlement);
     view.varianceLog = random->varianceLog(settlement);
+    if (view.varianceLog) {
+        view.deviationLog = std::sqrt(*view.varianceLog);
+    }
+    view.averageRateFactor = numeric::exp(view.meanLog);
+    view.factorGap = view.expectedFactor - view.averageRateFactor;
+    view.tree = random->rateTree();
+    view.against = random->againstCurve();
 
     Market averaged = market;
     averaged.funding.curve = discounting::atAverageRate(market.funding.curve);

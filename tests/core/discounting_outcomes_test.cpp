@@ -157,6 +157,55 @@ TEST_SUITE("discounting: policy meetings") {
         CHECK(large->random()->quantiles(afterDays(200), levels).ok());
     }
 
+    TEST_CASE("the tree of rates: ways that lead to one level meet, and odds multiply (by hand)") {
+        const CurvePtr curve = made(policyMeetings(
+            asOf, 0.02,
+            {{afterDays(10), {{-0.0025, 0.3}, {0, 0.7}}}, {afterDays(50), {{-0.0025, 0.4}, {0, 0.6}}}}));
+        const std::vector<RateLevels> tree = curve->random()->rateTree();
+        REQUIRE(tree.size() == 3);
+        CHECK(tree[0].from == asOf);
+        CHECK(tree[1].from == afterDays(10));
+        REQUIRE(tree[0].levels.size() == 1);
+        CHECK(tree[0].levels[0].rate == 0.02);
+        CHECK(tree[0].branches.empty());
+        REQUIRE(tree[2].levels.size() == 3);
+        const double rates[] = {0.015, 0.0175, 0.02};
+        const double odds[] = {0.12, 0.46, 0.42};
+        for (std::size_t i = 0; i < 3; ++i) {
+            checkRelative(tree[2].levels[i].rate, rates[i], 1e-14);
+            checkRelative(tree[2].levels[i].probability, odds[i], 1e-14);
+        }
+        REQUIRE(tree[2].branches.size() == 4);
+        CHECK(tree[2].branches[0].from == 0);
+        CHECK(tree[2].branches[0].to == 0);
+        CHECK(tree[2].branches[1].to == 1);
+        CHECK(tree[2].branches[2].from == 1);
+        CHECK(tree[2].branches[2].to == 1);
+        CHECK(tree[2].branches[2].by == -0.0025);
+        CHECK(tree[2].branches[2].probability == 0.4);
+    }
+
+    TEST_CASE("a tree with more levels than anybody looks at is left out; every level's odds sum to 1") {
+        std::vector<PolicyMeeting> meetings;
+        for (int k = 1; k <= 8; ++k) { // no two moves add up to a third
+            const double by = 0.001 * std::sqrt(k + 0.37);
+            meetings.push_back({afterDays(30 * k), {{-by, 0.25}, {0, 0.5}, {by / 3, 0.25}}});
+        }
+        CHECK(made(policyMeetings(asOf, 0.02, meetings))->random()->rateTree().empty());
+        meetings.resize(4);
+        const auto tree = made(policyMeetings(asOf, 0.02, meetings))->random()->rateTree();
+        REQUIRE(tree.size() == 5);
+        for (const RateLevels& stage : tree) {
+            CHECK(stage.levels.size() <= mostRateLevels);
+            double sum = 0.0;
+            for (const RateLevel& level : stage.levels) {
+                sum += level.probability;
+            }
+            checkRelative(sum, 1.0, 1e-14);
+        }
+        CHECK(made(vasicek(asOf, {0.02, 0.1, 0.03, 0.01}))->random()->rateTree().empty());
+    }
+
     TEST_CASE("a move that can't happen changes nothing, however large; equal moves are one") {
         const CurvePtr plain = made(policyMeetings(asOf, 0.03, {{afterDays(100), {{0.01, 1.0}}}}));
         const CurvePtr odd =
@@ -346,6 +395,30 @@ TEST_SUITE("discounting: samples") {
                       std::log(0.9), 1e-15);
     }
 
+    TEST_CASE("held against a curve: the distance in standard errors, by hand, and a notice from three on") {
+        // Factors 0.94, 0.95, 0.96: mean 0.95, deviation 0.01, standard error 0.01/√3.
+        const auto heldAgainst = [](double rate) {
+            return made(samples(asOf, {{afterDays(365)}, {0.94, 0.95, 0.96}, flatAt(rate)}));
+        };
+        const CurvePtr near = heldAgainst(0.05);
+        const std::vector<SampleColumn> columns = near->random()->againstCurve();
+        REQUIRE(columns.size() == 1);
+        checkRelative(columns[0].mean, 0.95, 1e-15);
+        checkRelative(*columns[0].standardError, 0.01 / std::sqrt(3.0), 1e-12);
+        checkRelative(columns[0].factor, std::exp(-0.05), 1e-15);
+        checkRelative(*columns[0].errors, (0.95 - std::exp(-0.05)) * std::sqrt(3.0) / 0.01, 1e-11);
+        CHECK(near->review(afterDays(365)).notices.empty());
+        const auto far = heldAgainst(0.08)->review(afterDays(365)).notices;
+        REQUIRE(far.size() == 1);
+        CHECK(far[0].code == "samples-disagree");
+        CHECK(far[0].at == "/factors");
+        // It is compared, never priced with.
+        CHECK(near->factor(afterDays(200)) == heldAgainst(0.08)->factor(afterDays(200)));
+        CHECK(
+            made(samples(asOf, {{afterDays(1)}, {0.9}, flatAt(0.01)}))->random()->againstCurve()[0].errors ==
+            std::nullopt);
+    }
+
     TEST_CASE("the standard error is the spread of the mean over many simulations (printed seed, 400 of 500 "
               "paths)") {
         std::mt19937_64 generator(7);
@@ -374,6 +447,8 @@ TEST_SUITE("discounting: samples") {
     }
 
     TEST_CASE("faults") {
+        CHECK(codes(samples(asOf, {{afterDays(1)}, {0.9}, made(vasicek(asOf, {0.02, 0.1, 0.03, 0.01}))})) ==
+              "/against random-fit");
         CHECK(codes(samples(asOf, {})) == "/dates empty-list /factors empty-list");
         CHECK(codes(samples(asOf, {{asOf, afterDays(5), afterDays(5)}, {1, 0, -1, std::nan("")}})) ==
               "/dates/0 not-after-as-of /dates/2 not-rising /factors row-length /factors/0/1 not-positive "

@@ -10,7 +10,7 @@ import { demonstrationDraft } from './store/demonstration';
 import { readPreferences } from './store/preferences';
 import { startFrom } from './store/session';
 import { watchTheClock } from './store/sheet-time';
-import { coreTrouble, coreVersion, preferences } from './store/signals';
+import { coreKind, coreTrouble, coreVersion, preferences } from './store/signals';
 
 const opening = openCore();
 
@@ -28,6 +28,7 @@ if (root !== null) render(<App />, root);
 try {
   const core = await opening;
   if (root !== null) root.dataset['core'] = `${core.kind} ${core.thread}`;
+  coreKind.value = core.kind;
   coreVersion.value = core.version;
   calculateWith(core);
 } catch {

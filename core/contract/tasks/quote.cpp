@@ -204,13 +204,50 @@ void writeLedgers(Writer& writer, const Market& market, const Quote& quote) {
     writer.endObject();
 }
 
+void writeTree(Writer& writer, const std::vector<discounting::RateLevels>& tree) {
+    writeList(writer, "tree", tree, [&](const discounting::RateLevels& stage) {
+        writer.beginObject();
+        writer.member("from", stage.from);
+        writeList(writer, "levels", stage.levels, [&](const discounting::RateLevel& level) {
+            writer.beginObject();
+            writer.member("rate", level.rate);
+            writer.member("probability", level.probability);
+            writer.endObject();
+        });
+        writeList(writer, "branches", stage.branches, [&](const discounting::RateBranch& branch) {
+            writer.beginObject();
+            writer.member("from", branch.from);
+            writer.member("to", branch.to);
+            writer.member("by", branch.by);
+            writer.member("probability", branch.probability);
+            writer.endObject();
+        });
+        writer.endObject();
+    });
+}
+
+void writeAgainst(Writer& writer, const std::vector<discounting::SampleColumn>& columns) {
+    writeList(writer, "against", columns, [&](const discounting::SampleColumn& column) {
+        writer.beginObject();
+        writer.member("date", column.date);
+        writer.member("mean", column.mean);
+        writer.member("standardError", column.standardError);
+        writer.member("factor", column.factor);
+        writer.member("errors", column.errors);
+        writer.endObject();
+    });
+}
+
 void writeRandom(Writer& writer, const forward::RandomView& random) {
     writer.key("random").beginObject();
     writer.member("expectedFactor", random.expectedFactor);
     writer.key("logFactor").beginObject();
     writer.member("mean", random.meanLog);
     writer.member("variance", random.varianceLog);
+    writer.member("deviation", random.deviationLog);
     writer.endObject();
+    writer.member("averageRateFactor", random.averageRateFactor);
+    writer.member("factorGap", random.factorGap);
     writer.member("averageRateForward", random.averageRateForward);
     writer.member("gap", random.gap);
     writeList(writer, "quantiles", random.quantiles, [&](const discounting::Quantile& quantile) {
@@ -229,6 +266,12 @@ void writeRandom(Writer& writer, const forward::RandomView& random) {
         writer.member("low", random.interval95->bid);
         writer.member("high", random.interval95->offer);
         writer.endObject();
+    }
+    if (!random.tree.empty()) {
+        writeTree(writer, random.tree);
+    }
+    if (!random.against.empty()) {
+        writeAgainst(writer, random.against);
     }
     writer.endObject();
 }

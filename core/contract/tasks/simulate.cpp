@@ -186,6 +186,12 @@ void writeWhole(Writer& writer, const desk::SimulationAsked& asked, const desk::
     writer.endObject();
     writeFactorAndForward(writer, "estimate", result.estimate.factor, result.estimate.price);
     writeFactorAndForward(writer, "standardError", result.estimate.factorError, result.estimate.priceError);
+    if (result.interval95) {
+        writer.key("interval95").beginObject();
+        writer.member("low", result.interval95->bid);
+        writer.member("high", result.interval95->offer);
+        writer.endObject();
+    }
     writeFactorAndForward(writer, "closedForm", result.closedForm.factor, result.closedForm.forward);
     writer.member("pathBias", result.pathBias);
     writeHistogram(writer, result);

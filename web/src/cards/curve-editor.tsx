@@ -64,7 +64,18 @@ function ModelEditor({ path, at, model }: CurveEditorProps & { readonly model: C
     case 'scenarios':
       return <ScenariosEditor path={`${path}/scenarios`} at={at} />;
     case 'samples':
-      return <SamplesEditor path={`${path}/samples`} at={at} />;
+      return (
+        <>
+          <SamplesEditor path={`${path}/samples`} at={at} />
+          <FitEditor
+            curvePath={path}
+            fitPath={`${path}/samples/against`}
+            at={`${at}/against`}
+            label="Held against the market’s"
+            none="nothing"
+          />
+        </>
+      );
   }
 }
 

@@ -9,28 +9,31 @@ interface FitEditorProps {
   /** Where the model's choice stands. */
   readonly fitPath: string;
   readonly at: string;
+  /** What the curve is to the model. */
+  readonly label?: string;
+  /** The choice of none of them, where there is one. */
+  readonly none?: string;
 }
 
-/** The curve that a model is made to agree with: this funding's own flat rate, or its own points. */
-export function FitEditor({ curvePath, fitPath, at }: FitEditorProps) {
+/** The curve that a model is made to agree with, or held against: this funding's own flat rate, or its own points. */
+export function FitEditor({ curvePath, fitPath, at, label = 'Fitted to', none }: FitEditorProps) {
+  const chosen = typed(fitPath);
   return (
     <>
       <div class="field">
-        <span class="label">Fitted to</span>
+        <span class="label">{label}</span>
         <Segmented
-          label="Fitted to"
+          label={label}
           path={fitPath}
           options={[
+            ...(none === undefined ? [] : [{ value: '', name: none }]),
             { value: 'flat', name: 'The flat rate' },
             { value: 'pillars', name: 'The curve' },
           ]}
         />
       </div>
-      {typed(fitPath) === 'flat' ? (
-        <FlatEditor path={`${curvePath}/flat`} at={at} />
-      ) : (
-        <PillarsEditor path={`${curvePath}/pillars`} at={at} />
-      )}
+      {chosen === 'flat' && <FlatEditor path={`${curvePath}/flat`} at={at} />}
+      {chosen === 'pillars' && <PillarsEditor path={`${curvePath}/pillars`} at={at} />}
     </>
   );
 }

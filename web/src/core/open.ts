@@ -12,6 +12,8 @@ export interface Core {
   readonly thread: 'worker' | 'page';
   readonly version: string;
   answer(request: string): Promise<string>;
+  /** Ends its Worker, where it has one; what it was asked is not answered any more. */
+  close(): void;
 }
 
 /** What the core's own script defines. */
@@ -39,16 +41,22 @@ function hasWebAssembly(): boolean {
   return typeof WebAssembly === 'object' && WebAssembly.validate(vectorProbe);
 }
 
-async function modulePart(): Promise<Parts> {
-  const [script, wasmBinary] = await Promise.all([unpack(moduleScript), unpack(moduleWasm)]);
-  return { kind: 'module', script, given: { wasmBinary } };
+/** Made once, however many cores are opened. */
+function once<T>(make: () => Promise<T>): () => Promise<T> {
+  let made: Promise<T> | undefined;
+  return () => (made ??= make());
 }
 
-async function plainPart(): Promise<Parts> {
+const modulePart = once(async (): Promise<Parts> => {
+  const [script, wasmBinary] = await Promise.all([unpack(moduleScript), unpack(moduleWasm)]);
+  return { kind: 'module', script, given: { wasmBinary } };
+});
+
+const plainPart = once(async (): Promise<Parts> => {
   const { script, given } = await modulePart();
   const text = plainScript(given.wasmBinary, new TextDecoder().decode(script));
   return { kind: 'plain', script: new TextEncoder().encode(text), given };
-}
+});
 
 /** Runs in the Worker, after the core's own script, of which it knows only `forwrightCore`. */
 function serve(): void {
@@ -115,6 +123,7 @@ async function openInWorker({ kind, script, given }: Parts): Promise<Core> {
         waiting.set(id, { done, failed });
         worker.postMessage({ id, request });
       }),
+    close: () => worker.terminate(),
   };
 }
 
@@ -135,6 +144,7 @@ async function openOnPage({ kind, script, given }: Parts): Promise<Core> {
     thread: 'page',
     version: core.version(),
     answer: (request) => Promise.resolve().then(() => core.answer(request)),
+    close: () => undefined,
   };
 }
 

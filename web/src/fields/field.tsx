@@ -1,8 +1,9 @@
 import { useId } from 'preact/hooks';
-import { bind } from './binding';
+import { bind, type Binding } from './binding';
+import type { Fault } from '../model/view';
 import { faultAt, TextInput, type FieldKind } from './text-input';
 
-interface FieldProps {
+export interface FieldProps {
   readonly label: string;
   /** Where its text stands in the deal, as `market/spot/bid`. */
   readonly path: string;
@@ -13,12 +14,17 @@ interface FieldProps {
   readonly hint?: string;
   readonly whole?: boolean;
   readonly placeholder?: string;
+  /** Where its text stands, where that is not the deal. */
+  readonly binding?: Binding;
+  /** What is wrong with it, where the quote's own faults do not say. */
+  readonly wrong?: Fault | null;
 }
 
 /** A labelled input of a card, with its unit, what it means, and what is wrong with it. */
-export function Field({ label, path, at = `/${path}`, kind, unit, hint, whole = false, placeholder }: FieldProps) {
+export function Field(props: FieldProps) {
+  const { label, path, at = `/${path}`, kind, unit, hint, whole = false, placeholder, binding, wrong } = props;
   const id = useId();
-  const fault = faultAt(at, whole);
+  const fault = wrong === undefined ? faultAt(at, whole) : wrong;
   const notes = [
     unit !== undefined && `${id}-unit`,
     hint !== undefined && `${id}-hint`,
@@ -30,10 +36,10 @@ export function Field({ label, path, at = `/${path}`, kind, unit, hint, whole = 
       <div class="control">
         <TextInput
           id={id}
-          binding={bind(path)}
+          binding={binding ?? bind(path)}
           at={at}
           kind={kind}
-          whole={whole}
+          wrong={fault !== null}
           describedBy={notes.filter(Boolean).join(' ') || undefined}
           {...(placeholder === undefined ? {} : { placeholder })}
         />

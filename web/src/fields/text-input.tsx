@@ -19,6 +19,8 @@ export interface TextInputProps {
   readonly name?: string;
   /** Whether faults inside the member belong to it too. */
   readonly whole?: boolean;
+  /** Whether it is marked as wrong, where its owner knows. */
+  readonly wrong?: boolean;
   readonly describedBy?: string | undefined;
   readonly size?: number;
   readonly placeholder?: string;
@@ -44,7 +46,7 @@ function stepped(text: string, kind: FieldKind, direction: 1 | -1, far: boolean)
 /** One input: its text is the draft's; arrow keys step it, Enter goes on to the next field. */
 export function TextInput(props: TextInputProps) {
   const { id, binding, at, kind, name, whole = false, describedBy, size, placeholder, onPaste } = props;
-  const wrong = faultAt(at, whole) !== null;
+  const wrong = props.wrong ?? faultAt(at, whole) !== null;
 
   const onKeyDown = (event: TargetedKeyboardEvent<HTMLInputElement>): void => {
     if (event.ctrlKey || event.metaKey || event.altKey) return;

@@ -1,5 +1,5 @@
 /** The shape of a draft as it is kept and saved. */
-import { models } from '../model/draft';
+import { emptyAnalysis, models } from '../model/draft';
 import type { Shape } from './shape';
 
 const text = 'text';
@@ -31,7 +31,7 @@ const curve = members({
   hullWhite: members({ meanReversion: text, volatility: text, fit: fixedKind }),
   meetings: members({ overnight: text, rows: rows({ date: text, moves: rows(texts('by', 'probability')) }) }),
   scenarios: members({ rows: rows({ weight: text, curve: fixedCurve }) }),
-  samples: members({ text }),
+  samples: members({ text, against: { added: { oneOf: ['', 'flat', 'pillars'] }, before: '' } }),
 });
 const funding = members({ curve, lendSpread: text, borrowSpread: text });
 const bothSides = members(texts('bid', 'offer'));
@@ -69,6 +69,15 @@ export const draftShape: Shape = members({
   current: text,
   deals: { named: members({ inquiry, market, madeAt: text, validUntil: text, demonstration: 'flag' }) },
   tenors: members({ maturities: text }),
+  analysis: {
+    added: members({
+      futures: members(texts('volatility', 'correlation')),
+      cover: members(texts('growth', 'volatility', 'share', 'loading')),
+      simulation: members({ method: { oneOf: ['quasi', 'pseudo'] }, ...texts('paths', 'seed') }),
+      leftOut: { list: text },
+    }),
+    before: emptyAnalysis,
+  },
   agreed: rows({
     market: text,
     reference: text,

@@ -6,7 +6,9 @@ export type Shape =
   | { readonly oneOf: readonly string[] }
   | { readonly list: Shape }
   | { readonly named: Shape }
-  | { readonly members: Readonly<Record<string, Shape>> };
+  | { readonly members: Readonly<Record<string, Shape>> }
+  /** What earlier versions did not have yet, and what stands for it where it is not there. */
+  | { readonly added: Shape; readonly before: unknown };
 
 /** A sentence about the first misfit, or null where the value has the shape. */
 export function misfit(value: unknown, shape: Shape, at = ''): string | null {
@@ -14,6 +16,7 @@ export function misfit(value: unknown, shape: Shape, at = ''): string | null {
   if (shape === 'text') return typeof value === 'string' ? null : `${place} should be a text.`;
   if (shape === 'number') return Number.isSafeInteger(value) ? null : `${place} should be a whole number.`;
   if (shape === 'flag') return typeof value === 'boolean' ? null : `${place} should be true or false.`;
+  if ('added' in shape) return value === undefined ? null : misfit(value, shape.added, at);
   if ('oneOf' in shape)
     return typeof value === 'string' && shape.oneOf.includes(value)
       ? null
@@ -37,4 +40,17 @@ export function misfit(value: unknown, shape: Shape, at = ''): string | null {
     }
     return null;
   }
+}
+
+/** A value that has the shape, with what an earlier version did not have yet. */
+export function completed(value: unknown, shape: Shape): unknown {
+  if (typeof shape === 'string' || 'oneOf' in shape) return value;
+  if ('added' in shape) return value === undefined ? shape.before : completed(value, shape.added);
+  if ('list' in shape) return (value as readonly unknown[]).map((item) => completed(item, shape.list));
+  const inner = value as Readonly<Record<string, unknown>>;
+  if ('named' in shape)
+    return Object.fromEntries(Object.entries(inner).map(([name, item]) => [name, completed(item, shape.named)]));
+  return Object.fromEntries(
+    Object.entries(shape.members).map(([name, itsShape]) => [name, completed(inner[name], itsShape)]),
+  );
 }

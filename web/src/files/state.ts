@@ -4,7 +4,7 @@ import { notUnderstood, understood, type Parsed } from '../input/parsed';
 import type { Draft } from '../model/draft';
 import { withOtherSign } from '../model/number-texts';
 import { draftShape } from './draft-shape';
-import { misfit } from './shape';
+import { completed, misfit, type Shape } from './shape';
 
 const format = 'forwright-state/1';
 
@@ -37,13 +37,15 @@ export function isState(value: unknown): boolean {
   return formatOf(value) === format;
 }
 
+const stateShape: Shape = {
+  members: { format: { oneOf: [format] }, decimal: { oneOf: ['.', ','] }, draft: draftShape },
+};
+
 /** The draft of a file, with its numbers written the person's way. */
 export function readState(value: unknown, decimal: DecimalSign): Parsed<Draft> {
-  const wrong = misfit(value, {
-    members: { format: { oneOf: [format] }, decimal: { oneOf: ['.', ','] }, draft: draftShape },
-  });
+  const wrong = misfit(value, stateShape);
   if (wrong !== null) return notUnderstood('damaged', `This file is damaged: ${wrong}`);
-  const { draft, decimal: its } = value as Kept;
+  const { draft, decimal: its } = completed(value, stateShape) as Kept;
   if (draft.deals[draft.current] === undefined)
     return notUnderstood('damaged', 'This file is damaged: the market that was on screen is not in it.');
   return understood(its === decimal ? draft : withOtherSign(draft));

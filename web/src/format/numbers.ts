@@ -48,6 +48,12 @@ export function formatFigures(value: number, figures = 9): string {
   return written(value, 0, Math.min(12, Math.max(0, figures - whole)));
 }
 
+/** With so many significant figures however small it is: errors and odds. Up to 15 decimals. */
+export function formatSignificant(value: number, figures: number): string {
+  const first = value === 0 ? 0 : Math.floor(Math.log10(Math.abs(value)));
+  return written(value, 0, Math.min(15, Math.max(0, figures - 1 - first)));
+}
+
 /** A change: always with its sign, but for one shown as 0. */
 export function formatSigned(value: number, digits?: number): string {
   const text = formatNumber(value, digits);

@@ -17,7 +17,8 @@ import type {
   RateDraft,
   ShortRateDraft,
 } from './draft';
-import { isBlank } from './draft';
+import { isBlank, models } from './draft';
+import { fundingInWords } from './funding-words';
 import type { Curve, Funding, Market, QuoteRequest } from './request';
 import type { Fault } from './view';
 
@@ -187,7 +188,20 @@ function randomCurve(draft: CurveDraft, at: string, read: Reader): object {
         })),
       };
     case 'samples':
-      return { kind: 'random', model: 'samples', ...read.samples(draft.samples.text, at) };
+      return {
+        kind: 'random',
+        model: 'samples',
+        ...read.samples(draft.samples.text, at),
+        ...(draft.samples.against === ''
+          ? {}
+          : {
+              against: fixedCurve(
+                { kind: draft.samples.against, flat: draft.flat, pillars: draft.pillars },
+                `${at}/against`,
+                read,
+              ),
+            }),
+      };
   }
 }
 
@@ -335,4 +349,47 @@ export function buildQuote(deal: DealDraft, writing: Writing): Built<QuoteReques
     want: everyBlock,
   };
   return { request: request as unknown as QuoteRequest, faults: read.faults };
+}
+
+/** A way to fund the deal on screen that is typed in, with the curve that it makes. */
+export interface FundingChoice {
+  readonly key: string;
+  readonly name: string;
+  readonly curve: Curve;
+}
+
+/** Which of the kinds of funding have something typed in them, the one on screen first. */
+export function fundingChoices(deal: DealDraft, writing: Writing): readonly FundingChoice[] {
+  const { curve: whole } = deal.market.funding;
+  const kinds: readonly Pick<CurveDraft, 'kind' | 'model'>[] = [
+    { kind: 'flat', model: whole.model },
+    { kind: 'pillars', model: whole.model },
+    ...models.map((model) => ({ kind: 'random' as const, model })),
+  ];
+  const keyOf = ({ kind, model }: Pick<CurveDraft, 'kind' | 'model'>): string => (kind === 'random' ? model : kind);
+  const own = keyOf(whole);
+  return kinds
+    .map((kind) => ({ ...whole, ...kind }))
+    .filter((draft) => keyOf(draft) === own || isTyped(draft))
+    .sort((one, other) => Number(keyOf(other) === own) - Number(keyOf(one) === own))
+    .map((draft) => ({
+      key: keyOf(draft),
+      name: fundingInWords(draft),
+      curve: curve(draft, '/market/funding/curve', new Reader(writing, deal.market.asOf)),
+    }));
+}
+
+function isTyped(draft: CurveDraft): boolean {
+  if (draft.kind === 'flat') return draft.flat.rate.trim() !== '';
+  if (draft.kind === 'pillars') return !draft.pillars.rows.every((row) => isBlank(row));
+  const own = {
+    vasicek: draft.vasicek.r0,
+    'cox-ingersoll-ross': draft.coxIngersollRoss.r0,
+    'ho-lee': draft.hoLee.volatility,
+    'hull-white': draft.hullWhite.volatility,
+    'policy-meetings': draft.meetings.overnight,
+    scenarios: draft.scenarios.rows.map(({ weight }) => weight).join(''),
+    samples: draft.samples.text,
+  }[draft.model];
+  return own.trim() !== '';
 }

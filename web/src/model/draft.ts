@@ -79,7 +79,11 @@ export interface CurveDraft {
   readonly meetings: { readonly overnight: string; readonly rows: readonly MeetingRow[] };
   readonly scenarios: { readonly rows: readonly ScenarioRow[] };
   /** A heading of dates, then one row of factors a path, as pasted. */
-  readonly samples: { readonly text: string };
+  readonly samples: {
+    readonly text: string;
+    /** Which of this draft's own fixed curves they are held against; empty for none. */
+    readonly against: '' | 'flat' | 'pillars';
+  };
 }
 export interface FundingDraft {
   readonly curve: CurveDraft;
@@ -167,11 +171,25 @@ export interface AgreedRow {
   readonly quantity: string;
   readonly maturity: string;
 }
+/** What is asked beyond the quote, of whichever deal is on screen. */
+export interface AnalysisDraft {
+  readonly futures: { readonly volatility: string; readonly correlation: string };
+  readonly cover: {
+    readonly growth: string;
+    readonly volatility: string;
+    readonly share: string;
+    readonly loading: string;
+  };
+  readonly simulation: { readonly method: 'quasi' | 'pseudo'; readonly paths: string; readonly seed: string };
+  /** Kinds of funding that are not to be compared. */
+  readonly leftOut: readonly string[];
+}
 /** Everything that is kept, undone and saved. */
 export interface Draft {
   readonly current: string;
   readonly deals: Readonly<Record<string, DealDraft>>;
   readonly tenors: { readonly maturities: string };
+  readonly analysis: AnalysisDraft;
   readonly agreed: readonly AgreedRow[];
 }
 
@@ -196,7 +214,7 @@ export const emptyCurve: CurveDraft = {
   hullWhite: { meanReversion: '', volatility: '', fit: 'flat' },
   meetings: { overnight: '', rows: [] },
   scenarios: { rows: [] },
-  samples: { text: '' },
+  samples: { text: '', against: '' },
 };
 export const emptyFunding: FundingDraft = { curve: emptyCurve, lendSpread: '', borrowSpread: '' };
 export const emptyDeal: DealDraft = {
@@ -240,12 +258,11 @@ export const emptyDeal: DealDraft = {
   demonstration: false,
 };
 
-/** One row of each list, to tell what belongs where when a draft is read back from a file. */
-export const draftShape: Draft = {
-  current: '',
-  deals: {},
-  tenors: { maturities: '' },
-  agreed: [{ id: 0, market: '', reference: '', client: 'bought', price: '', quantity: '', maturity: '' }],
+export const emptyAnalysis: AnalysisDraft = {
+  futures: { volatility: '', correlation: '' },
+  cover: { growth: '', volatility: '', share: '', loading: '' },
+  simulation: { method: 'quasi', paths: '65536', seed: '1' },
+  leftOut: [],
 };
 
 /** An id that no row of the list has. */

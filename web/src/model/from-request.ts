@@ -118,7 +118,9 @@ function onto(draft: CurveDraft, from: Curve, write: Writer): CurveDraft {
     case 'samples':
       return {
         ...random,
+        ...(from.against === undefined ? {} : fixed(from.against as FixedCurve, write)),
         samples: {
+          against: from.against === undefined ? '' : kindOf(from.against as FixedCurve),
           text: [
             from.dates.map(dateToText),
             ...from.factors.map((row) => row.map((factor) => write.number(factor, 'plain'))),

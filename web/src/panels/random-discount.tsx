@@ -1,7 +1,18 @@
+import { MeetingsEditor } from '../cards/meetings-editor';
 import { Outcomes } from '../charts/outcomes';
-import { formatDate, formatFigures, formatNumber, formatPercent, formatSigned, formatSignedMoney } from '../format';
+import { RateTree } from '../charts/rate-tree';
+import {
+  formatDate,
+  formatFigures,
+  formatSignificant,
+  formatNumber,
+  formatPercent,
+  formatSigned,
+  formatSignedMoney,
+} from '../format';
 import type { QuoteRequest, QuoteResult } from '../model/view';
 import { pricePrecision, unitName } from '../quote/words';
+import { SimulationView } from './simulation';
 
 type Block = NonNullable<QuoteResult['random']>;
 interface Props {
@@ -9,15 +20,10 @@ interface Props {
   readonly result: QuoteResult;
 }
 
-/** The factor at which money would be discounted if the rate were its average: e to the expected log factor. */
-export function averageRateFactor({ logFactor }: Block): number {
-  return Math.exp(logFactor.mean);
-}
-
 function Comparison({ request, result, block }: Props & { readonly block: Block }) {
   const digits = pricePrecision(request, result).between + 3;
   const { currency } = request.market.asset;
-  const average = averageRateFactor(block);
+  const { averageRateFactor: average } = block;
   const onAll = result.total?.gap ?? null;
   return (
     <div class="frame" role="region" aria-label="Expected factor and factor at the average rate" tabIndex={0}>
@@ -52,7 +58,7 @@ function Comparison({ request, result, block }: Props & { readonly block: Block 
               {onAll !== null &&
                 `: ${formatSignedMoney(onAll, currency)} on ${formatNumber(request.inquiry.quantity)} ${unitName(request)}`}
             </th>
-            <td class="num">{formatSigned(block.expectedFactor - average, 8)}</td>
+            <td class="num">{formatSigned(block.factorGap, 8)}</td>
             <td class="num">{formatSigned(block.gap, digits)}</td>
           </tr>
         </tbody>
@@ -68,21 +74,59 @@ function Precision({ block, digits }: { readonly block: Block; readonly digits: 
       {paths !== undefined && standardError !== undefined && interval95 && (
         <p>
           From {formatNumber(paths)} paths: standard error of the factor{' '}
-          <span class="num">{formatFigures(standardError, 6)}</span>; the fair forward lies between{' '}
+          <span class="num">{formatSignificant(standardError, 3)}</span>; the fair forward lies between{' '}
           <span class="num">{formatNumber(interval95.low, digits)}</span> and{' '}
           <span class="num">{formatNumber(interval95.high, digits)}</span> with 95 % confidence.
         </p>
       )}
-      {logFactor.variance !== null && (
+      {logFactor.deviation !== null && (
         <p class="muted">
           The logarithm of the factor has mean <span class="num">{formatFigures(logFactor.mean, 7)}</span> and standard
-          deviation <span class="num">{formatPercent(Math.sqrt(logFactor.variance), 3)}</span>.
+          deviation <span class="num">{formatPercent(logFactor.deviation, 3)}</span>.
         </p>
       )}
       {quantileError > 0 && (
-        <p class="muted">Quantiles are right to {formatFigures(quantileError, 2)} of their value at worst.</p>
+        <p class="muted">Quantiles are right to {formatSignificant(quantileError, 2)} of their value at worst.</p>
       )}
     </>
+  );
+}
+
+/** Samples brought from elsewhere beside the market's own curve. */
+function Against({ columns }: { readonly columns: NonNullable<Block['against']> }) {
+  return (
+    <div class="frame" role="region" aria-label="Samples beside the market’s curve" tabIndex={0}>
+      <table class="table">
+        <thead>
+          <tr>
+            <th scope="col">Samples on</th>
+            <th scope="col" class="num">
+              Mean
+            </th>
+            <th scope="col" class="num">
+              Its error
+            </th>
+            <th scope="col" class="num">
+              The curve’s factor
+            </th>
+            <th scope="col" class="num">
+              Apart, in errors
+            </th>
+          </tr>
+        </thead>
+        <tbody>
+          {columns.map(({ date, mean, standardError, factor, errors }) => (
+            <tr key={date}>
+              <th scope="row">{formatDate(date)}</th>
+              <td class="num">{formatNumber(mean, 8)}</td>
+              <td class="num">{standardError === null ? '–' : formatSignificant(standardError, 3)}</td>
+              <td class="num">{formatNumber(factor, 8)}</td>
+              <td class="num">{errors === null ? '–' : formatSigned(errors, 1)}</td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
   );
 }
 
@@ -108,12 +152,35 @@ export function RandomDiscount({ request, result }: Props) {
         <p>
           <b>What it does not change:</b> only that one expected factor enters, not how far outcomes lie apart. The
           hedge is the same and the ledger closes at zero, whichever rate comes true, as money is borrowed and lent to
-          its date today.
+          its date today. Nor does it matter whether the asset moves with rates: its price today is in the forward, its
+          way there is not. (It matters to a future, which is settled every day: see Requests, Futures.) Distributions
+          are discounted by the same random factors, each to its own date.
         </p>
       </div>
       <Comparison request={request} result={result} block={block} />
-      <Outcomes block={block} average={averageRateFactor(block)} when={when} />
+      <Outcomes
+        name={`Discount factor to ${when}: where outcomes lie`}
+        what="Factor"
+        quantiles={block.quantiles.map(({ probability, factor }) => ({ probability, value: factor }))}
+        marks={[
+          { name: 'expected', value: block.expectedFactor },
+          { name: 'at average rate', value: block.averageRateFactor },
+        ]}
+        digits={4}
+        fineDigits={6}
+      />
       <Precision block={block} digits={pricePrecision(request, result).between + 3} />
+      {block.against && <Against columns={block.against} />}
+      {block.tree && (
+        <>
+          <RateTree tree={block.tree} />
+          <details class="tree-editor">
+            <summary>Change the meetings and their odds here</summary>
+            <MeetingsEditor path="market/funding/curve/meetings" at="/market/funding/curve" />
+          </details>
+        </>
+      )}
+      <SimulationView request={request} result={result} />
     </div>
   );
 }

@@ -1,148 +1,46 @@
-import { useId } from 'preact/hooks';
-import { readMaturity } from '../input/dates';
-import { formatDate, formatNumber, formatSigned, formatSignedPercent, precisionOf } from '../format';
-import type { TenorsResult } from '../model/answer';
-import { coreTrouble, errors, focusField, format } from '../model/view';
-import { built } from '../store/calculation';
-import { coreVersion } from '../store/signals';
-import { draft, editDraft } from '../store/session';
-import { useAnswer } from '../store/use-answer';
+import type { FunctionComponent } from 'preact';
+import { Tabs } from '../fields/tabs';
+import { requestKind, requestKinds, type RequestKind } from '../store/navigation';
+import { Comparison } from '../requests/comparison';
+import { Cover } from '../requests/cover';
+import { Futures } from '../requests/futures';
+import { Tenors } from '../requests/tenors';
 import { Cautions } from '../shell/cautions';
 import { Inquiry } from '../shell/inquiry';
 
-interface Word {
-  readonly typed: string;
-  readonly maturity: string;
+interface Content {
+  readonly name: string;
+  readonly view: FunctionComponent;
+  /** Whether it is about the one maturity of the inquiry. */
+  readonly ofOneMaturity: boolean;
 }
 
-/** Maturities apart by commas, semicolons or line ends; tenors by spaces too. */
-function maturitiesOf(text: string, locale: string, after: string): readonly Word[] {
-  return text
-    .split(/[,;\n]+/)
-    .flatMap((part) => {
-      const words = part.trim().split(/\s+/);
-      return words.every((word) => /^\d+[a-z]$/i.test(word)) ? words : [part.trim()];
-    })
-    .filter((word) => word !== '')
-    .map((typed) => {
-      const read = readMaturity(typed, { locale, after });
-      return { typed, maturity: read.ok ? read.value : typed };
-    });
-}
+/** One line a request: a new one is added here and in the list of kinds. */
+const contents: Readonly<Record<RequestKind, Content>> = {
+  tenors: { name: 'By maturity', view: Tenors, ofOneMaturity: false },
+  comparison: { name: 'By funding', view: Comparison, ofOneMaturity: true },
+  futures: { name: 'Futures', view: Futures, ofOneMaturity: true },
+  cover: { name: 'Hedge cover', view: Cover, ofOneMaturity: true },
+};
 
-function TenorsTable({ result, words, stale }: { result: TenorsResult; words: readonly Word[]; stale: boolean }) {
-  const { tick } = built.value.request.market.asset;
-  return (
-    <div class="table-frame" tabIndex={0} role="region" aria-label="Prices by maturity" data-stale={stale}>
-      <table class="table">
-        <thead>
-          <tr>
-            <th scope="col">For</th>
-            <th scope="col">Maturity</th>
-            <th scope="col">Settles</th>
-            <th scope="col" class="num">
-              Our bid
-            </th>
-            <th scope="col" class="num">
-              Our offer
-            </th>
-            <th scope="col" class="num">
-              Fair
-            </th>
-            <th scope="col" class="num">
-              Break-evens
-            </th>
-            <th scope="col" class="num">
-              Points
-            </th>
-            <th scope="col" class="num">
-              Carry a year
-            </th>
-          </tr>
-        </thead>
-        <tbody>
-          {result.rows.map((row, index) => {
-            const { dealt, between } = precisionOf(tick, row.fair);
-            const price = (value: number | null): string => (value === null ? '–' : formatNumber(value, dealt));
-            return (
-              <tr key={`${index} ${row.maturity}`}>
-                <th scope="row">{words[index]?.typed ?? ''}</th>
-                <td class="date">{formatDate(row.maturity)}</td>
-                <td class="date">{formatDate(row.settlement)}</td>
-                <td class="num strong">{price(row.quote.bid)}</td>
-                <td class="num strong">{price(row.quote.offer)}</td>
-                <td class="num">{formatNumber(row.fair, between)}</td>
-                <td class="num">
-                  {formatNumber(row.breakEven.bid, between)} – {formatNumber(row.breakEven.offer, between)}
-                </td>
-                <td class="num">{formatSigned(row.points, between)}</td>
-                <td class="num">{formatSignedPercent(row.annualised)}</td>
-              </tr>
-            );
-          })}
-        </tbody>
-      </table>
-    </div>
-  );
-}
-
-/** One inquiry at several maturities. */
+/** What a client or the desk may ask beyond one price. */
 export function RequestsPlace() {
-  const id = useId();
-  const { request } = built.value;
-  const { locale } = format.value;
-  const text = draft.value.tenors.maturities;
-  const words = maturitiesOf(text, locale, request.market.asOf);
-  const { client, quantity, margin, roll } = request.inquiry;
-  const question =
-    words.length === 0 || coreVersion.value === ''
-      ? null
-      : {
-          format: 'forwright/1',
-          task: 'tenors',
-          market: request.market,
-          inquiry: { client, quantity, ...(margin === undefined ? {} : { margin }) },
-          maturities: words.map((word) => word.maturity),
-          ...(roll === undefined ? {} : { roll }),
-        };
-  const { result, errors: wrong, stale } = useAnswer<TenorsResult>(question);
-  const own = wrong.filter((fault) => fault.at.startsWith('/maturities'));
-  const elsewhere =
-    own.length === 0 ? [...errors.value.values()].find((fault) => fault.at !== '/inquiry/maturity') : undefined;
+  const shown = requestKind.value;
+  const { view: View, ofOneMaturity } = contents[shown];
   return (
     <main class="place place-requests" id="here">
-      <Inquiry forOneMaturity={false} />
-      <section class="block">
-        <h1>Prices by maturity</h1>
-        <div class="field">
-          <label for={id}>Maturities: tenors apart by spaces, dates by commas</label>
-          <textarea
-            id={id}
-            rows={2}
-            spellcheck={false}
-            value={text}
-            aria-invalid={own.length > 0}
-            aria-describedby={`${id}-errors`}
-            onInput={(event) => editDraft('tenors/maturities', event.currentTarget.value)}
-          />
-          <div id={`${id}-errors`}>
-            {own.map((fault) => (
-              <p class="field-error" key={fault.at}>
-                {words[Number(fault.at.split('/')[2])]?.typed}: {fault.message}
-              </p>
-            ))}
-          </div>
-        </div>
-        {coreTrouble.value !== null && <p class="notice wrong">{coreTrouble.value}</p>}
-        {elsewhere !== undefined && (
-          <p class="notice wrong">
-            {elsewhere.message}{' '}
-            <button type="button" class="quiet" onClick={() => focusField(elsewhere.at)}>
-              Go to it
-            </button>
-          </p>
-        )}
-        {result !== null && <TenorsTable result={result} words={words} stale={stale} />}
+      <h1 class="sr-only">Requests</h1>
+      <Inquiry forOneMaturity={ofOneMaturity} />
+      <section class="block panels">
+        <Tabs
+          label="Requests"
+          prefix="request"
+          shown={shown}
+          tabs={requestKinds.map((kind) => ({ key: kind, name: contents[kind].name }))}
+          show={(kind) => (requestKind.value = kind)}
+        >
+          <View />
+        </Tabs>
         <Cautions />
       </section>
     </main>

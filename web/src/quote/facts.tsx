@@ -69,8 +69,8 @@ function Switched({ result, precision }: { readonly result: QuoteResult; readonl
         Fair since {before.was} became {before.now}
       </dt>
       <dd>
-        <b class="num">{formatSigned(result.fair - before.result.fair, digits)}</b>
-        <small class="num">from {formatNumber(before.result.fair, digits)}</small>
+        <b class="num">{formatNumber(result.fair, digits)}</b>{' '}
+        <small class="num">was {formatNumber(before.result.fair, digits)}</small>
       </dd>
     </div>
   );

@@ -6,6 +6,7 @@ import pair from '../../demonstration/currency-pair.json';
 import share from '../../demonstration/share.json';
 import type { DecimalSign } from '../input/decimal';
 import type { CurveDraft, DealDraft, Draft } from '../model/draft';
+import { emptyAnalysis } from '../model/draft';
 import { curveOnto, dealFrom } from '../model/from-request';
 import type { Curve, QuoteRequest } from '../model/request';
 
@@ -55,6 +56,11 @@ export function demonstrationDraft(sign: DecimalSign): Draft {
     current: Object.keys(deals)[0] ?? '',
     deals,
     tenors: { maturities: '1M 2M 3M 6M 9M 1Y 18M 2Y' },
+    analysis: {
+      ...emptyAnalysis,
+      futures: { volatility: '25', correlation: sign === ',' ? '-0,3' : '-0.3' },
+      cover: { growth: '6', volatility: '25', share: '60', loading: sign === ',' ? '0,1' : '0.1' },
+    },
     agreed: [],
   };
 }

@@ -6,6 +6,10 @@ export type Place = (typeof places)[number];
 export const panels = ['working', 'ledger', 'income', 'sensitivities', 'random'] as const;
 export type Panel = (typeof panels)[number];
 
+export const requestKinds = ['tenors', 'comparison', 'futures', 'cover'] as const;
+export type RequestKind = (typeof requestKinds)[number];
+
+export const requestKind = signal<RequestKind>('tenors');
 export const place = signal<Place>('quote');
 export const panel = signal<Panel>('working');
 

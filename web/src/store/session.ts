@@ -1,14 +1,14 @@
 /** What the person has typed, with its history: the one place that is written to, and the deal on screen read from it. */
 import { computed, signal, type ReadonlySignal } from '@preact/signals';
 import type { DealDraft, Draft } from '../model/draft';
-import { emptyDeal } from '../model/draft';
+import { emptyAnalysis, emptyDeal } from '../model/draft';
 import { advance, back, begin, forth, type History } from './history';
 import { valueAt, withValue } from './paths';
 
 /** Changes at one place that follow each other faster than this are one step to undo. */
 const joinedWithinMilliseconds = 1000;
 
-const nothing: Draft = { current: '', deals: {}, tenors: { maturities: '' }, agreed: [] };
+const nothing: Draft = { current: '', deals: {}, tenors: { maturities: '' }, analysis: emptyAnalysis, agreed: [] };
 const history = signal<History<Draft>>(begin(nothing));
 let lastEdit = 0;
 

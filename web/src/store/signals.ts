@@ -14,5 +14,7 @@ export const beforeSwitch = signal<Previous | null>(null);
 export const preferences = signal<Preferences>({ locale: 'en-GB', decimal: '.' });
 /** A sentence where the core cannot run at all in this browser. */
 export const coreTrouble = signal<string | null>(null);
+/** What the core runs as; empty until it is open. */
+export const coreKind = signal<'' | 'module' | 'plain'>('');
 /** The version that the core says it has; empty until it is open. */
 export const coreVersion = signal('');
