@@ -1,5 +1,6 @@
 #include "contract/asset_reader.hpp"
 
+#include "contract/calendar_reader.hpp"
 #include "contract/currencies.hpp"
 #include "dates/business_calendar.hpp"
 
@@ -59,42 +60,6 @@ std::vector<forward::LagFrom> readLag(const Value& value) {
         return {};
     }
     return {{dates::earliest, value.integer(0, longestLag).value_or(usualLag)}};
-}
-
-std::vector<std::string_view> knownCodes() {
-    std::vector<std::string_view> codes;
-    for (const dates::Centre& centre : dates::knownCentres()) {
-        codes.push_back(centre.code);
-    }
-    return codes;
-}
-
-/// Codes of business centres; only known ones are kept.
-std::vector<std::string> readCentres(const Value& list) {
-    std::vector<std::string> centres;
-    list.rows([&centres](const Value& row, std::size_t /*index*/) {
-        const std::optional<std::string_view> code = row.text();
-        if (!code) {
-            return;
-        }
-        if (dates::findCentre(*code) == nullptr) {
-            row.fault("unknown-calendar", shownText(*code) + " is no calendar known here: give " +
-                                              listedText(knownCodes()) + ", or your own days in holidays.");
-            return;
-        }
-        centres.emplace_back(*code);
-    });
-    return centres;
-}
-
-std::vector<Date> readDates(const Value& list) {
-    std::vector<Date> days;
-    list.rows([&days](const Value& row, std::size_t /*index*/) {
-        if (const auto day = row.date()) {
-            days.push_back(*day);
-        }
-    });
-    return days;
 }
 
 std::string asJson(const std::vector<std::string>& texts) {

@@ -1,7 +1,9 @@
 #include "contract/curve_reader.hpp"
 
+#include "contract/calendar_reader.hpp"
 #include "contract/rate_reader.hpp"
 #include "discounting/curves.hpp"
+#include "discounting/money_market.hpp"
 
 #include <utility>
 #include <vector>
@@ -15,7 +17,7 @@ using discounting::CurvePtr;
 namespace {
 
 constexpr std::string_view curveInWords =
-    "a curve: a rate, or an object with rate (flat) or kind (pillars, random)";
+    "a curve: a rate, or an object with rate (flat) or kind (pillars, instruments, random)";
 
 /// The curve, or null with its faults told where it stands.
 CurvePtr made(const Reader& object, discounting::Outcome<CurvePtr> curve) {
@@ -34,9 +36,17 @@ std::optional<double> parameter(Reader& object, std::string_view name, std::stri
 // ---- pillars
 // ---------------------------------------------------------------------------------------------------
 
-enum class CurveKind { pillars, random };
+enum class CurveKind { pillars, instruments, random };
 std::string_view nameOf(CurveKind kind) {
-    return kind == CurveKind::pillars ? "pillars" : "random";
+    switch (kind) {
+    case CurveKind::pillars:
+        return "pillars";
+    case CurveKind::instruments:
+        return "instruments";
+    case CurveKind::random:
+        break;
+    }
+    return "random";
 }
 
 /// Names of what values are, as the curve's member `quote` has them.
@@ -102,6 +112,128 @@ CurvePtr readPillarCurve(Reader& object, const CurveContext& context) {
     bool whole = false;
     points.pillars = readPillars(object.required("pillars", "a list of {at, value}"), context, whole);
     return whole ? made(object, discounting::pillars(context.asOf, points)) : nullptr;
+}
+
+// ---- instruments
+// ---------------------------------------------------------------------------------------------------
+
+/// A tenor, whose end must not lie beyond the dates there are.
+std::optional<Tenor> readTenor(const Value& value, const CurveContext& context) {
+    const std::optional<std::string_view> text = value.text();
+    if (!text) {
+        return std::nullopt;
+    }
+    const std::optional<Tenor> tenor = dates::parseTenor(*text);
+    if (!tenor || tenor->count == 0) {
+        value.fault("not-a-tenor",
+                    shownText(*text) + " is no tenor: write a number above 0 and D, W, M or Y, as in 3M.");
+        return std::nullopt;
+    }
+    if (dates::addTenor(context.asOf, *tenor) > dates::latest - std::chrono::years{1}) {
+        value.fault("too-far", "This tenor ends after the last dates there are; take a shorter one.");
+        return std::nullopt;
+    }
+    return tenor;
+}
+
+std::optional<std::variant<dates::ShortPeriod, Tenor>> readPeriod(const Value& value,
+                                                                  const CurveContext& context) {
+    if (const auto text = value.present() && value.json().isText() ? value.text() : std::nullopt) {
+        if (const auto period = dates::parseShortPeriod(*text)) {
+            return *period;
+        }
+    }
+    const std::optional<Tenor> tenor = readTenor(value, context);
+    return tenor ? std::optional<std::variant<dates::ShortPeriod, Tenor>>{*tenor} : std::nullopt;
+}
+
+dates::DayCountRule readInstrumentDayCount(Reader& object, const dates::BusinessCalendar& calendar) {
+    dates::DayCountRule rule;
+    using dates::DayCount;
+    rule.kind =
+        object.choice("dayCount",
+                      {DayCount::act360, DayCount::act365Fixed, DayCount::actActIsda, DayCount::thirty360,
+                       DayCount::thirtyE360, DayCount::thirtyE360Isda, DayCount::act365L, DayCount::bus252},
+                      DayCount::act360);
+    rule.calendar = calendar;
+    return rule;
+}
+
+std::optional<discounting::Instrument> readInstrument(const Value& row, const CurveContext& context,
+                                                      const discounting::MoneyMarket& market) {
+    using discounting::InstrumentType;
+    using discounting::Payments;
+    Reader object{row};
+    const auto type =
+        object.required("type", "deposit, fra or overnight-swap")
+            .choice({InstrumentType::deposit, InstrumentType::fra, InstrumentType::overnightSwap});
+    if (!type) {
+        object.passOver();
+        return std::nullopt;
+    }
+    const auto rate = object.required("rate", "the rate quoted, a decimal number").number(anyNumber);
+    const dates::DayCountRule dayCount = readInstrumentDayCount(object, market.calendar);
+    switch (*type) {
+    case InstrumentType::deposit: {
+        const auto period = readPeriod(object.required("tenor", "ON, TN, SN or a tenor"), context);
+        return period && rate
+                   ? std::optional{discounting::deposit(context.asOf, market, *period, *rate, dayCount)}
+                   : std::nullopt;
+    }
+    case InstrumentType::fra: {
+        const auto start = readTenor(object.required("start", "the tenor after which it begins"), context);
+        const auto end = readTenor(object.required("end", "the tenor after which it ends"), context);
+        return start && end && rate ? std::optional{discounting::forwardRateAgreement(
+                                          context.asOf, market, *start, *end, *rate, dayCount)}
+                                    : std::nullopt;
+    }
+    case InstrumentType::overnightSwap:
+        break;
+    }
+    const auto tenor = readTenor(object.required("tenor", "the swap's tenor"), context);
+    const Payments payments = object.choice(
+        "payments",
+        {Payments::annual, Payments::semiannual, Payments::quarterly, Payments::monthly, Payments::atEnd},
+        Payments::annual);
+    return tenor && rate ? std::optional{discounting::overnightSwap(context.asOf, market, *tenor, *rate,
+                                                                    dayCount, payments)}
+                         : std::nullopt;
+}
+
+std::optional<discounting::Turn> readTurn(const Value& row) {
+    Reader object{row};
+    const auto from = object.required("from", "the first day of the jump").date();
+    const auto to = object.required("to", "the day after its last").date();
+    const auto spread = object.required("spread", "what the overnight rate is higher by").number(anyNumber);
+    return from && to && spread ? std::optional{discounting::Turn{*from, *to, *spread}} : std::nullopt;
+}
+
+CurvePtr readInstrumentCurve(Reader& object, const CurveContext& context) {
+    discounting::Instruments given;
+    using discounting::Interpolation;
+    given.interpolation = object.choice(
+        "interpolation", {Interpolation::logLinear, Interpolation::linearZero, Interpolation::monotoneCubic},
+        Interpolation::logLinear);
+    discounting::MoneyMarket market;
+    market.calendar = readCalendar(object, context.calendar);
+    market.spotLag = object.optional("spotLag", "2").integer(0, 30).value_or(2);
+    const Value items = object.required("items", "a list of instruments");
+    const bool areItems = items.rows([&](const Value& row, std::size_t /*index*/) {
+        if (auto item = readInstrument(row, context, market)) {
+            given.items.push_back(std::move(*item));
+        }
+    });
+    const Value turns = object.optional("turns");
+    turns.rows([&](const Value& row, std::size_t /*index*/) {
+        if (auto turn = readTurn(row)) {
+            given.turns.push_back(*turn);
+        }
+    });
+    if (!areItems || given.items.size() != items.json().size() ||
+        (turns.present() && (!turns.isList() || given.turns.size() != turns.json().size()))) {
+        return nullptr;
+    }
+    return made(object, discounting::instruments(context.asOf, std::move(given)));
 }
 
 // ---- random models
@@ -279,13 +411,22 @@ CurvePtr readByKind(const Value& value, const CurveContext& context) {
     Reader object{value};
     const auto kind =
         object
-            .required("kind", "what the curve is: pillars or random (or rate in its place, where it is flat)")
-            .choice({CurveKind::pillars, CurveKind::random});
+            .required("kind", "what the curve is: pillars, instruments or random (or rate in its "
+                              "place, where it is flat)")
+            .choice({CurveKind::pillars, CurveKind::instruments, CurveKind::random});
     if (!kind) {
         object.passOver();
         return nullptr;
     }
-    return *kind == CurveKind::pillars ? readPillarCurve(object, context) : readRandom(object, context);
+    switch (*kind) {
+    case CurveKind::pillars:
+        return readPillarCurve(object, context);
+    case CurveKind::instruments:
+        return readInstrumentCurve(object, context);
+    case CurveKind::random:
+        break;
+    }
+    return readRandom(object, context);
 }
 
 } // namespace

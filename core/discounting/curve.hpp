@@ -139,6 +139,16 @@ inline constexpr std::size_t mostRateLevels = 200;
 /// full.
 inline constexpr double largestLogFactor = 700.0;
 
+/// An instrument that a curve was made from: its quote, and what the curve makes of it.
+struct RepricedInstrument {
+    std::string at; ///< `/items/2`
+    std::string type;
+    Date start;
+    Date end;
+    double quote = 0.0;
+    double repriced = 0.0;
+};
+
 /// P(u): the value at `asOf` of one unit paid at u, the expectation under the pricing measure of the discount
 /// factor D(u). P(asOf) = 1. Immutable; every u asked for is from `asOf` on. In curves t(u) is ACT/365.FIXED
 /// years from `asOf`. ln P is never NaN, whatever the parameters. A factor outside e^±`largestLogFactor` is
@@ -167,6 +177,13 @@ class Curve {
     /// How the curve is made, in plain words for the working: "3 pillars, zero rates annual ACT/365.FIXED,
     /// log-linear", "Vasicek model, expected discount factor". No number of it is repeated.
     [[nodiscard]] virtual std::string convention() const = 0;
+
+    /// Of a curve made from instruments, each of them in the request's order; else empty.
+    [[nodiscard]] virtual std::vector<RepricedInstrument> instruments() const { return {}; }
+
+    /// Dates from which the forward rate may be another than the day before; none need be told where it
+    /// changes smoothly.
+    [[nodiscard]] virtual std::vector<Date> jumps() const { return {}; }
 
     /// What is known of D(u) where discounting is random; null where it is not.
     [[nodiscard]] virtual const RandomDiscount* random() const { return nullptr; }

@@ -48,6 +48,48 @@ struct Pillars {
 /// `rate-too-low` (a zero rate). In review: the notice `beyond-last-pillar`.
 [[nodiscard]] Outcome<CurvePtr> pillars(Date asOf, const Pillars& points);
 
+/// What the market quotes and a curve is made from.
+enum class InstrumentType {
+    deposit,       ///< P(start)/P(end) = 1 + r·τ
+    fra,           ///< a forward rate agreement: the same, from a later start
+    overnightSwap, ///< r·Σ τᵢ·P(tᵢ) = P(start) − P(end): fixed payments against overnight interest,
+                   ///< compounded
+};
+[[nodiscard]] std::optional<InstrumentType>
+parseInstrumentType(std::string_view name); ///< `deposit`, `fra`, `overnight-swap`
+[[nodiscard]] std::string_view nameOf(InstrumentType type);
+
+struct Instrument {
+    InstrumentType type = InstrumentType::deposit;
+    Date start;
+    Date end;
+    std::vector<Date> payments; ///< of a swap: rising, the last is `end`
+    double rate = 0.0;          ///< −0.99 to 10
+    dates::DayCountRule dayCount;
+};
+/// A jump of the overnight rate for some days, as over a year's end: it lowers ln P(u) by `spread` times the
+/// years of [from, to) that lie before u.
+struct Turn {
+    Date from; ///< not before `asOf`
+    Date to;
+    double spread = 0.0; ///< −10 to 10
+};
+struct Instruments {
+    Interpolation interpolation = Interpolation::logLinear;
+    std::vector<Instrument> items; ///< in any order
+    std::vector<Turn> turns;       ///< they add up where they overlap
+};
+inline constexpr std::size_t mostInstruments = 200;
+
+/// The curve with a pillar at every instrument's end, interpolated as `pillars` are, that gives every
+/// instrument its quote again to 1e-12 in its rate; the turns lie on top of it. All pillars are found
+/// together (discounting/calibration.hpp), since a monotone cubic hangs on its neighbours. Parameters:
+/// `/items/i/rate` (pillar) and `/turns/i/spread` (model), with the derivatives through the calibration.
+/// Refused, naming the instrument: `same-end`, `gap` (a forward rate agreement that begins after what the
+/// others tell), `rate-too-low`, `no-solution`; `not-rising`, `out-of-range`, `empty-list`, `too-many-rows`.
+/// In review the notice `beyond-last-pillar`.
+[[nodiscard]] Outcome<CurvePtr> instruments(Date asOf, Instruments given);
+
 /// Vasicek (1977): dr = κ(θ − r)dt + σ dW. ln D(u) is normal with mean −θt − (r0 − θ)B and variance
 /// V = σ²/κ²·(t − 2B + (1 − e^(−2κt))/(2κ)), σ²t³/3 where κ = 0; P = e^(mean + V/2). Parameters: `/r0`,
 /// `/meanReversion`, `/longRun`, `/volatility`.

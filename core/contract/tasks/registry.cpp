@@ -12,12 +12,13 @@ Calculation readSimulate(Reader& request);
 Calculation readFutures(Reader& request);
 Calculation readHedgeCover(Reader& request);
 Calculation readCompare(Reader& request);
+Calculation readCurveTask(Reader& request);
 
 std::span<const Task> tasks() {
     static constexpr std::array all{
         Task{"quote", readQuote},       Task{"tenors", readTenors},   Task{"path", readPath},
         Task{"simulate", readSimulate}, Task{"futures", readFutures}, Task{"hedge-cover", readHedgeCover},
-        Task{"compare", readCompare},
+        Task{"compare", readCompare},   Task{"curve", readCurveTask},
     };
     return all;
 }

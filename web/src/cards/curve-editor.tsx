@@ -6,6 +6,7 @@ import { modelNames } from '../model/funding-words';
 import { valueOf } from '../store/session';
 import { FitEditor } from './fit-editor';
 import { FlatEditor } from './flat-editor';
+import { InstrumentsEditor } from './instruments-editor';
 import { MeetingsEditor } from './meetings-editor';
 import { PillarsEditor } from './pillars-editor';
 import { SamplesEditor } from './samples-editor';
@@ -15,6 +16,7 @@ import { ShortRateEditor } from './short-rate-editor';
 const kinds: readonly { readonly value: CurveKind; readonly name: string }[] = [
   { value: 'flat', name: 'Flat' },
   { value: 'pillars', name: 'Curve' },
+  { value: 'instruments', name: 'Instruments' },
   { value: 'random', name: 'Random' },
 ];
 
@@ -87,6 +89,7 @@ export function CurveEditor({ label, path, at }: CurveEditorProps) {
       <Segmented label={`${label} is`} path={`${path}/kind`} options={kinds} />
       {curve.kind === 'flat' && <FlatEditor path={`${path}/flat`} at={at} />}
       {curve.kind === 'pillars' && <PillarsEditor path={`${path}/pillars`} at={at} />}
+      {curve.kind === 'instruments' && <InstrumentsEditor path={`${path}/instruments`} at={at} />}
       {curve.kind === 'random' && (
         <>
           <Choice

@@ -1,6 +1,7 @@
 import { Segmented } from '../fields/choice';
 import { typed } from '../store/session';
 import { FlatEditor } from './flat-editor';
+import { InstrumentsEditor } from './instruments-editor';
 import { PillarsEditor } from './pillars-editor';
 
 interface FitEditorProps {
@@ -29,11 +30,13 @@ export function FitEditor({ curvePath, fitPath, at, label = 'Fitted to', none }:
             ...(none === undefined ? [] : [{ value: '', name: none }]),
             { value: 'flat', name: 'The flat rate' },
             { value: 'pillars', name: 'The curve' },
+            { value: 'instruments', name: 'The instruments' },
           ]}
         />
       </div>
       {chosen === 'flat' && <FlatEditor path={`${curvePath}/flat`} at={at} />}
       {chosen === 'pillars' && <PillarsEditor path={`${curvePath}/pillars`} at={at} />}
+      {chosen === 'instruments' && <InstrumentsEditor path={`${curvePath}/instruments`} at={at} />}
     </>
   );
 }

@@ -1,13 +1,7 @@
 import { Choice } from '../fields/choice';
-import { RateConvention } from '../fields/conventions';
+import { interpolations, RateConvention } from '../fields/conventions';
 import { Rows } from '../fields/rows';
 import { typed } from '../store/session';
-
-const interpolations = [
-  { value: 'log-linear', name: 'flat forward rates (log-linear)' },
-  { value: 'linear-zero', name: 'linear zero rates' },
-  { value: 'monotone-cubic', name: 'smooth forward rates (monotone cubic)' },
-];
 
 const quotes = [
   { value: 'zero', name: 'zero rates' },

@@ -5,6 +5,7 @@ import type { ScenarioRow } from '../model/draft';
 import { emptyFixedCurve, nextId } from '../model/draft';
 import { edit, valueOf } from '../store/session';
 import { FlatEditor } from './flat-editor';
+import { InstrumentsEditor } from './instruments-editor';
 import { PillarsEditor } from './pillars-editor';
 
 /** Whole curves, each with its weight: the discount factor is their weighted mean. */
@@ -42,12 +43,13 @@ export function ScenariosEditor({ path, at }: { readonly path: string; readonly 
               options={[
                 { value: 'flat', name: 'A flat rate' },
                 { value: 'pillars', name: 'A curve' },
+                { value: 'instruments', name: 'Instruments' },
               ]}
             />
-            {row.curve.kind === 'flat' ? (
-              <FlatEditor path={`${place}/curve/flat`} at={`${pointer}/curve`} />
-            ) : (
-              <PillarsEditor path={`${place}/curve/pillars`} at={`${pointer}/curve`} />
+            {row.curve.kind === 'flat' && <FlatEditor path={`${place}/curve/flat`} at={`${pointer}/curve`} />}
+            {row.curve.kind === 'pillars' && <PillarsEditor path={`${place}/curve/pillars`} at={`${pointer}/curve`} />}
+            {row.curve.kind === 'instruments' && (
+              <InstrumentsEditor path={`${place}/curve/instruments`} at={`${pointer}/curve`} />
             )}
           </fieldset>
         );

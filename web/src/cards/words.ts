@@ -28,10 +28,20 @@ function points(curve: Pick<CurveDraft, 'pillars'>): string {
   return `${said(first.value, unit)} at ${first.at} to ${said(last.value, unit)} at ${last.at}`;
 }
 
+function instrumentWords({ rows, turns }: CurveDraft['instruments']): string {
+  const filled = rows.filter((row) => !isBlank(row));
+  const last = filled.at(-1);
+  if (last === undefined) return 'no instruments yet';
+  const count = filled.length === 1 ? '1 instrument' : `${filled.length} instruments`;
+  const turned = turns.filter((row) => !isBlank(row)).length;
+  return `${count} to ${last.tenor}${turned === 0 ? '' : turned === 1 ? ', 1 turn' : `, ${turned} turns`}`;
+}
+
 /** What a curve is, in a line. */
 export function curveWords(curve: CurveDraft): string {
   if (curve.kind === 'flat') return rateWords(curve.flat);
   if (curve.kind === 'pillars') return points(curve);
+  if (curve.kind === 'instruments') return instrumentWords(curve.instruments);
   switch (curve.model) {
     case 'vasicek':
       return `from ${said(curve.vasicek.r0, '%')} to ${said(curve.vasicek.longRun, '%')}, volatility ${said(curve.vasicek.volatility, '%')}`;

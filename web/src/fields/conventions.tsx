@@ -20,6 +20,12 @@ export const dayCounts: readonly Option[] = [
   'BUS/252',
 ].map((name) => ({ value: name, name }));
 
+export const interpolations: readonly Option[] = [
+  { value: 'log-linear', name: 'flat forward rates (log-linear)' },
+  { value: 'linear-zero', name: 'linear zero rates' },
+  { value: 'monotone-cubic', name: 'smooth forward rates (monotone cubic)' },
+];
+
 /** How a rate is compounded and how its days are counted. */
 export function RateConvention({ path, at = `/${path}` }: { readonly path: string; readonly at?: string }) {
   return (

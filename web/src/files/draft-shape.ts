@@ -1,5 +1,5 @@
 /** The shape of a draft as it is kept and saved. */
-import { emptyAnalysis, models } from '../model/draft';
+import { emptyAnalysis, emptyInstruments, fixedKinds, models } from '../model/draft';
 import type { Shape } from './shape';
 
 const text = 'text';
@@ -17,21 +17,32 @@ const pillars = members({
   interpolation: { oneOf: ['log-linear', 'linear-zero', 'monotone-cubic'] },
   rows: rows(texts('at', 'value')),
 });
-const fixedKind: Shape = { oneOf: ['flat', 'pillars'] };
-const fixedCurve = members({ kind: fixedKind, flat: rate, pillars });
+const instruments: Shape = {
+  added: members({
+    interpolation: { oneOf: ['log-linear', 'linear-zero', 'monotone-cubic'] },
+    ...texts('calendars', 'spotLag', 'dayCount', 'swapDayCount'),
+    payments: { oneOf: ['annual', 'semiannual', 'quarterly', 'monthly', 'at-end'] },
+    rows: rows(texts('type', 'tenor', 'rate')),
+    turns: rows(texts('from', 'to', 'spread')),
+  }),
+  before: emptyInstruments,
+};
+const fixedKind: Shape = { oneOf: fixedKinds };
+const fixedCurve = members({ kind: fixedKind, flat: rate, pillars, instruments });
 const shortRate = members(texts('r0', 'meanReversion', 'longRun', 'volatility'));
 const curve = members({
-  kind: { oneOf: ['flat', 'pillars', 'random'] },
+  kind: { oneOf: [...fixedKinds, 'random'] },
   model: { oneOf: models },
   flat: rate,
   pillars,
+  instruments,
   vasicek: shortRate,
   coxIngersollRoss: shortRate,
   hoLee: members({ volatility: text, fit: fixedKind }),
   hullWhite: members({ meanReversion: text, volatility: text, fit: fixedKind }),
   meetings: members({ overnight: text, rows: rows({ date: text, moves: rows(texts('by', 'probability')) }) }),
   scenarios: members({ rows: rows({ weight: text, curve: fixedCurve }) }),
-  samples: members({ text, against: { added: { oneOf: ['', 'flat', 'pillars'] }, before: '' } }),
+  samples: members({ text, against: { added: { oneOf: ['', ...fixedKinds] }, before: '' } }),
 });
 const funding = members({ curve, lendSpread: text, borrowSpread: text });
 const bothSides = members(texts('bid', 'offer'));

@@ -7,7 +7,9 @@ import { cutIntoCells, signOf, swapSigns } from './table';
 
 export interface Column {
   readonly name: string;
-  readonly holds: 'date' | 'date-or-tenor' | NumberKind;
+  readonly holds: 'date' | 'date-or-tenor' | 'text' | NumberKind;
+  /** What a text of this column looks like, to tell it from others. */
+  readonly like?: RegExp;
   /** What a heading may call it, lower case. */
   readonly called: readonly string[];
 }
@@ -25,6 +27,7 @@ function isNumber(cell: string, kind: NumberKind, sign: DecimalSign): boolean {
 function fits(cell: string, column: Column, style: DateStyle, sign: DecimalSign): boolean {
   if (column.holds === 'date') return isDate(cell, style);
   if (column.holds === 'date-or-tenor') return isDate(cell, style) || readTenor(cell) !== null;
+  if (column.holds === 'text') return column.like?.test(cell) ?? true;
   return isNumber(cell, column.holds, sign);
 }
 
@@ -118,6 +121,7 @@ export function readRows(
       const date = readDate(cell, dates);
       return date.ok ? dateToText(date.value) : cell;
     }
+    if (column.holds === 'text') return cell;
     return sign !== own && isNumber(cell, column.holds, sign) ? swapSigns(cell) : cell;
   }
 }

@@ -7,6 +7,7 @@ export type {
   Carry,
   Client,
   ComparisonResult,
+  CurveResult,
   FuturesResult,
   HedgeCoverResult,
   IsoDate,

@@ -11,7 +11,10 @@ import type {
   CurveDraft,
   DealDraft,
   FixedCurveDraft,
+  FixedKind,
   FundingDraft,
+  InstrumentRow,
+  InstrumentsDraft,
   MarketDraft,
   PillarsDraft,
   RateDraft,
@@ -124,8 +127,77 @@ function pillars(draft: PillarsDraft, at: string, read: Reader): object {
   };
 }
 
+/** The contract's name of what a person calls an instrument; what is not known goes as it stands, for the core to name. */
+function instrumentType(text: string): string | undefined {
+  const word = text.trim().toLowerCase();
+  if (word === '') return undefined;
+  if (/^(deposit|depo|depos|deposits|cash)$/.test(word)) return 'deposit';
+  if (/^(fra|fras|forward rate agreement)$/.test(word)) return 'fra';
+  if (/^(swap|swaps|ois|overnight[- ]swap|overnight[- ]index(ed)?[- ]swap)$/.test(word)) return 'overnight-swap';
+  return text.trim();
+}
+
+/** `3x6`, `3x6M`, `3M-6M`, `3M x 6M` as two tenors. */
+function twoTenors(text: string): readonly [string, string] | null {
+  const match = /^(\d+)\s*([DWMY]?)\s*[x×/–-]\s*(\d+)\s*([DWMY]?)$/i.exec(text.trim());
+  if (match === null) return null;
+  const [, start = '', startUnit = '', end = '', endUnit = ''] = match;
+  return [`${start}${(startUnit || endUnit || 'M').toUpperCase()}`, `${end}${(endUnit || 'M').toUpperCase()}`];
+}
+
+function instrument(row: InstrumentRow, draft: InstrumentsDraft, at: string, read: Reader): object | undefined {
+  const type = instrumentType(row.type);
+  const tenor = row.tenor.trim() === '' ? undefined : row.tenor.trim().toUpperCase();
+  const rate = read.number(row.rate, 'percent', `${at}/rate`);
+  if (type === 'fra') {
+    const both = twoTenors(row.tenor);
+    return members({ type, start: both?.[0] ?? tenor, end: both?.[1], rate, dayCount: draft.dayCount });
+  }
+  const swap = type === 'overnight-swap';
+  return members({
+    type,
+    tenor,
+    rate,
+    dayCount: swap ? draft.swapDayCount : draft.dayCount,
+    payments: swap ? draft.payments : undefined,
+  });
+}
+
+function instruments(draft: InstrumentsDraft, at: string, read: Reader): object {
+  const turns = sent(draft.turns, `${at}/turns`, (row, place) =>
+    members({
+      from: read.date(row.from, `${place}/from`),
+      to: read.date(row.to, `${place}/to`),
+      spread: read.number(row.spread, 'basis-points', `${place}/spread`),
+    }),
+  );
+  return {
+    kind: 'instruments',
+    interpolation: draft.interpolation,
+    ...members({
+      calendars: codes(draft.calendars),
+      spotLag: read.number(draft.spotLag, 'count', `${at}/spotLag`),
+      turns: listOrNothing(turns),
+    }),
+    items: sent(draft.rows, `${at}/items`, (row, place) => instrument(row, draft, place, read)),
+  };
+}
+
 function fixedCurve(draft: FixedCurveDraft, at: string, read: Reader): object {
-  return draft.kind === 'flat' ? neededRate(draft.flat, at, read) : pillars(draft.pillars, at, read);
+  switch (draft.kind) {
+    case 'flat':
+      return neededRate(draft.flat, at, read);
+    case 'pillars':
+      return pillars(draft.pillars, at, read);
+    case 'instruments':
+      return instruments(draft.instruments, at, read);
+  }
+}
+
+/** One of a draft's own fixed curves. */
+function ownFixedCurve(draft: CurveDraft, kind: FixedKind, at: string, read: Reader): object {
+  const { flat, pillars: points, instruments: quoted } = draft;
+  return fixedCurve({ kind, flat, pillars: points, instruments: quoted }, at, read);
 }
 
 function shortRate(model: string, draft: ShortRateDraft, volatility: NumberKind, at: string, read: Reader): object {
@@ -159,7 +231,7 @@ function randomCurve(draft: CurveDraft, at: string, read: Reader): object {
               ? read.number(draft.hullWhite.meanReversion, 'plain', `${at}/meanReversion`)
               : undefined,
           volatility: read.number(own.volatility, 'percent', `${at}/volatility`),
-          fit: fixedCurve({ kind: own.fit, flat: draft.flat, pillars: draft.pillars }, `${at}/fit`, read),
+          fit: ownFixedCurve(draft, own.fit, `${at}/fit`, read),
         }),
       };
     }
@@ -195,21 +267,14 @@ function randomCurve(draft: CurveDraft, at: string, read: Reader): object {
         ...(draft.samples.against === ''
           ? {}
           : {
-              against: fixedCurve(
-                { kind: draft.samples.against, flat: draft.flat, pillars: draft.pillars },
-                `${at}/against`,
-                read,
-              ),
+              against: ownFixedCurve(draft, draft.samples.against, `${at}/against`, read),
             }),
       };
   }
 }
 
 function curve(draft: CurveDraft, at: string, read: Reader): Curve {
-  const made =
-    draft.kind === 'random'
-      ? randomCurve(draft, at, read)
-      : fixedCurve({ kind: draft.kind, flat: draft.flat, pillars: draft.pillars }, at, read);
+  const made = draft.kind === 'random' ? randomCurve(draft, at, read) : ownFixedCurve(draft, draft.kind, at, read);
   return made as Curve;
 }
 
@@ -364,6 +429,7 @@ export function fundingChoices(deal: DealDraft, writing: Writing): readonly Fund
   const kinds: readonly Pick<CurveDraft, 'kind' | 'model'>[] = [
     { kind: 'flat', model: whole.model },
     { kind: 'pillars', model: whole.model },
+    { kind: 'instruments', model: whole.model },
     ...models.map((model) => ({ kind: 'random' as const, model })),
   ];
   const keyOf = ({ kind, model }: Pick<CurveDraft, 'kind' | 'model'>): string => (kind === 'random' ? model : kind);
@@ -382,6 +448,7 @@ export function fundingChoices(deal: DealDraft, writing: Writing): readonly Fund
 function isTyped(draft: CurveDraft): boolean {
   if (draft.kind === 'flat') return draft.flat.rate.trim() !== '';
   if (draft.kind === 'pillars') return !draft.pillars.rows.every((row) => isBlank(row));
+  if (draft.kind === 'instruments') return !draft.instruments.rows.every((row) => isBlank(row));
   const own = {
     vasicek: draft.vasicek.r0,
     'cox-ingersoll-ross': draft.coxIngersollRoss.r0,

@@ -23,9 +23,38 @@ export interface PillarsDraft {
   readonly interpolation: Interpolation;
   readonly rows: readonly PillarRow[];
 }
-/** A curve that is not random: one rate, or pillars. */
+export interface InstrumentRow {
+  readonly id: number;
+  /** `deposit`, `FRA`, `swap`, as the person writes it. */
+  readonly type: string;
+  /** `3M`, `ON`; of a forward rate agreement `3M-6M` or `3x6`. */
+  readonly tenor: string;
+  readonly rate: string;
+}
+export interface TurnRow {
+  readonly id: number;
+  readonly from: string;
+  readonly to: string;
+  readonly spread: string;
+}
+/** What a money market quotes, and a curve is made from. */
+export interface InstrumentsDraft {
+  readonly interpolation: Interpolation;
+  readonly calendars: string;
+  readonly spotLag: string;
+  /** Of deposits and forward rate agreements, and of swaps' fixed sides. */
+  readonly dayCount: string;
+  readonly swapDayCount: string;
+  readonly payments: 'annual' | 'semiannual' | 'quarterly' | 'monthly' | 'at-end';
+  readonly rows: readonly InstrumentRow[];
+  readonly turns: readonly TurnRow[];
+}
+export const fixedKinds = ['flat', 'pillars', 'instruments'] as const;
+export type FixedKind = (typeof fixedKinds)[number];
+/** A curve that is not random: one rate, points, or what instruments make of it. */
 export interface FixedCurveDraft {
-  readonly kind: 'flat' | 'pillars';
+  readonly instruments: InstrumentsDraft;
+  readonly kind: FixedKind;
   readonly flat: RateDraft;
   readonly pillars: PillarsDraft;
 }
@@ -60,21 +89,22 @@ export const models = [
   'samples',
 ] as const;
 export type ModelName = (typeof models)[number];
-export type CurveKind = 'flat' | 'pillars' | 'random';
+export type CurveKind = FixedKind | 'random';
 
 export interface CurveDraft {
   readonly kind: CurveKind;
   readonly model: ModelName;
   readonly flat: RateDraft;
   readonly pillars: PillarsDraft;
+  readonly instruments: InstrumentsDraft;
   readonly vasicek: ShortRateDraft;
   readonly coxIngersollRoss: ShortRateDraft;
   /** `fit` says which of this draft's own fixed curves the model is fitted to. */
-  readonly hoLee: { readonly volatility: string; readonly fit: 'flat' | 'pillars' };
+  readonly hoLee: { readonly volatility: string; readonly fit: FixedKind };
   readonly hullWhite: {
     readonly meanReversion: string;
     readonly volatility: string;
-    readonly fit: 'flat' | 'pillars';
+    readonly fit: FixedKind;
   };
   readonly meetings: { readonly overnight: string; readonly rows: readonly MeetingRow[] };
   readonly scenarios: { readonly rows: readonly ScenarioRow[] };
@@ -82,7 +112,7 @@ export interface CurveDraft {
   readonly samples: {
     readonly text: string;
     /** Which of this draft's own fixed curves they are held against; empty for none. */
-    readonly against: '' | 'flat' | 'pillars';
+    readonly against: '' | FixedKind;
   };
 }
 export interface FundingDraft {
@@ -201,13 +231,29 @@ export const emptyPillars: PillarsDraft = {
   interpolation: 'log-linear',
   rows: [],
 };
-export const emptyFixedCurve: FixedCurveDraft = { kind: 'flat', flat: emptyRate, pillars: emptyPillars };
+export const emptyInstruments: InstrumentsDraft = {
+  interpolation: 'log-linear',
+  calendars: '',
+  spotLag: '',
+  dayCount: 'ACT/360',
+  swapDayCount: 'ACT/360',
+  payments: 'annual',
+  rows: [],
+  turns: [],
+};
+export const emptyFixedCurve: FixedCurveDraft = {
+  kind: 'flat',
+  flat: emptyRate,
+  pillars: emptyPillars,
+  instruments: emptyInstruments,
+};
 const emptyShortRate: ShortRateDraft = { r0: '', meanReversion: '', longRun: '', volatility: '' };
 export const emptyCurve: CurveDraft = {
   kind: 'flat',
   model: 'vasicek',
   flat: emptyRate,
   pillars: emptyPillars,
+  instruments: emptyInstruments,
   vasicek: emptyShortRate,
   coxIngersollRoss: emptyShortRate,
   hoLee: { volatility: '', fit: 'flat' },

@@ -47,13 +47,42 @@ function pillars(from: Extract<Curve, { kind: 'pillars' }>, write: Writer): Fixe
 
 type FixedCurve = Exclude<Curve, { kind: 'random' }>;
 
-function fixed(from: FixedCurve, write: Writer): Pick<FixedCurveDraft, 'flat'> | Pick<FixedCurveDraft, 'pillars'> {
+const instrumentNames = { deposit: 'deposit', fra: 'FRA', 'overnight-swap': 'swap' } as const;
+
+/** The page has one day count for deposits and forward rate agreements and one for swaps: the first of each. */
+function instruments(from: Extract<Curve, { kind: 'instruments' }>, write: Writer): FixedCurveDraft['instruments'] {
+  const swap = from.items.find((item) => item.type === 'overnight-swap');
+  const other = from.items.find((item) => item.type !== 'overnight-swap');
+  return {
+    interpolation: from.interpolation ?? 'log-linear',
+    calendars: from.calendars === undefined ? '' : from.calendars.length === 0 ? 'weekends' : from.calendars.join(' '),
+    spotLag: write.number(from.spotLag, 'count'),
+    dayCount: other?.dayCount ?? 'ACT/360',
+    swapDayCount: swap?.dayCount ?? 'ACT/360',
+    payments: swap?.payments ?? 'annual',
+    rows: from.items.map((item, index) => ({
+      id: index + 1,
+      type: instrumentNames[item.type],
+      tenor: item.type === 'fra' ? `${item.start}-${item.end}` : item.tenor,
+      rate: write.number(item.rate, 'percent'),
+    })),
+    turns: (from.turns ?? []).map((turn, index) => ({
+      id: index + 1,
+      from: write.date(turn.from),
+      to: write.date(turn.to),
+      spread: write.number(turn.spread, 'basis-points'),
+    })),
+  };
+}
+
+function fixed(from: FixedCurve, write: Writer): Partial<Pick<FixedCurveDraft, 'flat' | 'pillars' | 'instruments'>> {
   if (typeof from === 'number' || !('kind' in from)) return { flat: rate(from, write) };
+  if (from.kind === 'instruments') return { instruments: instruments(from, write) };
   return { pillars: pillars(from, write) };
 }
 
 function kindOf(from: FixedCurve): FixedCurveDraft['kind'] {
-  return typeof from === 'number' || !('kind' in from) ? 'flat' : 'pillars';
+  return typeof from === 'number' || !('kind' in from) ? 'flat' : from.kind;
 }
 
 /** A scenario's curve; the page has no editor for a random one within a scenario, so its texts are left empty. */
@@ -63,7 +92,7 @@ function scenarioCurve(from: Curve, write: Writer): FixedCurveDraft {
 }
 
 function onto(draft: CurveDraft, from: Curve, write: Writer): CurveDraft {
-  if (typeof from === 'number' || !('kind' in from) || from.kind === 'pillars')
+  if (typeof from === 'number' || !('kind' in from) || from.kind !== 'random')
     return { ...draft, kind: kindOf(from), ...fixed(from, write) };
   const random = { ...draft, kind: 'random' as const, model: from.model };
   switch (from.model) {

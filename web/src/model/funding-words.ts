@@ -14,5 +14,6 @@ export const modelNames: Readonly<Record<ModelName, string>> = {
 export function fundingInWords(curve: CurveDraft): string {
   if (curve.kind === 'flat') return 'Flat rate';
   if (curve.kind === 'pillars') return 'Curve';
+  if (curve.kind === 'instruments') return 'Instruments';
   return modelNames[curve.model];
 }

@@ -26,6 +26,7 @@ const numberNames = new Set([
   'rate',
   'sell',
   'share',
+  'spread',
   'tick',
   'value',
   'volatility',

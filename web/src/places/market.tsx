@@ -7,6 +7,7 @@ import { addMarket, chooseMarket, removeMarket } from '../store/markets';
 import { chooseDecimal } from '../store/decimal-choice';
 import { format } from '../model/view';
 import { Cautions } from '../shell/cautions';
+import { CurveView } from './curve-view';
 
 function Markets() {
   const { deals, current } = draft.value;
@@ -93,6 +94,7 @@ export function MarketPlace() {
         <h2 class="sr-only">What the prices rest on</h2>
         <Cards alwaysOpen />
       </div>
+      <CurveView />
       <Cautions />
     </main>
   );

@@ -45,6 +45,11 @@ function modelWords(curve: Extract<Curve, { readonly kind: 'random' }>): string 
 export function curveWords(curve: Curve): string {
   if (typeof curve === 'number' || !('kind' in curve)) return rateWords(curve);
   if (curve.kind === 'random') return modelWords(curve);
+  if (curve.kind === 'instruments') {
+    const count = curve.items.length === 1 ? '1 instrument' : `${curve.items.length} instruments`;
+    const turns = curve.turns?.length ?? 0;
+    return `curve from ${count}${turns === 0 ? '' : turns === 1 ? ', 1 jump' : `, ${turns} jumps`}`;
+  }
   const first = curve.pillars[0];
   const last = curve.pillars.at(-1);
   if (!first || !last) return 'curve';

@@ -1,0 +1,145 @@
+// Task `curve`: one of a market's curves to be looked at, with what it was made from.
+#include "contract/market_reader.hpp"
+#include "contract/result_writer.hpp"
+#include "contract/task.hpp"
+#include "desk/curve_view.hpp"
+
+namespace forwright::contract {
+
+namespace {
+
+enum class Which { funding, discount, base };
+std::string_view nameOf(Which which) {
+    switch (which) {
+    case Which::funding:
+        return "funding";
+    case Which::discount:
+        return "discount";
+    case Which::base:
+        break;
+    }
+    return "base";
+}
+
+/// Where the curve stands in the market.
+std::string_view placeOf(Which which) {
+    switch (which) {
+    case Which::funding:
+        return "/funding/curve";
+    case Which::discount:
+        return "/discount";
+    case Which::base:
+        break;
+    }
+    return "/base/curve";
+}
+
+discounting::CurvePtr curveOf(const forward::Market& market, Which which) {
+    switch (which) {
+    case Which::funding:
+        return market.funding.curve;
+    case Which::discount:
+        return market.discount;
+    case Which::base:
+        break;
+    }
+    return market.base ? market.base->curve : nullptr;
+}
+
+void writeView(Writer& writer, const desk::CurveView& view, const std::string& at) {
+    writeList(writer, "points", view.points, [&](const desk::CurvePoint& point) {
+        writer.beginObject();
+        writer.member("date", point.date);
+        writer.member("years", point.years);
+        writer.member("factor", point.factor);
+        writer.member("zero", point.zero);
+        writer.member("forward", point.forward);
+        writer.endObject();
+    });
+    writeList(writer, "instruments", view.instruments, [&](const discounting::RepricedInstrument& item) {
+        writer.beginObject();
+        writer.member("at", at + item.at);
+        writer.member("type", item.type);
+        writer.member("start", item.start);
+        writer.member("end", item.end);
+        writer.member("quote", item.quote);
+        writer.member("repriced", item.repriced);
+        writer.member("difference", item.repriced - item.quote);
+        writer.endObject();
+    });
+}
+
+void answerCurve(const forward::Market& market, Which which, dates::Date until, Findings& findings,
+                 Writer& writer) {
+    const discounting::CurvePtr curve = curveOf(market, which);
+    const std::string at = market.at + std::string(placeOf(which));
+    const outcome::Outcome<desk::CurveView> view = desk::curveView(*curve, until);
+    if (!view) {
+        outcome::Faults faults;
+        outcome::append(faults, at, view.faults());
+        findings.faults(Place{}, faults);
+        return;
+    }
+    outcome::Notices notices;
+    outcome::append(notices, at, view.value().notices);
+    findings.notices(Place{}, notices);
+    writer.beginObject();
+    writer.member("which", nameOf(which));
+    writer.member("convention", curve->convention());
+    writer.member("random", curve->random() != nullptr);
+    writeView(writer, view.value(), at);
+    writer.endObject();
+}
+
+/// The last date to be looked at, after the market's own.
+std::optional<dates::Date> readUntil(const Value& value, dates::Date asOf) {
+    const auto at =
+        value.present() ? value.dateOrTenor() : std::optional<std::variant<dates::Date, dates::Tenor>>{};
+    if (value.present() && !at) {
+        return std::nullopt;
+    }
+    constexpr dates::Tenor fiveYears{5, dates::TenorUnit::year};
+    dates::Date until = dates::addTenor(asOf, fiveYears);
+    if (at) {
+        const auto* tenor = std::get_if<dates::Tenor>(&*at);
+        until = tenor != nullptr ? dates::addTenor(asOf, *tenor) : std::get<dates::Date>(*at);
+    }
+    if (until <= asOf) {
+        value.fault("not-after-as-of", "A curve is looked at to a day after the market's date, " +
+                                           dates::toIso(asOf) + "; this is " + dates::toIso(until) + ".");
+        return std::nullopt;
+    }
+    if (until >= dates::latest || dates::daysBetween(asOf, until) > 36'525) {
+        value.fault("too-far", "A curve is looked at to 100 years ahead, and to the day before " +
+                                   dates::toIso(dates::latest) + ".");
+        return std::nullopt;
+    }
+    return until;
+}
+
+} // namespace
+
+Calculation readCurveTask(Reader& request) {
+    const auto market = readMarket(request.required("market", "the market whose curve is looked at"));
+    const Value whichValue = request.optional("which", quotedText("funding"));
+    const auto which = whichValue.present()
+                           ? whichValue.choice({Which::funding, Which::discount, Which::base})
+                           : std::optional{Which::funding};
+    const Value untilValue = request.optional("until", quotedText("5Y"));
+    if (!market || !which) {
+        return {};
+    }
+    const auto until = readUntil(untilValue, market->asOf);
+    if (!curveOf(*market, *which)) {
+        whichValue.fault("not-applicable", "Only a currency pair has a base curve.");
+        return {};
+    }
+    if (!until) {
+        return {};
+    }
+    return [market = *market, which = *which, until = *until](Findings& findings, Writer& writer) {
+        answerCurve(market, which, until, findings, writer);
+    };
+}
+
+} // namespace forwright::contract
