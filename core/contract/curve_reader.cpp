@@ -407,8 +407,22 @@ CurvePtr readRandom(Reader& object, const CurveContext& context) {
     return nullptr;
 }
 
+/// Forwards imply a curve only where spot and funding stand beside them.
+bool isImplied(const Value& value) {
+    const auto kind = value.json().find("kind");
+    return kind && kind->isText() && kind->text() == "forwards";
+}
+
 CurvePtr readByKind(const Value& value, const CurveContext& context) {
     Reader object{value};
+    if (isImplied(value)) {
+        object.findings().fault(
+            object.at("kind"), "not-applicable",
+            "Quoted forwards imply the base curve of a currency pair, or the yield of another "
+            "asset, and stand there only.");
+        object.passOver();
+        return nullptr;
+    }
     const auto kind =
         object
             .required("kind", "what the curve is: pillars, instruments or random (or rate in its "

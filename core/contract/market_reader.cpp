@@ -2,7 +2,9 @@
 
 #include "contract/asset_reader.hpp"
 #include "contract/curve_reader.hpp"
+#include "contract/forwards_reader.hpp"
 #include "contract/rate_reader.hpp"
+#include "contract/two_way_reader.hpp"
 
 #include <chrono>
 #include <utility>
@@ -19,24 +21,6 @@ namespace {
 
 /// Where the request names no day that the market is of.
 constexpr Date beforeAllDates = dates::earliest - std::chrono::days{1};
-
-/// One number for both sides, or `bid` and `offer`.
-std::optional<TwoWay<double>> readTwoWay(const Value& value, const Range& range, std::string_view what) {
-    if (!value.isObject()) {
-        if (value.present() && !value.isNumber()) {
-            value.wrongType(std::string{what} +
-                            " (a number for both sides, or an object with bid and offer)");
-            return std::nullopt;
-        }
-        const std::optional<double> both = value.number(range);
-        return both ? std::optional{TwoWay<double>{*both, *both}} : std::nullopt;
-    }
-    Reader object{value};
-    const std::optional<double> bid = object.required("bid", std::string{what} + " on the bid").number(range);
-    const std::optional<double> offer =
-        object.required("offer", std::string{what} + " on the offer").number(range);
-    return bid && offer ? std::optional{TwoWay<double>{*bid, *offer}} : std::nullopt;
-}
 
 std::optional<TwoWay<double>> readSpot(const Value& value) {
     const std::optional<TwoWay<double>> spot = readTwoWay(value, positive, "a spot price");
@@ -124,7 +108,23 @@ std::optional<income::ProportionalDistribution> readProportional(const Value& va
     return income::ProportionalDistribution{value.place().pointer(), *ex, *fraction};
 }
 
-income::Income readIncome(const Value& value, const dates::BusinessCalendar& calendar) {
+/// Quoted forwards in place of a curve or rate, and where they stand.
+struct Quotes {
+    forward::QuotedForwards quoted;
+    std::string at;
+};
+using QuotesIfAny = std::optional<Quotes>;
+
+void takeQuotes(const Value& value, const CurveContext& context, const forward::Asset& asset,
+                QuotesIfAny& quotes) {
+    if (auto quoted = readForwards(value, context, asset)) {
+        quotes.emplace(Quotes{std::move(*quoted), value.place().pointer()});
+    }
+}
+
+income::Income readIncome(const Value& value, const CurveContext& context, const forward::Asset& asset,
+                          QuotesIfAny& quotes) {
+    const dates::BusinessCalendar& calendar = context.calendar;
     Reader object{value};
     income::Income income;
     object.optional("cash", "[]").rows([&](const Value& row, std::size_t /*index*/) {
@@ -137,7 +137,10 @@ income::Income readIncome(const Value& value, const dates::BusinessCalendar& cal
             income.proportional.push_back(std::move(*proportional));
         }
     });
-    if (const auto yield = readRate(object.optional("yield", "0"), calendar)) {
+    const Value yieldValue = object.optional("yield", "0");
+    if (quotesForwards(yieldValue)) {
+        takeQuotes(yieldValue, context, asset, quotes);
+    } else if (const auto yield = readRate(yieldValue, calendar)) {
         income.yield = *yield;
     }
     if (const auto share =
@@ -152,20 +155,42 @@ forward::HedgeCost readHedgeCost(const Value& value) {
     return {object.number("buy", costRange, 0.0), object.number("sell", costRange, 0.0)};
 }
 
+/// The base currency's funding; where its forwards are quoted they say all of it, spreads too.
+std::optional<forward::Funding> readBase(const Value& value, const CurveContext& context,
+                                         const forward::Asset& asset, QuotesIfAny& quotes) {
+    if (!value.has("curve")) {
+        return readFunding(value, context);
+    }
+    const auto curve = value.json().find("curve");
+    const Place place = value.place().member("curve");
+    const Value curveValue{curve, place, value.findings()};
+    if (!quotesForwards(curveValue)) {
+        return readFunding(value, context);
+    }
+    Reader object{value};
+    takeQuotes(object.required("curve", "the forwards quoted"), context, asset, quotes);
+    for (const std::string_view name : {"lendSpread", "borrowSpread"}) {
+        object.forbid(
+            name, "Forwards are quoted on both sides, so what lending and borrowing the base currency costs "
+                  "is in them.");
+    }
+    return std::nullopt;
+}
+
 /// What a currency pair has instead of income and fee, and nothing else has.
-void readPair(Reader& market, const CurveContext& context, Market& result) {
+void readPair(Reader& market, const CurveContext& context, Market& result, QuotesIfAny& quotes) {
     market.forbid("income",
                   "A currency pair has no income; what the base currency earns is its curve, in base.");
     market.forbid("lendingFee",
                   "A currency pair has no lending fee; what borrowing the base currency costs is in base.");
-    result.base = readFunding(
-        market.required("base", "the curve of the base currency, {curve, lendSpread, borrowSpread}"),
-        context);
+    result.base =
+        readBase(market.required("base", "the curve of the base currency, {curve, lendSpread, borrowSpread}"),
+                 context, result.asset, quotes);
 }
 
-void readHolding(Reader& market, const CurveContext& context, Market& result) {
+void readHolding(Reader& market, const CurveContext& context, Market& result, QuotesIfAny& quotes) {
     market.forbid("base", "Only a currency pair has a base curve; what this asset earns is its income.");
-    result.income = readIncome(market.optional("income"), context.calendar);
+    result.income = readIncome(market.optional("income"), context, result.asset, quotes);
     if (const auto fee = readTwoWayRate(market.optional("lendingFee", "0"), context.calendar)) {
         result.lendingFee = *fee;
     }
@@ -195,12 +220,13 @@ std::optional<Market> readMarket(const Value& value) {
     const Value discount = object.optional("discount", quotedText(market.at + "/funding/curve"));
     const CurvePtr discountCurve = readCurve(discount, context);
     market.hedgeCost = readHedgeCost(object.optional("hedgeCost"));
+    QuotesIfAny quotes;
     if (!kind) {
         passOverKind(object);
     } else if (*kind == AssetKind::currencyPair) {
-        readPair(object, context, market);
+        readPair(object, context, market, quotes);
     } else {
-        readHolding(object, context, market);
+        readHolding(object, context, market, quotes);
     }
     if (!object.findings().ok() || !spot || !funding) {
         return std::nullopt;
@@ -208,6 +234,9 @@ std::optional<Market> readMarket(const Value& value) {
     market.spot = *spot;
     market.funding = *funding;
     market.discount = discountCurve ? discountCurve : funding->curve;
+    if (quotes && !implyFrom(quotes->quoted, quotes->at, object.findings(), market)) {
+        return std::nullopt;
+    }
     return market;
 }
 

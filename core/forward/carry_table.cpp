@@ -19,14 +19,16 @@ bool separates(const discounting::Rate& rate) {
 } // namespace
 
 bool CarryTable::separates(const Market& market) {
-    return forward::separates(market.income.yield) && forward::separates(market.lendingFee.bid) &&
-           forward::separates(market.lendingFee.offer);
+    return (market.income.yieldCurves || forward::separates(market.income.yield)) &&
+           forward::separates(market.lendingFee.bid) && forward::separates(market.lendingFee.offer);
 }
 
 CarryTable::CarryTable(const Market& market, const Schedule& longest, Side side)
     : holdFrom_(longest.holdFrom), spot_(longest.spot), yield_(market.income.yield),
+      yieldCurve_(market.income.yieldCurves ? market.income.yieldCurves->on(side) : nullptr),
       fee_(feeOn(market.lendingFee, side)),
-      grows_(yield_.value != 0.0 || fee_.value != 0.0), standings_{{longest.holdFrom}} {
+      grows_(yieldCurve_ != nullptr || yield_.value != 0.0 || fee_.value != 0.0), standings_{
+                                                                                      {longest.holdFrom}} {
     const SideInputs inputs = inputsOf(market, longest, side);
     funding_ = inputs.funding;
     base_ = inputs.base;
@@ -58,9 +60,13 @@ CarryTable::CarryTable(const Market& market, const Schedule& longest, Side side)
 }
 
 double CarryTable::growth(Date u) const {
-    return grows_ ? numeric::exp(discounting::logFactor(yield_, holdFrom_, u) +
-                                 discounting::logFactor(fee_, holdFrom_, u))
-                  : 1.0;
+    if (!grows_) {
+        return 1.0;
+    }
+    const double yielded = yieldCurve_ == nullptr
+                               ? discounting::logFactor(yield_, holdFrom_, u)
+                               : yieldCurve_->logFactor(u) - yieldCurve_->logFactor(holdFrom_);
+    return numeric::exp(yielded + discounting::logFactor(fee_, holdFrom_, u));
 }
 
 double CarryTable::forward(Date maturity, Date settlement) const {

@@ -37,6 +37,7 @@ class CarryTable {
     Date holdFrom_;
     Date spot_;
     discounting::Rate yield_;
+    CurvePtr yieldCurve_; ///< in its place, where there is one
     discounting::Rate fee_;
     bool grows_ = false; ///< yield or fee is not 0
     CurvePtr funding_;

@@ -47,12 +47,21 @@ struct Funding {
     CurvePtr curve;
     double lendSpread = 0.0;   ///< normally ≤ 0
     double borrowSpread = 0.0; ///< normally ≥ 0
+    /// In place of `curve` with its spreads, where quoted forwards imply one curve a side.
+    std::optional<TwoWay<CurvePtr>> sides{};
 };
 
 /// Duty, tax and commission on dealing the hedge today, fractions of spot.
 struct HedgeCost {
     double buy = 0.0;
     double sell = 0.0;
+};
+
+/// A forward that the market quotes, one of those that imply a curve: to be held against what is made of it.
+struct QuotedForward {
+    std::string at;       ///< where it stands in the request
+    Date date;            ///< maturity
+    TwoWay<double> quote; ///< outright
 };
 
 /// Everything a forward on one asset is priced from, as of one day. A currency pair has `base` and neither
@@ -70,6 +79,8 @@ struct Market {
     TwoWay<discounting::Rate> lendingFee;
     HedgeCost hedgeCost;
     std::optional<Funding> base;
+    std::vector<QuotedForward> quotedForwards; ///< what the base curve or the yield is implied by; else empty
+    CurvePtr against; ///< what interest-rate markets say of the base currency, beside that; may be null
 };
 
 /// Whether a forward on the asset is dealt by its delivery date (pairs, commodities) rather than its dealing

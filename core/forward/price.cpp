@@ -50,6 +50,9 @@ CurvePtr fundingOn(const Funding& funding, Side side) {
 
 /// The base currency is the asset: who sells forward lends it, who buys forward borrows it.
 CurvePtr baseOn(const Funding& base, Side side) {
+    if (base.sides && side != Side::fair) {
+        return side == Side::bid ? base.sides->bid : base.sides->offer;
+    }
     switch (side) {
     case Side::bid:
         return discounting::withSpread(base.curve, base.borrowSpread);
@@ -349,7 +352,11 @@ outcome::Review review(const Market& market, const Schedule& schedule) {
             review.faults.push_back(outcome::under(market.at + at, std::move(*fault)));
         }
     };
-    addRate("/income/yield", market.income.yield);
+    if (market.income.yieldCurves) {
+        add(market.at + "/income/yield", market.income.yieldCurves->fair->review(schedule.maturity));
+    } else {
+        addRate("/income/yield", market.income.yield);
+    }
     // Both sides are of one convention and a single rate stands for both: one fault names the fee as a whole.
     const bool bidIsLower = market.lendingFee.bid.value < market.lendingFee.offer.value;
     addRate("/lendingFee", bidIsLower ? market.lendingFee.bid : market.lendingFee.offer);

@@ -75,6 +75,10 @@ std::optional<double> toDay(const Market& market, const Schedule& schedule, cons
     if (market.base) {
         tomorrow.base->curve = discounting::heldByTime(market.base->curve, tomorrow.asOf);
     }
+    if (market.income.yieldCurves) {
+        tomorrow.income.yieldCurves->fair =
+            discounting::heldByTime(market.income.yieldCurves->fair, tomorrow.asOf);
+    }
     const outcome::Outcome<Schedule> then =
         forward::schedule(tomorrow, {schedule.maturity, std::nullopt}, "");
     if (!then || !review(tomorrow, then.value()).faults.empty()) {

@@ -18,6 +18,18 @@ double Estimate::on(Side side) const {
     return amount;
 }
 
+const discounting::CurvePtr& YieldCurves::on(Side side) const {
+    switch (side) {
+    case Side::bid:
+        return bid;
+    case Side::offer:
+        return offer;
+    case Side::fair:
+        break;
+    }
+    return fair;
+}
+
 double Income::passThroughOn(Side side) const {
     switch (side) {
     case Side::bid:
@@ -35,7 +47,8 @@ bool counts(Date ex, Date holdFrom, Date maturity) {
 }
 
 UnitsToHold::UnitsToHold(const Income& income, const Rate& fee, Side side, Date holdFrom, Date maturity)
-    : yield_(income.yield), fee_(fee), maturity_(maturity) {
+    : yield_(income.yield), yieldCurve_(income.yieldCurves ? income.yieldCurves->on(side) : nullptr),
+      fee_(fee), maturity_(maturity) {
     const double passed = income.passThroughOn(side);
     for (const ProportionalDistribution& row : income.proportional) {
         if (counts(row.ex, holdFrom, maturity)) {
@@ -64,7 +77,9 @@ double UnitsToHold::after(Date u) const {
 }
 
 double UnitsToHold::yieldFactor(Date u) const {
-    return numeric::exp(discounting::logFactor(yield_, u, maturity_));
+    return numeric::exp(yieldCurve_ == nullptr
+                            ? discounting::logFactor(yield_, u, maturity_)
+                            : yieldCurve_->logFactor(maturity_) - yieldCurve_->logFactor(u));
 }
 
 double UnitsToHold::feeFactor(Date u) const {
@@ -72,7 +87,8 @@ double UnitsToHold::feeFactor(Date u) const {
 }
 
 double UnitsToHold::yieldSlope(Date u) const {
-    return discounting::logFactorSlope(yield_, u, maturity_);
+    return yieldCurve_ == nullptr ? discounting::logFactorSlope(yield_, u, maturity_)
+                                  : -dates::years(u, maturity_);
 }
 
 double UnitsToHold::feeSlope(Date u) const {

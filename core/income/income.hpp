@@ -1,8 +1,10 @@
 #pragma once
 
 #include "dates/date.hpp"
+#include "discounting/curve.hpp"
 #include "discounting/rate.hpp"
 
+#include <optional>
 #include <string>
 #include <vector>
 
@@ -47,10 +49,17 @@ struct ProportionalDistribution {
     Estimate fraction;
 };
 
+/// A yield that differs by date, one curve a side: from u to T it comes to P_y(T)/P_y(u).
+struct YieldCurves {
+    discounting::CurvePtr fair, bid, offer;
+    [[nodiscard]] const discounting::CurvePtr& on(Side side) const;
+};
+
 struct Income {
     std::vector<CashDistribution> cash;                 ///< as the request has them, in any order
     std::vector<ProportionalDistribution> proportional; ///< likewise
     Rate yield;                                         ///< paid in the asset all the time
+    std::optional<YieldCurves> yieldCurves; ///< in its place, where it is implied by quoted forwards
     TwoWay<double> passThrough{
         1.0, 1.0}; ///< share of a distribution that reaches (offer) or is owed by (bid) the hedge
     /// The share for a side; the fair price takes the mean of the two.
@@ -80,7 +89,8 @@ class UnitsToHold {
     [[nodiscard]] double after(Date u) const;
     /// ∏ (1 − δ)/(1 − (1−g)δ) over u < ex ≤ T alone.
     [[nodiscard]] double proportionalAfter(Date u) const;
-    /// Y(u, T) and L(u, T) alone, and the derivatives of their logarithms by the rate.
+    /// Y(u, T) and L(u, T) alone, and the derivatives of their logarithms by the rate (of a yield curve: by a
+    /// move of all its continuous zero rates alike).
     [[nodiscard]] double yieldFactor(Date u) const;
     [[nodiscard]] double feeFactor(Date u) const;
     [[nodiscard]] double yieldSlope(Date u) const;
@@ -94,6 +104,7 @@ class UnitsToHold {
     std::vector<double>
         productFrom_; ///< productFrom_[i]: ∏ kept over reinvestments i, i+1, …; one more entry, 1
     Rate yield_;
+    discounting::CurvePtr yieldCurve_; ///< in its place, where there is one
     Rate fee_;
     Date maturity_;
 };

@@ -3,18 +3,21 @@
 #include "contract/result_writer.hpp"
 #include "contract/task.hpp"
 #include "desk/curve_view.hpp"
+#include "desk/quoted_forwards.hpp"
 
 namespace forwright::contract {
 
 namespace {
 
-enum class Which { funding, discount, base };
+enum class Which { funding, discount, base, yield };
 std::string_view nameOf(Which which) {
     switch (which) {
     case Which::funding:
         return "funding";
     case Which::discount:
         return "discount";
+    case Which::yield:
+        return "yield";
     case Which::base:
         break;
     }
@@ -28,6 +31,8 @@ std::string_view placeOf(Which which) {
         return "/funding/curve";
     case Which::discount:
         return "/discount";
+    case Which::yield:
+        return "/income/yield";
     case Which::base:
         break;
     }
@@ -40,6 +45,8 @@ discounting::CurvePtr curveOf(const forward::Market& market, Which which) {
         return market.funding.curve;
     case Which::discount:
         return market.discount;
+    case Which::yield:
+        return market.income.yieldCurves ? market.income.yieldCurves->fair : nullptr;
     case Which::base:
         break;
     }
@@ -69,6 +76,21 @@ void writeView(Writer& writer, const desk::CurveView& view, const std::string& a
     });
 }
 
+void writeQuoted(Writer& writer, const std::vector<desk::RepricedForward>& rows) {
+    writeList(writer, "rows", rows, [&](const desk::RepricedForward& row) {
+        writer.beginObject();
+        writer.member("at", row.at);
+        writer.member("date", row.date);
+        writeTwoWay(writer, "quote", row.quote.bid, row.quote.offer);
+        writeTwoWay(writer, "repriced", row.repriced.bid, row.repriced.offer);
+        writer.member("fair", row.fair);
+        writer.member("impliedZero", row.impliedZero);
+        writer.member("againstZero", row.againstZero);
+        writer.member("difference", row.difference);
+        writer.endObject();
+    });
+}
+
 void answerCurve(const forward::Market& market, Which which, dates::Date until, Findings& findings,
                  Writer& writer) {
     const discounting::CurvePtr curve = curveOf(market, which);
@@ -88,6 +110,16 @@ void answerCurve(const forward::Market& market, Which which, dates::Date until, 
     writer.member("convention", curve->convention());
     writer.member("random", curve->random() != nullptr);
     writeView(writer, view.value(), at);
+    if (which == Which::base || which == Which::yield) {
+        const outcome::Outcome<std::vector<desk::RepricedForward>> rows = desk::repricedForwards(market);
+        if (!rows) {
+            findings.faults(Place{}, rows.faults());
+            return;
+        }
+        writeQuoted(writer, rows.value());
+    } else {
+        writeQuoted(writer, {});
+    }
     writer.endObject();
 }
 
@@ -123,7 +155,7 @@ Calculation readCurveTask(Reader& request) {
     const auto market = readMarket(request.required("market", "the market whose curve is looked at"));
     const Value whichValue = request.optional("which", quotedText("funding"));
     const auto which = whichValue.present()
-                           ? whichValue.choice({Which::funding, Which::discount, Which::base})
+                           ? whichValue.choice({Which::funding, Which::discount, Which::base, Which::yield})
                            : std::optional{Which::funding};
     const Value untilValue = request.optional("until", quotedText("5Y"));
     if (!market || !which) {
@@ -131,7 +163,10 @@ Calculation readCurveTask(Reader& request) {
     }
     const auto until = readUntil(untilValue, market->asOf);
     if (!curveOf(*market, *which)) {
-        whichValue.fault("not-applicable", "Only a currency pair has a base curve.");
+        whichValue.fault(
+            "not-applicable",
+            "Only a currency pair has a base curve, and only where listed contracts are quoted has an "
+            "asset a curve of its yield.");
         return {};
     }
     if (!until) {

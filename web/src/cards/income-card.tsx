@@ -1,9 +1,12 @@
+import { Segmented } from '../fields/choice';
 import { RateConvention } from '../fields/conventions';
 import { Field } from '../fields/field';
 import { Rows, type RowColumn } from '../fields/rows';
 import { isBlank } from '../model/draft';
 import { market } from '../store/session';
+import { forwardsWords } from './base-card';
 import { Card, type CardView } from './card';
+import { ForwardsEditor } from './forwards-editor';
 import { said, twoSides } from './words';
 
 const ex: RowColumn = {
@@ -51,17 +54,22 @@ export function IncomeCard({ alwaysOpen }: CardView) {
   const { income, asset } = market.value;
   const cash = income.cash.filter((row) => !isBlank(row));
   const proportional = income.proportional.filter((row) => !isBlank(row));
+  const implied = income.yieldIs === 'contracts';
   const amounts = cash.map((row) => `${row.amount.trim()} on ${row.ex.trim()}`);
   const value =
     cash.length + proportional.length > 0
       ? counted(cash.length + proportional.length, 'row', 'rows')
-      : income.yield.rate.trim() === ''
-        ? 'none'
-        : `yield ${said(income.yield.rate, '%')}`;
+      : implied
+        ? 'listed contracts'
+        : income.yield.rate.trim() === ''
+          ? 'none'
+          : `yield ${said(income.yield.rate, '%')}`;
   const summary = [
     cash.length > 0 && `${amounts.slice(0, 2).join(', ')}${cash.length > 2 ? ` and ${cash.length - 2} more` : ''}`,
     proportional.length > 0 && `${counted(proportional.length, 'share', 'shares')} of price`,
-    income.yield.rate.trim() !== '' && `yield ${said(income.yield.rate, '%')}`,
+    implied
+      ? `yield from contracts, ${forwardsWords(income.contracts)}`
+      : income.yield.rate.trim() !== '' && `yield ${said(income.yield.rate, '%')}`,
   ].filter(Boolean);
   const { passThrough } = income;
   return (
@@ -89,9 +97,23 @@ export function IncomeCard({ alwaysOpen }: CardView) {
         at="/market/income/proportional"
         columns={proportionalColumns}
       />
-      <h4>As a steady yield</h4>
-      <Field label="Yield" path="market/income/yield/rate" kind="percent" unit="% a year" />
-      {income.yield.rate.trim() !== '' && <RateConvention path="market/income/yield" />}
+      <h4>As a yield</h4>
+      <Segmented
+        label="The yield is"
+        path="market/income/yieldIs"
+        options={[
+          { value: 'rate', name: 'Steady' },
+          { value: 'contracts', name: 'From listed contracts' },
+        ]}
+      />
+      {implied ? (
+        <ForwardsEditor path="market/income/contracts" at="/market/income/yield" ofPair={false} />
+      ) : (
+        <>
+          <Field label="Yield" path="market/income/yield/rate" kind="percent" unit="% a year" />
+          {income.yield.rate.trim() !== '' && <RateConvention path="market/income/yield" />}
+        </>
+      )}
       <h4>Passed through to the hedge</h4>
       <div class="field-row">
         <Field label="Bid: owed when short" path="market/income/passThrough/bid" kind="percent" unit="%" />

@@ -1,5 +1,5 @@
 /** The shape of a draft as it is kept and saved. */
-import { emptyAnalysis, emptyInstruments, fixedKinds, models } from '../model/draft';
+import { emptyAnalysis, emptyForwards, emptyInstruments, fixedKinds, models } from '../model/draft';
 import type { Shape } from './shape';
 
 const text = 'text';
@@ -47,6 +47,17 @@ const curve = members({
 const funding = members({ curve, lendSpread: text, borrowSpread: text });
 const bothSides = members(texts('bid', 'offer'));
 
+const forwards: Shape = {
+  added: members({
+    quoted: { oneOf: ['points', 'outright'] },
+    scale: text,
+    interpolation: { oneOf: ['log-linear', 'linear-zero', 'monotone-cubic'] },
+    against: { oneOf: ['', ...fixedKinds] },
+    rows: rows(texts('at', 'bid', 'offer')),
+  }),
+  before: emptyForwards,
+};
+
 const market = members({
   asOf: text,
   asset: members({
@@ -60,12 +71,16 @@ const market = members({
   income: members({
     cash: rows(texts('ex', 'pay', 'amount', 'low', 'high')),
     proportional: rows(texts('ex', 'fraction', 'low', 'high')),
+    yieldIs: { added: { oneOf: ['rate', 'contracts'] }, before: 'rate' },
     yield: rate,
+    contracts: forwards,
     passThrough: bothSides,
   }),
   fee: members({ ...texts('bid', 'offer'), ...convention }),
   hedgeCost: members(texts('buy', 'sell')),
+  baseIs: { added: { oneOf: ['curve', 'forwards'] }, before: 'curve' },
   base: funding,
+  baseForwards: forwards,
 });
 
 const inquiry = members({

@@ -17,6 +17,7 @@ import type {
   InstrumentsDraft,
   MarketDraft,
   PillarsDraft,
+  QuotedForwardsDraft,
   RateDraft,
   ShortRateDraft,
 } from './draft';
@@ -288,6 +289,30 @@ function funding(draft: FundingDraft, at: string, read: Reader): Funding {
   };
 }
 
+/** Forwards that the market quotes, in place of a curve or a yield. */
+function forwards(draft: QuotedForwardsDraft, own: CurveDraft | null, at: string, read: Reader): object {
+  const kind = draft.quoted === 'points' && own !== null ? 'plain' : 'price';
+  return {
+    kind: 'forwards',
+    interpolation: draft.interpolation,
+    ...(own === null
+      ? {}
+      : members({
+          quoted: draft.quoted,
+          scale: draft.quoted === 'points' ? read.number(draft.scale, 'plain', `${at}/scale`) : undefined,
+          against: draft.against === '' ? undefined : ownFixedCurve(own, draft.against, `${at}/against`, read),
+        })),
+    rows: sent(draft.rows, `${at}/rows`, (row, place) => ({
+      ...members({ at: read.maturity(row.at, `${place}/at`) }),
+      value:
+        members({
+          bid: read.number(row.bid, kind, `${place}/value/bid`),
+          offer: read.number(row.offer, kind, `${place}/value/offer`),
+        }) ?? {},
+    })),
+  };
+}
+
 /** Codes apart by spaces or commas; `weekends` is the empty list. */
 function codes(text: string): readonly string[] | undefined {
   const words = text.split(/[\s,;]+/).filter((word) => word !== '');
@@ -349,7 +374,10 @@ function income(draft: MarketDraft['income'], read: Reader): object | undefined 
   return members({
     cash: listOrNothing(cash),
     proportional: listOrNothing(proportional),
-    yield: rate(draft.yield, `${at}/yield`, read),
+    yield:
+      draft.yieldIs === 'contracts'
+        ? forwards(draft.contracts, null, `${at}/yield`, read)
+        : rate(draft.yield, `${at}/yield`, read),
     passThrough: members({
       bid: read.number(draft.passThrough.bid, 'percent', `${at}/passThrough/bid`),
       offer: read.number(draft.passThrough.offer, 'percent', `${at}/passThrough/offer`),
@@ -361,6 +389,11 @@ function lendingFee(draft: MarketDraft['fee'], read: Reader): object | undefined
   const side = (text: string, name: string): object | undefined =>
     rate({ rate: text, compounding: draft.compounding, dayCount: draft.dayCount }, `/market/lendingFee/${name}`, read);
   return members({ bid: side(draft.bid, 'bid'), offer: side(draft.offer, 'offer') });
+}
+
+function base(draft: MarketDraft, read: Reader): object {
+  if (draft.baseIs === 'curve') return funding(draft.base, '/market/base', read);
+  return { curve: forwards(draft.baseForwards, draft.base.curve, '/market/base/curve', read) };
 }
 
 function market(draft: MarketDraft, read: Reader): Market {
@@ -382,7 +415,7 @@ function market(draft: MarketDraft, read: Reader): Market {
         buy: read.number(draft.hedgeCost.buy, 'percent', '/market/hedgeCost/buy'),
         sell: read.number(draft.hedgeCost.sell, 'percent', '/market/hedgeCost/sell'),
       }),
-      base: pair ? funding(draft.base, '/market/base', read) : undefined,
+      base: pair ? base(draft, read) : undefined,
     }),
   };
   return made as unknown as Market;

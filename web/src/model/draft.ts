@@ -120,6 +120,22 @@ export interface FundingDraft {
   readonly lendSpread: string;
   readonly borrowSpread: string;
 }
+export interface QuotedRow {
+  readonly id: number;
+  readonly at: string;
+  readonly bid: string;
+  readonly offer: string;
+}
+/** Forwards that the market quotes, from which what the asset earns is implied. */
+export interface QuotedForwardsDraft {
+  /** Of a pair; another asset's are listed contracts, quoted outright. */
+  readonly quoted: 'points' | 'outright';
+  readonly scale: string;
+  readonly interpolation: Interpolation;
+  /** Which of the base currency's own fixed curves it is held against; empty for none. */
+  readonly against: '' | FixedKind;
+  readonly rows: readonly QuotedRow[];
+}
 export interface CashRow {
   readonly id: number;
   readonly ex: string;
@@ -163,7 +179,10 @@ export interface MarketDraft {
   readonly income: {
     readonly cash: readonly CashRow[];
     readonly proportional: readonly ProportionalRow[];
+    /** Whether the yield is typed, or implied by listed contracts. */
+    readonly yieldIs: 'rate' | 'contracts';
     readonly yield: RateDraft;
+    readonly contracts: QuotedForwardsDraft;
     readonly passThrough: { readonly bid: string; readonly offer: string };
   };
   readonly fee: {
@@ -173,7 +192,10 @@ export interface MarketDraft {
     readonly dayCount: string;
   };
   readonly hedgeCost: { readonly buy: string; readonly sell: string };
+  /** Whether the base currency has a curve, or one implied by its forwards. */
+  readonly baseIs: 'curve' | 'forwards';
   readonly base: FundingDraft;
+  readonly baseForwards: QuotedForwardsDraft;
 }
 export interface InquiryDraft {
   readonly client: Client;
@@ -262,6 +284,13 @@ export const emptyCurve: CurveDraft = {
   scenarios: { rows: [] },
   samples: { text: '', against: '' },
 };
+export const emptyForwards: QuotedForwardsDraft = {
+  quoted: 'points',
+  scale: '',
+  interpolation: 'log-linear',
+  against: '',
+  rows: [],
+};
 export const emptyFunding: FundingDraft = { curve: emptyCurve, lendSpread: '', borrowSpread: '' };
 export const emptyDeal: DealDraft = {
   inquiry: {
@@ -292,12 +321,16 @@ export const emptyDeal: DealDraft = {
     income: {
       cash: [],
       proportional: [],
+      yieldIs: 'rate',
       yield: emptyRate,
+      contracts: emptyForwards,
       passThrough: { bid: '', offer: '' },
     },
     fee: { bid: '', offer: '', compounding: 'continuous', dayCount: 'ACT/365.FIXED' },
     hedgeCost: { buy: '', sell: '' },
+    baseIs: 'curve',
     base: emptyFunding,
+    baseForwards: emptyForwards,
   },
   madeAt: '',
   validUntil: '',

@@ -3,7 +3,15 @@ import { fromNumber, grouped, toText, type DecimalSign } from '../input/decimal'
 import { placesOf, type NumberKind } from '../input/quantities';
 import { dateToText } from '../input/step';
 import type { Curve, Funding, Market, QuoteRequest, Rate } from './request';
-import type { CurveDraft, DealDraft, FixedCurveDraft, FundingDraft, MarketDraft, RateDraft } from './draft';
+import type {
+  CurveDraft,
+  DealDraft,
+  FixedCurveDraft,
+  FundingDraft,
+  MarketDraft,
+  QuotedForwardsDraft,
+  RateDraft,
+} from './draft';
 import { emptyCurve, emptyDeal, emptyFixedCurve, emptyFunding } from './draft';
 import { marginKind } from './build';
 
@@ -174,6 +182,48 @@ function both<T>(value: T | { readonly bid: T; readonly offer: T }): { readonly 
   return typeof value === 'object' && value !== null && 'bid' in value ? value : { bid: value, offer: value };
 }
 
+type Forwards = Extract<NonNullable<NonNullable<Market['income']>['yield']>, { kind: 'forwards' }>;
+type PairForwards = Extract<NonNullable<Market['base']>['curve'], { kind: 'forwards' }>;
+
+function isForwards<T>(value: T): value is Extract<T, { readonly kind: 'forwards' }> {
+  return typeof value === 'object' && value !== null && 'kind' in value && value.kind === 'forwards';
+}
+
+export type QuotedForwards = Forwards | PairForwards;
+
+function forwards(from: QuotedForwards, write: Writer): QuotedForwardsDraft {
+  const pair = 'quoted' in from ? from : null;
+  const kind = pair?.quoted === 'points' ? 'plain' : 'price';
+  return {
+    quoted: pair?.quoted ?? 'outright',
+    scale: write.number(pair?.scale, 'plain'),
+    interpolation: from.interpolation ?? 'log-linear',
+    against: pair?.against === undefined ? '' : kindOf(pair.against as FixedCurve),
+    rows: from.rows.map((row, index) => {
+      const { bid, offer } = both<number>(row.value);
+      return { id: index + 1, at: write.date(row.at), bid: write.number(bid, kind), offer: write.number(offer, kind) };
+    }),
+  };
+}
+
+/** The base currency's curve, or its forwards and what they are held against. */
+function base(from: Market['base'], write: Writer): Pick<MarketDraft, 'baseIs' | 'base' | 'baseForwards'> {
+  const { market } = emptyDeal;
+  const curve = from?.curve;
+  if (!isForwards(curve))
+    return {
+      baseIs: 'curve',
+      base: funding(from as Funding | undefined, emptyFunding, write),
+      baseForwards: market.baseForwards,
+    };
+  const against = curve.against === undefined ? {} : fixed(curve.against as FixedCurve, write);
+  return {
+    baseIs: 'forwards',
+    base: { ...emptyFunding, curve: { ...emptyCurve, ...against } },
+    baseForwards: forwards(curve, write),
+  };
+}
+
 function asset(from: Market['asset'], write: Writer): MarketDraft['asset'] {
   const lags = from.settlementLag ?? 2;
   const [first, ...later] = typeof lags === 'number' ? [{ from: '', lag: lags }] : lags;
@@ -217,7 +267,13 @@ function income(from: Market['income'], write: Writer): MarketDraft['income'] {
       low: write.number(row.low, 'percent'),
       high: write.number(row.high, 'percent'),
     })),
-    yield: from.yield === undefined ? emptyDeal.market.income.yield : rate(from.yield, write),
+    ...(isForwards(from.yield)
+      ? { yieldIs: 'contracts' as const, yield: emptyDeal.market.income.yield, contracts: forwards(from.yield, write) }
+      : {
+          yieldIs: 'rate' as const,
+          yield: from.yield === undefined ? emptyDeal.market.income.yield : rate(from.yield, write),
+          contracts: emptyDeal.market.income.contracts,
+        }),
     passThrough: { bid: write.number(pass?.bid, 'percent'), offer: write.number(pass?.offer, 'percent') },
   };
 }
@@ -248,13 +304,18 @@ export function marketFrom(from: Market, sign: DecimalSign): MarketDraft {
       buy: write.number(from.hedgeCost?.buy, 'percent'),
       sell: write.number(from.hedgeCost?.sell, 'percent'),
     },
-    base: funding(from.base, emptyFunding, write),
+    ...base(from.base, write),
   };
 }
 
 /** The texts of a curve put over a draft, which keeps its other kinds. */
 export function curveOnto(draft: CurveDraft, from: Curve, sign: DecimalSign): CurveDraft {
   return onto(draft, from, new Writer(sign));
+}
+
+/** The texts of quoted forwards. */
+export function forwardsFrom(from: QuotedForwards, sign: DecimalSign): QuotedForwardsDraft {
+  return forwards(from, new Writer(sign));
 }
 
 /** The texts of a whole quote request. */

@@ -24,6 +24,7 @@ const numberNames = new Set([
   'quantity',
   'r0',
   'rate',
+  'scale',
   'sell',
   'share',
   'spread',

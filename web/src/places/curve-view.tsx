@@ -1,13 +1,28 @@
 import { useId, useState } from 'preact/hooks';
 import { Plot } from '../charts/plot';
-import { formatDate, formatPercent, formatSigned, formatSignificant, minus, timeOf } from '../format';
+import {
+  formatBasisPoints,
+  formatDate,
+  formatNumber,
+  formatPercent,
+  formatSigned,
+  formatSignificant,
+  minus,
+  precisionOf,
+  timeOf,
+} from '../format';
 import type { CurveResult } from '../model/answer';
 import { built } from '../store/calculation';
 import { coreVersion } from '../store/signals';
 import { useAnswer } from '../store/use-answer';
 
 type Which = CurveResult['which'];
-const names: Readonly<Record<Which, string>> = { funding: 'Funding', discount: 'Discounting', base: 'Base currency' };
+const names: Readonly<Record<Which, string>> = {
+  funding: 'Funding',
+  discount: 'Discounting',
+  base: 'Base currency',
+  yield: 'Yield',
+};
 const horizons = ['3M', '6M', '1Y', '2Y', '5Y', '10Y', '30Y'];
 const instrumentNames = { deposit: 'Deposit', fra: 'FRA', 'overnight-swap': 'Swap' } as const;
 
@@ -57,6 +72,64 @@ function Instruments({ result }: { readonly result: CurveResult }) {
   );
 }
 
+function Quoted({ result, digits }: { readonly result: CurveResult; readonly digits: number }) {
+  const compared = result.rows.some(({ againstZero }) => againstZero !== null);
+  return (
+    <div class="table-frame" tabIndex={0} role="region" aria-label="Forwards quoted and what is implied by them">
+      <table class="table">
+        <thead>
+          <tr>
+            <th scope="col">Maturity</th>
+            <th scope="col" class="num">
+              Quoted, outright
+            </th>
+            <th scope="col" class="num">
+              Our break-evens
+            </th>
+            <th scope="col" class="num">
+              Fair
+            </th>
+            <th scope="col" class="num">
+              Implied rate
+            </th>
+            {compared && (
+              <>
+                <th scope="col" class="num">
+                  Interest-rate curve
+                </th>
+                <th scope="col" class="num">
+                  Apart
+                </th>
+              </>
+            )}
+          </tr>
+        </thead>
+        <tbody>
+          {result.rows.map(({ at, date, quote, repriced, fair, impliedZero, againstZero, difference }) => (
+            <tr key={at}>
+              <th scope="row">{formatDate(date)}</th>
+              <td class="num">
+                {formatNumber(quote.bid, digits)} / {formatNumber(quote.offer, digits)}
+              </td>
+              <td class="num">
+                {formatNumber(repriced.bid, digits)} / {formatNumber(repriced.offer, digits)}
+              </td>
+              <td class="num">{formatNumber(fair, digits)}</td>
+              <td class="num">{formatPercent(impliedZero, 4)}</td>
+              {compared && (
+                <>
+                  <td class="num">{againstZero === null ? '–' : formatPercent(againstZero, 4)}</td>
+                  <td class="num">{difference === null ? '–' : formatBasisPoints(difference, 1)}</td>
+                </>
+              )}
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
+  );
+}
+
 /** One of the market's curves: its zero and forward rates, and that what it was made from comes out of it again. */
 export function CurveView() {
   const id = useId();
@@ -66,6 +139,7 @@ export function CurveView() {
   const choices: readonly Which[] = [
     'funding',
     ...(market.base === undefined ? [] : (['base'] as const)),
+    ...(typeof market.income?.yield === 'object' && 'kind' in market.income.yield ? (['yield'] as const) : []),
     ...(market.discount === undefined ? [] : (['discount'] as const)),
   ];
   const shown = choices.includes(which) ? which : 'funding';
@@ -117,6 +191,9 @@ export function CurveView() {
             legend={`Line: zero rate to the date. Dashed: overnight rate from it. Both continuous, ACT/365.FIXED${result.random ? ', of expected factors' : ''}.`}
           />
           {result.instruments.length > 0 && <Instruments result={result} />}
+          {result.rows.length > 0 && (
+            <Quoted result={result} digits={precisionOf(market.asset.tick, result.rows[0]?.fair ?? 1).between + 2} />
+          )}
         </>
       )}
     </section>

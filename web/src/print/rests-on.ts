@@ -79,7 +79,12 @@ function incomeWords({ income }: Market): string {
     parts.push(cash.map(({ ex, amount }) => `${formatNumber(amount)} ex ${formatDate(ex)}`).join(', '));
   if (proportional.length > 0)
     parts.push(proportional.map(({ ex, fraction }) => `${formatPercent(fraction, 3)} ex ${formatDate(ex)}`).join(', '));
-  if (income.yield !== undefined) parts.push(`yield ${rateWords(income.yield)}`);
+  if (income.yield !== undefined)
+    parts.push(
+      typeof income.yield === 'object' && 'kind' in income.yield
+        ? `a yield implied by ${income.yield.rows.length} listed contracts`
+        : `yield ${rateWords(income.yield)}`,
+    );
   if (passThrough !== undefined)
     parts.push(
       isTwoSided<number>(passThrough)
@@ -87,6 +92,12 @@ function incomeWords({ income }: Market): string {
         : `passed on: ${formatPercent(passThrough, 1)}`,
     );
   return parts.join('; ') || 'none';
+}
+
+type Implied = Extract<NonNullable<Market['base']>, { curve: { kind: 'forwards' } }>;
+
+function isImplied(base: NonNullable<Market['base']>): base is Implied {
+  return typeof base.curve === 'object' && 'kind' in base.curve && base.curve.kind === 'forwards';
 }
 
 /** Spot, rates, income, fee and hedge cost; what we lend and borrow at over the curve on the desk’s copy only. */
@@ -97,11 +108,15 @@ export function restsOn({ market }: QuoteRequest, forDesk: boolean): Line[] {
     : formatNumber(spot);
   const rates = (curve: Market['funding']) =>
     forDesk ? `${curveWords(curve.curve)}; ${spreads(curve)}` : curveWords(curve.curve);
+  const baseRates = (from: NonNullable<Market['base']>): string =>
+    isImplied(from)
+      ? `implied by ${from.curve.rows.length} forwards quoted, ${from.curve.quoted === 'points' ? 'in points' : 'outright'}`
+      : rates(from);
   const lines: Line[] = [
     { name: 'Spot', words: `${asset.currency} ${spotWords}` },
     { name: 'Rates', words: rates(funding) },
   ];
-  if (base) lines.push({ name: `Rates of ${asset.base ?? 'the base currency'}`, words: rates(base) });
+  if (base) lines.push({ name: `Rates of ${asset.base ?? 'the base currency'}`, words: baseRates(base) });
   if (asset.kind !== 'currency-pair') {
     lines.push({ name: 'Income', words: incomeWords(market) });
     lines.push({ name: 'Lending fee', words: lendingFee === undefined ? 'none' : feeWords(lendingFee) });

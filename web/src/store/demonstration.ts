@@ -1,5 +1,6 @@
 /** Four invented markets, one of each kind, with drafts of every kind of funding so that each is one click away. */
 import commodity from '../../demonstration/commodity.json';
+import forwards from '../../demonstration/forwards.json';
 import funding from '../../demonstration/funding.json';
 import index from '../../demonstration/index.json';
 import pair from '../../demonstration/currency-pair.json';
@@ -7,7 +8,7 @@ import share from '../../demonstration/share.json';
 import type { DecimalSign } from '../input/decimal';
 import type { CurveDraft, DealDraft, Draft } from '../model/draft';
 import { emptyAnalysis } from '../model/draft';
-import { curveOnto, dealFrom } from '../model/from-request';
+import { curveOnto, dealFrom, forwardsFrom, type QuotedForwards } from '../model/from-request';
 import type { Curve, QuoteRequest } from '../model/request';
 
 const hoursOfUse = { from: '08:40', until: '18:00' } as const;
@@ -39,6 +40,10 @@ function demonstrated(request: QuoteRequest, sign: DecimalSign): DealDraft {
       ...market,
       funding: filled(market.funding, asset.currency),
       base: asset.kind === 'currency-pair' ? filled(market.base, asset.base) : market.base,
+      baseForwards:
+        asset.kind === 'currency-pair'
+          ? forwardsFrom(forwards['currency-pair'] as unknown as QuotedForwards, sign)
+          : market.baseForwards,
       discount: { ...market.discount, curve: withEveryKind(market.discount.curve, asset.currency, sign) },
     },
     madeAt: `${day}T${hoursOfUse.from}`,
