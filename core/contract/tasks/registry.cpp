@@ -13,12 +13,13 @@ Calculation readFutures(Reader& request);
 Calculation readHedgeCover(Reader& request);
 Calculation readCompare(Reader& request);
 Calculation readCurveTask(Reader& request);
+Calculation readCalendarTask(Reader& request);
 
 std::span<const Task> tasks() {
     static constexpr std::array all{
         Task{"quote", readQuote},       Task{"tenors", readTenors},   Task{"path", readPath},
         Task{"simulate", readSimulate}, Task{"futures", readFutures}, Task{"hedge-cover", readHedgeCover},
-        Task{"compare", readCompare},   Task{"curve", readCurveTask},
+        Task{"compare", readCompare},   Task{"curve", readCurveTask}, Task{"calendar", readCalendarTask},
     };
     return all;
 }

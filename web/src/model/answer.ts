@@ -6,6 +6,7 @@ export type {
   BridgeStep,
   Carry,
   Client,
+  CalendarResult,
   ComparisonResult,
   CurveResult,
   FuturesResult,

@@ -7,6 +7,7 @@ import { addMarket, chooseMarket, removeMarket } from '../store/markets';
 import { chooseDecimal } from '../store/decimal-choice';
 import { format } from '../model/view';
 import { Cautions } from '../shell/cautions';
+import { CalendarView } from './calendar-view';
 import { CurveView } from './curve-view';
 
 function Markets() {
@@ -95,6 +96,7 @@ export function MarketPlace() {
         <Cards alwaysOpen />
       </div>
       <CurveView />
+      <CalendarView />
       <Cautions />
     </main>
   );
