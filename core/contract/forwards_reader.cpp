@@ -22,7 +22,7 @@ double usualScale(const forward::Asset& asset) {
 
 std::optional<forward::ForwardQuote> readRow(const Value& row) {
     Reader object{row};
-    const auto at = object.required("at", "the maturity, a date or a tenor").dateOrTenor();
+    const auto at = object.required("at", "the maturity, a date or a tenor").maturity();
     const auto value = readTwoWay(object.required("value", "what is quoted, a number or {bid, offer}"),
                                   anyNumber, "a forward");
     return at && value ? std::optional{forward::ForwardQuote{{*at, std::nullopt}, *value}} : std::nullopt;

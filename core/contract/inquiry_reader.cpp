@@ -40,7 +40,7 @@ std::optional<Roll> readRoll(Reader& object, bool forDate) {
 }
 
 std::optional<Maturity> readMaturity(Reader& object) {
-    const auto at = object.required("maturity", "a date or a tenor").dateOrTenor();
+    const auto at = object.required("maturity", "a date or a tenor").maturity();
     const std::optional<Roll> roll = readRoll(object, !at || std::holds_alternative<Date>(*at));
     return at ? std::optional{Maturity{*at, roll}} : std::nullopt;
 }

@@ -182,6 +182,26 @@ std::optional<std::variant<dates::Date, dates::Tenor>> Value::dateOrTenor() cons
     return std::nullopt;
 }
 
+std::optional<std::variant<dates::Date, dates::Tenor, dates::ShortPeriod, dates::ThirdDay>>
+Value::maturity() const {
+    if (json_ && json_->isText()) {
+        if (const auto period = dates::parseShortPeriod(json_->text())) {
+            return *period;
+        }
+        if (const auto third = dates::parseThirdDay(json_->text())) {
+            return *third;
+        }
+    }
+    const auto at = dateOrTenor();
+    if (!at) {
+        return std::nullopt;
+    }
+    if (const auto* tenor = std::get_if<dates::Tenor>(&*at)) {
+        return *tenor;
+    }
+    return std::get<dates::Date>(*at);
+}
+
 void Value::wrongType(std::string_view expected) const {
     fault("wrong-type",
           "Here " + std::string{expected} + " is wanted; it is " + std::string{json_->kindInWords()} + ".");

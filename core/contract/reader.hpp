@@ -5,6 +5,7 @@
 #include "contract/place.hpp"
 #include "contract/writer.hpp"
 #include "dates/date.hpp"
+#include "dates/special_days.hpp"
 #include "dates/tenor.hpp"
 
 #include <initializer_list>
@@ -63,6 +64,9 @@ class Value {
     [[nodiscard]] std::optional<std::string_view> text() const;
     [[nodiscard]] std::optional<dates::Date> date() const;
     [[nodiscard]] std::optional<std::variant<dates::Date, dates::Tenor>> dateOrTenor() const;
+    /// A maturity: a date, a tenor, ON, TN, SN, or a month's third Wednesday or Friday.
+    [[nodiscard]] std::optional<std::variant<dates::Date, dates::Tenor, dates::ShortPeriod, dates::ThirdDay>>
+    maturity() const;
 
     /// One of `allowed`, by the names that `nameOf` gives them.
     template <class Choice>

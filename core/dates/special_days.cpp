@@ -1,6 +1,24 @@
 #include "dates/special_days.hpp"
 
+#include <string>
+
 namespace forwright::dates {
+
+std::optional<ThirdDay> parseThirdDay(std::string_view text) {
+    constexpr std::string_view wednesday = "third-wednesday ";
+    constexpr std::string_view friday = "third-friday ";
+    const bool isFriday = text.starts_with(friday);
+    if (!isFriday && !text.starts_with(wednesday)) {
+        return std::nullopt;
+    }
+    const std::string_view month = text.substr(isFriday ? friday.size() : wednesday.size());
+    const std::optional<Date> first = parseIso(std::string(month) + "-01");
+    if (!first) {
+        return std::nullopt;
+    }
+    const std::chrono::year_month_day day{*first};
+    return ThirdDay{day.year() / day.month(), isFriday};
+}
 
 Date easterSunday(std::chrono::year year) {
     const int y = static_cast<int>(year);

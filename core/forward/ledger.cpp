@@ -28,7 +28,9 @@ class Diary {
     /// Everything up to delivery but interest, in the order of its dates.
     [[nodiscard]] std::vector<Entry> entries() && {
         deal();
-        if (market_.base) {
+        if (market_.base && schedule_.settlement < schedule_.spot) {
+            bridge();
+        } else if (market_.base) {
             accrue(schedule_.settlement, 1.0, "deposit-base",
                    isLong() ? "interest on the base currency deposited"
                             : "interest owed on the base currency borrowed");
@@ -53,6 +55,19 @@ class Diary {
                                      : "receive the price of the units and lend it",
                             0.0, -sign_ * price_.units * price_.spot});
         held_ = price_.units;
+    }
+
+    /// A delivery before the spot date: the unit is borrowed for it, or lent from it, and comes back out of
+    /// what is dealt for spot.
+    void bridge() {
+        entries_.push_back(
+            {schedule_.settlement, "borrow-base",
+             isLong() ? "borrow the unit until the spot date" : "lend the unit until the spot date", sign_,
+             0.0});
+        entries_.push_back(
+            {schedule_.spot, "repay-base",
+             isLong() ? "repay the unit with its interest" : "the unit comes back with its interest",
+             -sign_ * price_.units, 0.0});
     }
 
     /// Units come to `target` by `date`, whatever they were.

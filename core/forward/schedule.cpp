@@ -33,7 +33,7 @@ std::string settlementRule(const Asset& asset, Date dealing) {
 
 /// The first day a forward can end on.
 Date earliestMaturity(const Market& market, Date spot) {
-    return isByDelivery(market.asset.kind) ? spot : market.asOf;
+    return market.asset.kind == AssetKind::commodity ? spot : market.asOf;
 }
 
 /// The last day a forward can end on: a hundred years from spot, moved to a business day.
@@ -85,8 +85,37 @@ outcome::Outcome<Reached> reachedByDate(const Market& market, Date date,
                               namesOf(calendar) + ")"};
 }
 
+outcome::Outcome<Reached> reachedByShortPeriod(const Market& market, dates::ShortPeriod period, Date spot,
+                                               const std::string& at) {
+    if (!isByDelivery(market.asset.kind)) {
+        return Fault{
+            at, "not-applicable",
+            std::string(dates::nameOf(period)) +
+                " is a period of currency and money markets: a share or an index is dealt for a date or a "
+                "tenor"};
+    }
+    const dates::BusinessCalendar& calendar = market.asset.calendar;
+    const dates::Period days = dates::datesOf(period, market.asOf, spot, calendar);
+    return Reached{days.end, std::string(dates::nameOf(period)) + ", from " + dates::toIso(days.start) +
+                                 " to the next business day (" + namesOf(calendar) + ")"};
+}
+
+Reached reachedByThirdDay(const Market& market, const dates::ThirdDay& third) {
+    const dates::BusinessCalendar& calendar = market.asset.calendar;
+    const Date date = third.date();
+    return {third.friday ? calendar.preceding(date) : calendar.following(date),
+            std::string(third.friday ? "third Friday, " : "third Wednesday, ") + dates::toIso(date) +
+                (third.friday ? ", preceding (" : ", following (") + namesOf(calendar) + ")"};
+}
+
 outcome::Outcome<Reached> reached(const Market& market, const Maturity& maturity, Date spot,
                                   const std::string& at, outcome::Notices& notices) {
+    if (const auto* period = std::get_if<dates::ShortPeriod>(&maturity.at)) {
+        return reachedByShortPeriod(market, *period, spot, at);
+    }
+    if (const auto* third = std::get_if<dates::ThirdDay>(&maturity.at)) {
+        return reachedByThirdDay(market, *third);
+    }
     if (const auto* tenor = std::get_if<dates::Tenor>(&maturity.at)) {
         return reachedByTenor(market, *tenor, spot);
     }

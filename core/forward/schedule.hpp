@@ -1,5 +1,6 @@
 #pragma once
 
+#include "dates/special_days.hpp"
 #include "dates/tenor.hpp"
 #include "forward/market.hpp"
 #include "outcome/outcome.hpp"
@@ -11,9 +12,11 @@
 
 namespace forwright::forward {
 
-/// When a forward ends, as the client says it.
+/// When a forward ends, as the client says it. `ON`, `TN` and `SN` are the ends of those periods, for pairs
+/// and commodities; a third Wednesday on which no business is done goes to the next business day, a third
+/// Friday to the one before (common practice).
 struct Maturity {
-    std::variant<Date, dates::Tenor> at;
+    std::variant<Date, dates::Tenor, dates::ShortPeriod, dates::ThirdDay> at;
     std::optional<dates::Roll>
         roll; ///< where a date that is no business day goes; without it such a date is refused
 };
@@ -44,9 +47,10 @@ struct Schedule {
 [[nodiscard]] Date settlementOf(const Asset& asset, Date dealing);
 
 /// All dates of a forward dealt on the market's `asOf`; `at` is where the maturity stands in the request.
-/// Refused: a date that is no business day and has no roll (`not-a-business-day`, naming its neighbours), one
-/// before the earliest possible (`before-spot`, `in-the-past`), one more than 100 years ahead or beyond the
-/// last date known (`too-far`).
+/// A pair may end before its spot date, for value today or tomorrow: the same line prices it. Refused: a date
+/// that is no business day and has no roll (`not-a-business-day`, naming its neighbours), one before the
+/// earliest possible (`before-spot`, `in-the-past`), one more than 100 years ahead or beyond the last date
+/// known (`too-far`).
 [[nodiscard]] outcome::Outcome<Schedule> schedule(const Market& market, const Maturity& maturity,
                                                   const std::string& at);
 

@@ -96,7 +96,7 @@ TEST_CASE("maturities before the first possible day or too far ahead are refused
     };
     CHECK(code(fullShare(), on("2026-11-30")) == "in-the-past");
     CHECK(code(fullShare(), on("2026-12-01")).empty());
-    CHECK(code(pair(), on("2026-12-02")) == "before-spot");
+    CHECK(code(pair(), on("2026-12-02")).empty()); // value tomorrow
     CHECK(code(pair(), on("2026-12-03")).empty());
     CHECK(code(fullShare(), {*dates::parseTenor("100Y"), std::nullopt}).empty());
     CHECK(code(fullShare(), {*dates::parseTenor("1200M"), std::nullopt}).empty());

@@ -69,7 +69,7 @@ Calculation readFutures(Reader& request) {
     }
     more.rows(
         [&](const Value& row, std::size_t /*index*/) {
-            if (const auto at = row.dateOrTenor()) {
+            if (const auto at = row.maturity()) {
                 asked.maturities.push_back({*at, dates::Roll::following});
                 asked.places.push_back(row.place().pointer());
             }

@@ -22,7 +22,7 @@ std::vector<forward::Maturity> readMaturities(Reader& request) {
     std::vector<forward::Maturity> maturities;
     bool anyDate = false;
     list.rows([&](const Value& row, std::size_t /*index*/) {
-        if (const auto at = row.dateOrTenor()) {
+        if (const auto at = row.maturity()) {
             maturities.push_back({*at, std::nullopt});
             anyDate = anyDate || std::holds_alternative<dates::Date>(*at);
         }

@@ -81,6 +81,13 @@ describe('dates as people write them', () => {
 
   test('a maturity is either', () => {
     expect(readMaturity('3m', british)).toEqual({ ok: true, value: '3M' });
+    const read = (text: string) => readMaturity(text, british);
+    for (const text of ['ON', 'o/n', 'O/N']) expect(read(text)).toEqual({ ok: true, value: 'ON' });
+    expect(read('tn')).toEqual({ ok: true, value: 'TN' });
+    for (const text of ['3rd Wed Mar 27', 'third Wednesday of March 2027', 'third-wednesday 2027-03'])
+      expect(read(text), text).toEqual({ ok: true, value: 'third-wednesday 2027-03' });
+    expect(read('3rd Fri Jun 27')).toEqual({ ok: true, value: 'third-friday 2027-06' });
+    expect(read('3rd Wed Nothing 27').ok).toBe(false);
     expect(readMaturity('18 Jun 27', british)).toEqual({ ok: true, value: '2027-06-18' });
     const parsed = readMaturity('3x', british);
     expect(parsed.ok ? '' : parsed.message).toContain('neither a date nor a tenor');

@@ -155,10 +155,28 @@ export function readTenor(text: string): string | null {
   return match === null || unit === undefined ? null : `${Number(match[1])}${unit}`;
 }
 
-/** Reads a date or a tenor. */
+/** `ON`, `o/n`, `TN`, `SN` as the contract names them; null where the text is none of them. */
+function readShortPeriod(text: string): string | null {
+  const match = /^([ots])\s*\/?\s*n$/i.exec(text.trim());
+  return match === null ? null : `${(match[1] ?? '').toUpperCase()}N`;
+}
+
+/** `3rd Wed Mar 27`, `third Friday March 2027` as the contract writes it; null where the text is none. */
+function readThirdDay(text: string, style: DateStyle): string | null {
+  const match = /^(?:3rd|3\.|third)[\s-]*(wednesday|wed|friday|fri)\.?\s*(?:of|in)?\s*(.+)$/i.exec(text.trim());
+  if (match === null) return null;
+  const day = (match[1] ?? '').toLowerCase().startsWith('w') ? 'wednesday' : 'friday';
+  const named = /^(\d{4})-(\d{2})$/.exec(match[2] ?? '');
+  if (named !== null) return `third-${day} ${named[1] ?? ''}-${named[2] ?? ''}`;
+  const first = readDate(`1 ${match[2] ?? ''}`, style);
+  return first.ok ? `third-${day} ${first.value.slice(0, 7)}` : null;
+}
+
+/** Reads a date, a tenor, a short period, or a month's third Wednesday or Friday. */
 export function readMaturity(text: string, style: DateStyle): Parsed<string> {
   const tenor = readTenor(text);
-  if (tenor !== null) return understood(tenor);
+  const named = tenor ?? readShortPeriod(text) ?? readThirdDay(text, style);
+  if (named !== null) return understood(named);
   const date = readDate(text, style);
   if (date.ok || date.code !== 'not-a-date' || !date.message.endsWith('2027-06-18.')) return date;
   return notUnderstood('not-a-date', `“${text.trim()}” is neither a date nor a tenor: write it as 18 Jun 27 or 3M.`);
