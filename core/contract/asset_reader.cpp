@@ -20,15 +20,6 @@ namespace {
 constexpr int longestLag = 30;
 constexpr int usualLag = 2;
 
-std::string readCurrency(const Value& value) {
-    const std::optional<std::string_view> code = value.text();
-    if (code && !isCurrency(*code)) {
-        value.fault("unknown-currency",
-                    shownText(*code) + " is no currency in use: give its ISO 4217 code, as in EUR.");
-    }
-    return std::string{code.value_or("")};
-}
-
 std::vector<forward::LagFrom> readLagsByDate(const Value& list) {
     std::vector<forward::LagFrom> lags;
     list.rows([&lags](const Value& row, std::size_t /*index*/) {
@@ -97,6 +88,15 @@ void readBase(Reader& object, Asset& asset) {
 }
 
 } // namespace
+
+std::string readCurrency(const Value& value) {
+    const std::optional<std::string_view> code = value.text();
+    if (code && !isCurrency(*code)) {
+        value.fault("unknown-currency",
+                    shownText(*code) + " is no currency in use: give its ISO 4217 code, as in EUR.");
+    }
+    return std::string{code.value_or("")};
+}
 
 std::string readName(const Value& value) {
     const std::string_view name = value.text().value_or("");

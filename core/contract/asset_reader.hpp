@@ -13,6 +13,8 @@ namespace forwright::contract {
 [[nodiscard]] std::optional<forward::AssetKind> readAsset(const Value& value, forward::Asset& asset);
 
 /// A name that people give something; at most `longestName` characters (`too-long`).
+/// An ISO 4217 code; what is none is told (`unknown-currency`) and given all the same.
+[[nodiscard]] std::string readCurrency(const Value& value);
 [[nodiscard]] std::string readName(const Value& value);
 
 } // namespace forwright::contract

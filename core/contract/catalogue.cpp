@@ -28,6 +28,7 @@ std::span<const CatalogueEntry> catalogue() {
                        "The bid and the offer of a rate are in two conventions."},
         CatalogueEntry{"duplicate-member", true, false, "An object has a member more than once."},
         CatalogueEntry{"empty-list", true, false, "A list that needs a row has none."},
+        CatalogueEntry{"estimated-income", false, true, "The price has distributions in that are estimates."},
         CatalogueEntry{"gap", true, false,
                        "A forward rate agreement begins after what the instruments before it tell."},
         CatalogueEntry{"in-the-past", true, false, "The maturity is before the market's date."},

@@ -82,6 +82,59 @@ std::optional<income::Estimate> readEstimate(Reader& row, std::string_view name,
     return income::Estimate{*amount, *low, *high};
 }
 
+enum class Status { declared, estimated };
+std::string_view nameOf(Status status) {
+    return status == Status::declared ? "declared" : "estimated";
+}
+enum class Occasion { ordinary, special };
+std::string_view nameOf(Occasion occasion) {
+    return occasion == Occasion::ordinary ? "ordinary" : "special";
+}
+
+/// How sure a distribution is, what kind, and what becomes of it under the forward.
+void readTreatment(Reader& row, income::CashDistribution& made) {
+    using income::Treatment;
+    if (const Value status = row.optional("status"); status.present()) {
+        if (const auto read = status.choice({Status::declared, Status::estimated})) {
+            made.estimated = *read == Status::estimated;
+        }
+    }
+    if (const Value type = row.optional("type"); type.present()) {
+        made.special = type.choice({Occasion::ordinary, Occasion::special}) == Occasion::special;
+    }
+    made.treatment =
+        row.choice("treatment", {Treatment::inPrice, Treatment::passedThrough, Treatment::adjustsContract},
+                   Treatment::inPrice);
+    if (const Value share = row.optional("passThrough"); share.present()) {
+        made.passThrough = readTwoWay(share, shareRange, "a share from 0 to 1");
+    }
+}
+
+/// An amount in another currency comes with the rate that makes it the quote currency's. False where one of
+/// the two is missing or at fault.
+bool readGiven(Reader& row, const std::optional<income::Estimate>& amount, income::CashDistribution& made) {
+    const Value currency = row.optional("currency");
+    const Value rate = row.optional("forwardRate");
+    if (!currency.present() && !rate.present()) {
+        return true;
+    }
+    if (!currency.present() || !rate.present()) {
+        const char* lacking = currency.present() ? "forwardRate" : "currency";
+        row.findings().fault(
+            row.at(lacking), "missing",
+            "An amount in another currency needs both: the currency, and what one of it is worth in "
+            "the quote currency on the day of payment.");
+        return false;
+    }
+    const std::string code = readCurrency(currency);
+    const auto number = rate.number(positive);
+    if (!number || !amount) {
+        return false;
+    }
+    made.given = income::GivenAmount{amount->amount, code, *number};
+    return true;
+}
+
 std::optional<income::CashDistribution> readCash(const Value& value) {
     Reader row{value};
     const std::optional<Date> ex = row.required("ex", "the ex date").date();
@@ -92,10 +145,21 @@ std::optional<income::CashDistribution> readCash(const Value& value) {
         payValue.fault("pay-before-ex", "The day of payment has to be the ex date, " + dates::toIso(*ex) +
                                             ", or later; it is " + dates::toIso(*pay) + ".");
     }
-    if (!ex || !pay || !amount) {
+    income::CashDistribution made;
+    readTreatment(row, made);
+    const bool given = readGiven(row, amount, made);
+    if (!ex || !pay || !amount || !given) {
         return std::nullopt;
     }
-    return income::CashDistribution{value.place().pointer(), *ex, *pay, *amount};
+    made.at = value.place().pointer();
+    made.ex = *ex;
+    made.pay = *pay;
+    made.amount = *amount;
+    if (made.given) {
+        const double rate = made.given->forwardRate;
+        made.amount = {amount->amount * rate, amount->low * rate, amount->high * rate};
+    }
+    return made;
 }
 
 std::optional<income::ProportionalDistribution> readProportional(const Value& value) {

@@ -16,6 +16,27 @@ double takenOffByCash(const Price& price) {
     return sum;
 }
 
+const char* effectOf(const IncomeLine& line) {
+    if (line.reason == "counted") {
+        return "It is taken off the price that is agreed.";
+    }
+    if (line.reason == "passed-through") {
+        return "It is paid on to the client when it is paid, so the price does not have it in.";
+    }
+    if (line.reason == "adjusts-contract") {
+        return "The contract's terms are changed on its ex date, so the price does not have it in.";
+    }
+    return line.reason == "before-hold" ? "It falls before the hedge is held: the price does not have it in."
+                                        : "It falls after the maturity: the price does not have it in.";
+}
+
+/// What the row takes off the fair forward, or would.
+double takenOff(const income::CashDistribution& row, const Market& market, const SideInputs& fair,
+                const Price& price) {
+    return market.income.passThroughOn(fair.side, row) * row.amount.on(fair.side) * fair.units.after(row.ex) *
+           fair.funding->factor(row.pay) / price.settlementFactor;
+}
+
 const char* reasonOf(Date ex, const Schedule& schedule) {
     if (ex <= schedule.holdFrom) {
         return "before-hold";
@@ -23,14 +44,34 @@ const char* reasonOf(Date ex, const Schedule& schedule) {
     return ex > schedule.maturity ? "after-maturity" : "counted";
 }
 
-IncomeLine lineOf(const income::CashDistribution& row, std::size_t index, const Schedule& schedule,
-                  const Price& price) {
+/// Where it falls into the time of the hedge its treatment decides.
+const char* reasonOf(const income::CashDistribution& row, const Schedule& schedule) {
+    if (!income::counts(row.ex, schedule.holdFrom, schedule.maturity)) {
+        return reasonOf(row.ex, schedule);
+    }
+    switch (row.treatment) {
+    case income::Treatment::passedThrough:
+        return "passed-through";
+    case income::Treatment::adjustsContract:
+        return "adjusts-contract";
+    case income::Treatment::inPrice:
+        break;
+    }
+    return "counted";
+}
+
+IncomeLine lineOf(const income::CashDistribution& row, std::size_t index, const Market& market,
+                  const Schedule& schedule, const SideInputs& fair, const Price& price) {
     IncomeLine line;
     line.at = row.at;
     line.ex = row.ex;
     line.pay = row.pay;
     line.amount = row.amount.amount;
-    line.reason = reasonOf(row.ex, schedule);
+    line.reason = reasonOf(row, schedule);
+    line.effect = effectOf(line);
+    if (income::counts(row.ex, schedule.holdFrom, schedule.maturity)) {
+        line.wouldTake = takenOff(row, market, fair, price);
+    }
     for (const CashInPrice& cash : price.cash) {
         if (cash.row == index) {
             line.counted = true;
@@ -49,6 +90,7 @@ IncomeLine lineOf(const income::ProportionalDistribution& row, const Schedule& s
     line.ex = row.ex;
     line.fraction = row.fraction.amount;
     line.reason = reasonOf(row.ex, schedule);
+    line.effect = effectOf(line);
     // The distributions are taken off one after the other, by date.
     double level =
         grown * fair.units.feeFactor(schedule.holdFrom) * fair.units.yieldFactor(schedule.holdFrom);
@@ -92,7 +134,7 @@ std::vector<IncomeLine> incomeLines(const Market& market, const Schedule& schedu
     const income::Income& income = market.income;
     lines.reserve(income.cash.size() + income.proportional.size());
     for (std::size_t index = 0; index < income.cash.size(); ++index) {
-        lines.push_back(lineOf(income.cash[index], index, schedule, price));
+        lines.push_back(lineOf(income.cash[index], index, market, schedule, fair, price));
     }
     for (const income::ProportionalDistribution& row : income.proportional) {
         lines.push_back(lineOf(row, schedule, fair, grownSpot(price)));

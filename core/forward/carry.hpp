@@ -30,7 +30,11 @@ struct IncomeLine {
     std::optional<double> amount;   ///< of cash, quote currency a unit
     std::optional<double> fraction; ///< of a proportional distribution
     bool counted = false;
-    std::string reason;  ///< code: `counted`, `before-hold`, `after-maturity`
+    std::string
+        reason; ///< code: `counted`, `before-hold`, `after-maturity`, `passed-through`, `adjusts-contract`
+    std::string effect;     ///< what its treatment does to the price, in a sentence
+    double wouldTake = 0.0; ///< cash: what it takes off the forward, or would where it were in the price; 0
+                            ///< outside the time of the hedge
     double units = 0.0;  ///< n(ex); 0 where not counted
     double factor = 0.0; ///< P(pay), cash only
     double atSettlement =

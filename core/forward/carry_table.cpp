@@ -53,8 +53,8 @@ CarryTable::CarryTable(const Market& market, const Schedule& longest, Side side)
         const income::CashDistribution& row = market.income.cash[index];
         reinvestUpTo(row.ex); // a proportional distribution of the same day is behind it
         Standing& standing = standingOn(row.ex);
-        standing.received += inputs.passThrough * row.amount.on(side) * funding_->factor(row.pay) /
-                             (standing.kept * growth(row.ex));
+        standing.received += market.income.passThroughOn(side, row) * row.amount.on(side) *
+                             funding_->factor(row.pay) / (standing.kept * growth(row.ex));
     }
     reinvestUpTo(longest.maturity);
 }

@@ -98,8 +98,8 @@ discounting::Condition ofYield(const Market& market, const SideInputs& inputs, c
     for (const std::size_t index : inputs.cashRows) {
         const income::CashDistribution& row = market.income.cash[index];
         condition.dates.push_back(row.ex);
-        amounts.push_back(-inputs.passThrough * row.amount.on(inputs.side) * withoutYield(row.ex) *
-                          inputs.funding->factor(row.pay));
+        amounts.push_back(-market.income.passThroughOn(inputs.side, row) * row.amount.on(inputs.side) *
+                          withoutYield(row.ex) * inputs.funding->factor(row.pay));
     }
     const double wanted = numeric::log(outright) + inputs.funding->logFactor(schedule.settlement);
     condition.miss = [amounts, wanted](std::span<const double> logs, std::span<double> byLogs) {

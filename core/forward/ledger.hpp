@@ -10,9 +10,9 @@ namespace forwright::forward {
 /// One entry of the cash-and-carry.
 struct LedgerRow {
     Date date;
-    std::string code; ///< `buy`, `sell-short`, `pay-for-units`, `proceeds-of-sale`, `yield-and-fee`,
-                      ///< `proportional`, `distribution`, `receivable`, `interest`, `deposit-base`,
-                      ///< `borrow-base`, `repay-base`, `delivery`
+    std::string code;     ///< `buy`, `sell-short`, `pay-for-units`, `proceeds-of-sale`, `yield-and-fee`,
+                          ///< `proportional`, `distribution`, `receivable`, `interest`, `deposit-base`,
+                          ///< `borrow-base`, `repay-base`, `delivery`
     std::string text;     ///< in plain words
     double units = 0.0;   ///< bought (+) or sold (−)
     double held = 0.0;    ///< units after the entry

@@ -68,7 +68,8 @@ std::vector<std::size_t> countedRows(const std::vector<income::CashDistribution>
                                      const Schedule& schedule) {
     std::vector<std::size_t> counted;
     for (std::size_t row = 0; row < rows.size(); ++row) {
-        if (income::counts(rows[row].ex, schedule.holdFrom, schedule.maturity)) {
+        if (rows[row].treatment == income::Treatment::inPrice &&
+            income::counts(rows[row].ex, schedule.holdFrom, schedule.maturity)) {
             counted.push_back(row);
         }
     }
@@ -186,7 +187,7 @@ class Teller {
             const income::CashDistribution& row = market_.income.cash[cash.row];
             Step step = started("distribution", "Cash distribution at settlement", result, perUnit());
             step.formula = "g · c · n(ex) · P(pay)/P(T_s)";
-            step.given = {{"g", inputs_.passThrough, ""},
+            step.given = {{"g", market_.income.passThroughOn(inputs_.side, row), ""},
                           {"c", cash.amount, perUnit()},
                           {"n(ex)", cash.units, "units"},
                           {"P(pay)", cash.factor, ""},
@@ -290,7 +291,7 @@ Price price(const Market& market, const Schedule& schedule, const SideInputs& in
         CashInPrice cash;
         cash.row = index;
         cash.amount = row.amount.on(inputs.side);
-        cash.passed = inputs.passThrough * cash.amount;
+        cash.passed = market.income.passThroughOn(inputs.side, row) * cash.amount;
         cash.units = inputs.units.after(row.ex);
         cash.factor = inputs.funding->factor(row.pay);
         cash.value = cash.passed * cash.units * cash.factor;

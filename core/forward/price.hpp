@@ -19,7 +19,7 @@ struct SideInputs {
         0.0; ///< fair: mid; offer: the offer with the cost of buying; bid: the bid less the cost of selling
     CurvePtr funding;                  ///< with the side's spread
     CurvePtr base;                     ///< of a currency pair, with the side's spread; null otherwise
-    double passThrough = 1.0;          ///< g
+    double passThrough = 1.0;          ///< g, of distributions that have none of their own
     income::UnitsToHold units;         ///< of a currency pair 1 on every day
     std::vector<std::size_t> cashRows; ///< indices of the market's cash rows that count, by ex date
 };

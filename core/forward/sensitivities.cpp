@@ -62,7 +62,8 @@ std::vector<CashSensitivity> toCash(const Market& market, const SideInputs& fair
         result.push_back({row.at, 0.0});
     }
     for (const CashInPrice& cash : price.cash) {
-        result[cash.row].change = -fair.passThrough * cash.units * cash.factor / price.settlementFactor;
+        result[cash.row].change = -market.income.passThroughOn(fair.side, market.income.cash[cash.row]) *
+                                  cash.units * cash.factor / price.settlementFactor;
     }
     return result;
 }

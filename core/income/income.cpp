@@ -3,6 +3,7 @@
 #include "numeric/elementary.hpp"
 
 #include <algorithm>
+#include <array>
 
 namespace forwright::income {
 
@@ -30,16 +31,41 @@ const discounting::CurvePtr& YieldCurves::on(Side side) const {
     return fair;
 }
 
-double Income::passThroughOn(Side side) const {
+namespace {
+
+double sideOf(const TwoWay<double>& both, Side side) {
     switch (side) {
     case Side::bid:
-        return passThrough.bid;
+        return both.bid;
     case Side::offer:
-        return passThrough.offer;
+        return both.offer;
     case Side::fair:
         break;
     }
-    return 0.5 * (passThrough.bid + passThrough.offer);
+    return 0.5 * (both.bid + both.offer);
+}
+
+constexpr std::array<std::string_view, 3> treatmentNames{"in-price", "passed-through", "adjusts-contract"};
+
+} // namespace
+
+std::optional<Treatment> parseTreatment(std::string_view name) {
+    const auto found = std::find(treatmentNames.begin(), treatmentNames.end(), name);
+    return found == treatmentNames.end()
+               ? std::nullopt
+               : std::optional{static_cast<Treatment>(found - treatmentNames.begin())};
+}
+
+std::string_view nameOf(Treatment treatment) {
+    return treatmentNames[static_cast<std::size_t>(treatment)];
+}
+
+double Income::passThroughOn(Side side) const {
+    return sideOf(passThrough, side);
+}
+
+double Income::passThroughOn(Side side, const CashDistribution& row) const {
+    return sideOf(row.passThrough.value_or(passThrough), side);
 }
 
 bool counts(Date ex, Date holdFrom, Date maturity) {

@@ -6,6 +6,7 @@
 
 #include <optional>
 #include <string>
+#include <string_view>
 #include <vector>
 
 /// What an asset pays or costs while it is held, and so how many units must be held to end with one.
@@ -34,12 +35,34 @@ struct Estimate {
     [[nodiscard]] double on(Side side) const;
 };
 
+/// What becomes of a distribution under the forward.
+enum class Treatment {
+    inPrice,         ///< taken off the price that is agreed
+    passedThrough,   ///< paid on to the client when it is paid, and so not in the price
+    adjustsContract, ///< the contract's terms are changed on the ex date, and so not in the price
+};
+[[nodiscard]] std::optional<Treatment>
+parseTreatment(std::string_view name); ///< `in-price`, `passed-through`, `adjusts-contract`
+[[nodiscard]] std::string_view nameOf(Treatment treatment);
+
+/// An amount as it was given, in another currency.
+struct GivenAmount {
+    double amount = 0.0;
+    std::string currency;
+    double forwardRate = 1.0; ///< quote currency for one of it, on the day of payment
+};
+
 /// A distribution in money; negative for a cost (storage, insurance).
 struct CashDistribution {
     std::string at;  ///< pointer of its row in the request
     Date ex;         ///< who holds before this date is paid
     Date pay;        ///< not before `ex`
     Estimate amount; ///< quote currency a unit
+    Treatment treatment = Treatment::inPrice;
+    std::optional<bool> estimated{}; ///< whether it is an estimate or declared, where that is said
+    bool special = false;            ///< out of the ordinary
+    std::optional<TwoWay<double>> passThrough{}; ///< its own share, in place of the income's
+    std::optional<GivenAmount> given{}; ///< what `amount` was made from, where it is another currency's
 };
 
 /// A distribution that is a fraction of the price, −1 to 1 exclusive.
@@ -64,6 +87,8 @@ struct Income {
         1.0, 1.0}; ///< share of a distribution that reaches (offer) or is owed by (bid) the hedge
     /// The share for a side; the fair price takes the mean of the two.
     [[nodiscard]] double passThroughOn(Side side) const;
+    /// The share of one distribution, which may have its own.
+    [[nodiscard]] double passThroughOn(Side side, const CashDistribution& row) const;
 };
 
 /// Whether a distribution falls to who holds from `holdFrom` to `maturity`: holdFrom < ex ≤ maturity.

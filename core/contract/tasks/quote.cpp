@@ -119,6 +119,10 @@ void writeIncome(Writer& writer, const std::vector<forward::IncomeLine>& lines) 
         writer.memberIfAny("fraction", line.fraction);
         writer.member("counted", line.counted);
         writer.member("reason", line.reason);
+        writer.member("effect", line.effect);
+        if (line.amount) {
+            writer.member("wouldTake", line.wouldTake);
+        }
         writer.member("units", line.units);
         writer.member("factor", line.factor);
         writer.member("atSettlement", line.atSettlement);
@@ -358,8 +362,8 @@ void writeWorking(Writer& writer, const std::vector<forward::Step>& steps) {
 void noticeLeftOut(Findings& findings, const std::vector<forward::IncomeLine>& lines,
                    const forward::Schedule& schedule) {
     for (const forward::IncomeLine& line : lines) {
-        if (line.counted) {
-            continue;
+        if (line.counted || (line.ex > schedule.holdFrom && line.ex <= schedule.maturity)) {
+            continue; // left out by its treatment, which is a choice
         }
         const bool late = line.ex > schedule.maturity;
         findings.notices(
@@ -372,11 +376,33 @@ void noticeLeftOut(Findings& findings, const std::vector<forward::IncomeLine>& l
     }
 }
 
+/// What hangs on estimates should be known to.
+void noticeEstimates(Findings& findings, const Market& market,
+                     const std::vector<forward::IncomeLine>& lines) {
+    int count = 0;
+    double taken = 0.0;
+    for (std::size_t i = 0; i < market.income.cash.size(); ++i) {
+        if (market.income.cash[i].estimated.value_or(false) && lines[i].counted) {
+            ++count;
+            taken += lines[i].atSettlement;
+        }
+    }
+    if (count > 0) {
+        findings.notices(Place{},
+                         {{market.at + "/income/cash", "estimated-income",
+                           std::to_string(count) +
+                               (count == 1 ? " distribution in the price is an estimate: it takes "
+                                           : " distributions in the price are estimates: they take ") +
+                               numberText(taken) + " off the fair forward."}});
+    }
+}
+
 void writeBlocks(Writer& writer, Findings& findings, const Market& market, const Inquiry& inquiry,
                  const Quote& quote, const Blocks& blocks) {
     const std::vector<forward::IncomeLine> lines =
         forward::incomeLines(market, quote.schedule, quote.fairInputs, quote.fair);
     noticeLeftOut(findings, lines, quote.schedule);
+    noticeEstimates(findings, market, lines);
     if (blocks.has(Block::income)) {
         writeIncome(writer, lines);
     }

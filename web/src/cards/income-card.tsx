@@ -5,6 +5,7 @@ import { Rows, type RowColumn } from '../fields/rows';
 import { isBlank } from '../model/draft';
 import { market } from '../store/session';
 import { forwardsWords } from './base-card';
+import { Distributions } from './distributions';
 import { Card, type CardView } from './card';
 import { ForwardsEditor } from './forwards-editor';
 import { said, twoSides } from './words';
@@ -45,6 +46,17 @@ const proportionalColumns: readonly RowColumn[] = [
   { ...low, holds: 'percent' },
   { ...high, holds: 'percent' },
 ];
+
+/** What a distribution has beside the columns: nothing out of the usual. */
+const emptyDetails = {
+  status: '',
+  type: '',
+  treatment: '',
+  currency: '',
+  forwardRate: '',
+  passBid: '',
+  passOffer: '',
+};
 
 function counted(count: number, one: string, many: string): string {
   return `${count} ${count === 1 ? one : many}`;
@@ -87,8 +99,10 @@ export function IncomeCard({ alwaysOpen }: CardView) {
         path="market/income/cash"
         at="/market/income/cash"
         columns={cashColumns}
+        rest={emptyDetails}
       />
       <p class="field-hint">Rows copied from a spreadsheet paste into any cell. A cost is a negative amount.</p>
+      <Distributions />
       <h4>As a share of the price</h4>
       <Rows
         name="Income as a share of the price"

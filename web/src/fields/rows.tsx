@@ -24,10 +24,12 @@ interface RowsProps {
   readonly columns: readonly RowColumn[];
   /** How many members of the request's list come before the rows. */
   readonly before?: number;
+  /** What a row has beside its columns, where nothing has been typed yet. */
+  readonly rest?: Readonly<Record<string, string>>;
 }
 
-function blankRow(columns: readonly RowColumn[], id: number): Row {
-  return { ...Object.fromEntries(columns.map(({ name }) => [name, ''])), id } as unknown as Row;
+function blankRow(columns: readonly RowColumn[], rest: Readonly<Record<string, string>>, id: number): Row {
+  return { ...rest, ...Object.fromEntries(columns.map(({ name }) => [name, ''])), id } as unknown as Row;
 }
 
 /** What is wrong in a row, each with the column's name. */
@@ -42,11 +44,11 @@ function rowFaults(at: string, columns: readonly RowColumn[]): readonly string[]
 }
 
 /** A table of inputs: typing in its last row, which is blank, adds one; rows copied from a spreadsheet paste into any cell. */
-export function Rows({ name, rowName, path, at, columns, before = 0 }: RowsProps) {
+export function Rows({ name, rowName, path, at, columns, before = 0, rest = {} }: RowsProps) {
   const id = useId();
   const rows = (valueOf(path) ?? []) as readonly Row[];
   const indexes = sentIndexes(rows);
-  const shown = [...rows, blankRow(columns, nextId(rows))];
+  const shown = [...rows, blankRow(columns, rest, nextId(rows))];
   const listFault = faultAt(at);
 
   const setCell = (index: number, column: string, text: string): void => {
@@ -66,7 +68,7 @@ export function Rows({ name, rowName, path, at, columns, before = 0 }: RowsProps
     const { decimal, locale } = format.peek();
     const pasted = readRows(text, columns, { locale, after: built.peek().request.market.asOf }, decimal);
     const first = nextId(rows);
-    const added = pasted.map((cells, place) => ({ ...cells, id: first + place }));
+    const added = pasted.map((cells, place) => ({ ...rest, ...cells, id: first + place }));
     const before = rows.slice(0, index).filter((row) => !isBlank(row));
     const after = rows.slice(index).filter((row) => !isBlank(row));
     edit(path, [...before, ...added, ...after]);

@@ -58,6 +58,10 @@ const forwards: Shape = {
   before: emptyForwards,
 };
 
+/** Choices and texts of rows that earlier versions did not have: empty there. */
+const lately = (oneOf: readonly string[]): Shape => ({ added: { oneOf }, before: '' });
+const lateText: Shape = { added: text, before: '' };
+
 const market = members({
   asOf: text,
   asset: members({
@@ -69,7 +73,13 @@ const market = members({
   funding,
   discount: members({ same: 'flag', curve }),
   income: members({
-    cash: rows(texts('ex', 'pay', 'amount', 'low', 'high')),
+    cash: rows({
+      ...texts('ex', 'pay', 'amount', 'low', 'high'),
+      status: lately(['', 'declared', 'estimated']),
+      type: lately(['', 'ordinary', 'special']),
+      treatment: lately(['', 'in-price', 'passed-through', 'adjusts-contract']),
+      ...Object.fromEntries(['currency', 'forwardRate', 'passBid', 'passOffer'].map((name) => [name, lateText])),
+    }),
     proportional: rows(texts('ex', 'fraction', 'low', 'high')),
     yieldIs: { added: { oneOf: ['rate', 'contracts'] }, before: 'rate' },
     yield: rate,

@@ -361,6 +361,15 @@ function income(draft: MarketDraft['income'], read: Reader): object | undefined 
       amount: read.number(row.amount, 'price', `${place}/amount`),
       low: read.number(row.low, 'price', `${place}/low`),
       high: read.number(row.high, 'price', `${place}/high`),
+      status: row.status || undefined,
+      type: row.type || undefined,
+      treatment: row.treatment || undefined,
+      currency: row.currency.trim() === '' ? undefined : row.currency.trim().toUpperCase(),
+      forwardRate: read.number(row.forwardRate, 'price', `${place}/forwardRate`),
+      passThrough: members({
+        bid: read.number(row.passBid, 'percent', `${place}/passThrough/bid`),
+        offer: read.number(row.passOffer, 'percent', `${place}/passThrough/offer`),
+      }),
     }),
   );
   const proportional = sent(draft.proportional, `${at}/proportional`, (row, place) =>

@@ -143,6 +143,15 @@ export interface CashRow {
   readonly amount: string;
   readonly low: string;
   readonly high: string;
+  readonly status: '' | 'declared' | 'estimated';
+  readonly type: '' | 'ordinary' | 'special';
+  readonly treatment: '' | 'in-price' | 'passed-through' | 'adjusts-contract';
+  /** Of the amounts, where it is not the asset's, with what one of it is worth on the day of payment. */
+  readonly currency: string;
+  readonly forwardRate: string;
+  /** Of this distribution alone. */
+  readonly passBid: string;
+  readonly passOffer: string;
 }
 export interface ProportionalRow {
   readonly id: number;

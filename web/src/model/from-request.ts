@@ -259,6 +259,16 @@ function income(from: Market['income'], write: Writer): MarketDraft['income'] {
       amount: write.number(row.amount, 'price'),
       low: write.number(row.low, 'price'),
       high: write.number(row.high, 'price'),
+      status: row.status ?? '',
+      type: row.type ?? '',
+      treatment: row.treatment ?? '',
+      currency: row.currency ?? '',
+      forwardRate: write.number(row.forwardRate, 'price'),
+      passBid: write.number(row.passThrough === undefined ? undefined : both<number>(row.passThrough).bid, 'percent'),
+      passOffer: write.number(
+        row.passThrough === undefined ? undefined : both<number>(row.passThrough).offer,
+        'percent',
+      ),
     })),
     proportional: (from.proportional ?? []).map((row, index) => ({
       id: index + 1,

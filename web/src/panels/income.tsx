@@ -7,6 +7,8 @@ type Row = NonNullable<QuoteResult['income']>[number];
 /** Why a distribution is in the price or not. */
 export function incomeReason({ reason }: Pick<Row, 'reason'>, { dates }: Pick<QuoteResult, 'dates'>): string {
   if (reason === 'counted') return 'counted';
+  if (reason === 'passed-through') return 'not in it: passed on to the client when it is paid';
+  if (reason === 'adjusts-contract') return 'not in it: the contract is adjusted on the ex date';
   if (reason === 'before-hold')
     return `left out: ex no later than ${formatDate(dates.holdFrom)}, before the hedge is held`;
   return `left out: ex after maturity, ${formatDate(dates.maturity)}`;
@@ -61,7 +63,13 @@ export function Income({ request, result }: { readonly request: QuoteRequest; re
                 <td>{incomeReason(row, result)}</td>
                 <td class="num">{row.counted ? formatNumber(row.units, 6) : ''}</td>
                 <td class="num">{row.counted && row.factor ? formatNumber(row.factor, 6) : ''}</td>
-                <td class="num">{row.counted ? formatNumber(row.atSettlement, digits) : ''}</td>
+                <td class="num">
+                  {row.counted
+                    ? formatNumber(row.atSettlement, digits)
+                    : row.wouldTake
+                      ? `would take ${formatNumber(row.wouldTake, digits)}`
+                      : ''}
+                </td>
               </tr>
             ))}
           </tbody>
