@@ -1,18 +1,15 @@
-import { Segmented } from '../fields/choice';
 import { Field } from '../fields/field';
 import { faultAt } from '../fields/text-input';
 import type { ScenarioRow } from '../model/draft';
-import { emptyFixedCurve, nextId } from '../model/draft';
+import { emptyCurve, nextId } from '../model/draft';
 import { edit, valueOf } from '../store/session';
-import { FlatEditor } from './flat-editor';
-import { InstrumentsEditor } from './instruments-editor';
-import { PillarsEditor } from './pillars-editor';
+import { CurveEditor } from './curve-editor';
 
 /** Whole curves, each with its weight: the discount factor is their weighted mean. */
 export function ScenariosEditor({ path, at }: { readonly path: string; readonly at: string }) {
   const rowsPath = `${path}/rows`;
   const rows = (valueOf(rowsPath) ?? []) as readonly ScenarioRow[];
-  const add = (): void => edit(rowsPath, [...rows, { id: nextId(rows), weight: '', curve: emptyFixedCurve }]);
+  const add = (): void => edit(rowsPath, [...rows, { id: nextId(rows), weight: '', curve: emptyCurve }]);
   const listFault = faultAt(`${at}/scenarios`);
   return (
     <>
@@ -37,20 +34,7 @@ export function ScenariosEditor({ path, at }: { readonly path: string; readonly 
                 Take out
               </button>
             </div>
-            <Segmented
-              label={`Scenario ${index + 1} is`}
-              path={`${place}/curve/kind`}
-              options={[
-                { value: 'flat', name: 'A flat rate' },
-                { value: 'pillars', name: 'A curve' },
-                { value: 'instruments', name: 'Instruments' },
-              ]}
-            />
-            {row.curve.kind === 'flat' && <FlatEditor path={`${place}/curve/flat`} at={`${pointer}/curve`} />}
-            {row.curve.kind === 'pillars' && <PillarsEditor path={`${place}/curve/pillars`} at={`${pointer}/curve`} />}
-            {row.curve.kind === 'instruments' && (
-              <InstrumentsEditor path={`${place}/curve/instruments`} at={`${pointer}/curve`} />
-            )}
+            <CurveEditor label={`Scenario ${index + 1}`} path={`${place}/curve`} at={`${pointer}/curve`} />
           </fieldset>
         );
       })}

@@ -1,5 +1,5 @@
 /** The shape of a draft as it is kept and saved. */
-import { emptyAnalysis, emptyForwards, emptyInstruments, fixedKinds, models } from '../model/draft';
+import { emptyAnalysis, emptyCurve, emptyForwards, emptyInstruments, fixedKinds, models } from '../model/draft';
 import type { Shape } from './shape';
 
 const text = 'text';
@@ -28,21 +28,39 @@ const instruments: Shape = {
   before: emptyInstruments,
 };
 const fixedKind: Shape = { oneOf: fixedKinds };
-const fixedCurve = members({ kind: fixedKind, flat: rate, pillars, instruments });
 const shortRate = members(texts('r0', 'meanReversion', 'longRun', 'volatility'));
-const curve = members({
-  kind: { oneOf: [...fixedKinds, 'random'] },
+/** A scenario has a curve of its own, which may have scenarios in turn. */
+const scenario: Shape = {
+  members: {
+    id: 'number',
+    weight: text,
+    get curve(): Shape {
+      return curve;
+    },
+  },
+};
+/** Scenarios of earlier versions held a flat rate or points alone: what makes a random curve is added to them. */
+const random: Readonly<Record<Exclude<keyof typeof emptyCurve, 'kind' | 'flat' | 'pillars' | 'instruments'>, Shape>> = {
   model: { oneOf: models },
-  flat: rate,
-  pillars,
-  instruments,
   vasicek: shortRate,
   coxIngersollRoss: shortRate,
   hoLee: members({ volatility: text, fit: fixedKind }),
   hullWhite: members({ meanReversion: text, volatility: text, fit: fixedKind }),
   meetings: members({ overnight: text, rows: rows({ date: text, moves: rows(texts('by', 'probability')) }) }),
-  scenarios: members({ rows: rows({ weight: text, curve: fixedCurve }) }),
+  scenarios: members({ rows: { list: scenario } }),
   samples: members({ text, against: { added: { oneOf: ['', ...fixedKinds] }, before: '' } }),
+};
+const curve = members({
+  kind: { oneOf: [...fixedKinds, 'random'] },
+  flat: rate,
+  pillars,
+  instruments,
+  ...Object.fromEntries(
+    Object.entries(random).map(([name, added]) => [
+      name,
+      { added, before: emptyCurve[name as keyof typeof random] } satisfies Shape,
+    ]),
+  ),
 });
 const funding = members({ curve, lendSpread: text, borrowSpread: text });
 const bothSides = members(texts('bid', 'offer'));

@@ -257,7 +257,7 @@ function randomCurve(draft: CurveDraft, at: string, read: Reader): object {
         model: 'scenarios',
         scenarios: draft.scenarios.rows.map((row, index) => ({
           ...members({ weight: read.number(row.weight, 'percent', `${at}/scenarios/${index}/weight`) }),
-          curve: fixedCurve(row.curve, `${at}/scenarios/${index}/curve`, read),
+          curve: curve(row.curve, `${at}/scenarios/${index}/curve`, read),
         })),
       };
     case 'samples':

@@ -77,7 +77,8 @@ export interface MeetingRow {
 export interface ScenarioRow {
   readonly id: number;
   readonly weight: string;
-  readonly curve: FixedCurveDraft;
+  /** Any curve, a random one too. */
+  readonly curve: CurveDraft;
 }
 export const models = [
   'vasicek',
@@ -271,12 +272,6 @@ export const emptyInstruments: InstrumentsDraft = {
   payments: 'annual',
   rows: [],
   turns: [],
-};
-export const emptyFixedCurve: FixedCurveDraft = {
-  kind: 'flat',
-  flat: emptyRate,
-  pillars: emptyPillars,
-  instruments: emptyInstruments,
 };
 const emptyShortRate: ShortRateDraft = { r0: '', meanReversion: '', longRun: '', volatility: '' };
 export const emptyCurve: CurveDraft = {

@@ -12,7 +12,7 @@ import type {
   QuotedForwardsDraft,
   RateDraft,
 } from './draft';
-import { emptyCurve, emptyDeal, emptyFixedCurve, emptyFunding } from './draft';
+import { emptyCurve, emptyDeal, emptyFunding } from './draft';
 import { marginKind } from './build';
 
 class Writer {
@@ -93,12 +93,6 @@ function kindOf(from: FixedCurve): FixedCurveDraft['kind'] {
   return typeof from === 'number' || !('kind' in from) ? 'flat' : from.kind;
 }
 
-/** A scenario's curve; the page has no editor for a random one within a scenario, so its texts are left empty. */
-function scenarioCurve(from: Curve, write: Writer): FixedCurveDraft {
-  if (typeof from === 'object' && 'kind' in from && from.kind === 'random') return emptyFixedCurve;
-  return { ...emptyFixedCurve, kind: kindOf(from), ...fixed(from, write) };
-}
-
 function onto(draft: CurveDraft, from: Curve, write: Writer): CurveDraft {
   if (typeof from === 'number' || !('kind' in from) || from.kind !== 'random')
     return { ...draft, kind: kindOf(from), ...fixed(from, write) };
@@ -148,7 +142,7 @@ function onto(draft: CurveDraft, from: Curve, write: Writer): CurveDraft {
           rows: from.scenarios.map((scenario, index) => ({
             id: index + 1,
             weight: write.number(scenario.weight, 'percent'),
-            curve: scenarioCurve(scenario.curve, write),
+            curve: onto(emptyCurve, scenario.curve, write),
           })),
         },
       };
