@@ -36,7 +36,12 @@ outcome::Outcome<FuturesRow> rowOf(const Market& market, const FuturesAsked& ask
     row.convexity = discounting::integralVariance(rate.meanReversion, rate.volatility, years);
     row.ratio = numeric::exp(row.covariance + row.convexity);
     row.futures = row.forward * row.ratio;
-    if (!std::isfinite(row.futures)) {
+    row.difference = row.forward * numeric::expm1(row.covariance + row.convexity);
+    row.covarianceInPrice = row.forward * numeric::expm1(row.covariance);
+    row.convexityInPrice = row.forward * numeric::exp(row.covariance) * numeric::expm1(row.convexity);
+    row.onQuantity = asked.quantity * row.difference;
+    if (!std::isfinite(row.futures) || !std::isfinite(row.onQuantity) ||
+        !std::isfinite(row.covarianceInPrice) || !std::isfinite(row.convexityInPrice)) {
         return outcome::Fault{
             asked.places[index], "not-finite",
             "The futures price is too large to be a number: volatilities this high over so long a time "

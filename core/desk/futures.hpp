@@ -16,6 +16,7 @@ struct FuturesAsked {
     std::vector<std::string> places;           ///< where each stands
     double volatility = 0.0;
     double correlation = 0.0;
+    double quantity = 1.0; ///< units, positive
 };
 
 /// The futures price beside the forward. The ratio is e to the sum of the two terms.
@@ -26,7 +27,11 @@ struct FuturesRow {
     double ratio = 1.0;
     double covariance =
         0.0; ///< ρ·s·σ·(t − B)/κ: gains come in when rates are high, and earn them, or the other way
-    double convexity = 0.0; ///< V: of the random factor itself
+    double convexity = 0.0;         ///< V: of the random factor itself
+    double difference = 0.0;        ///< futures − forward, a unit: the sum of the two parts
+    double covarianceInPrice = 0.0; ///< forward·(e^covariance − 1)
+    double convexityInPrice = 0.0;  ///< the rest, on top of it
+    double onQuantity = 0.0;        ///< the difference times the quantity
 };
 struct Futures {
     std::vector<FuturesRow> rows;

@@ -23,6 +23,20 @@ struct PriceLaw {
         return mean *
                numeric::exp(logDeviation * (numeric::normalQuantile(probability) - logDeviation / 2.0));
     }
+    /// P(price < level); there is a deviation.
+    [[nodiscard]] double probabilityBelow(double level) const {
+        if (level <= 0.0) {
+            return 0.0;
+        }
+        return numeric::normalProbability(numeric::log(level / mean) / logDeviation + logDeviation / 2.0);
+    }
+    /// P(price > level); there is a deviation.
+    [[nodiscard]] double probabilityAbove(double level) const {
+        if (level <= 0.0) {
+            return 1.0;
+        }
+        return numeric::normalProbability(-(numeric::log(level / mean) / logDeviation + logDeviation / 2.0));
+    }
 };
 
 CoverAt coverAt(double share, double fair, const PriceLaw& law, double loading) {
@@ -42,9 +56,23 @@ CoverAt coverAt(double share, double fair, const PriceLaw& law, double loading) 
         }
     }
     for (const double probability : probabilities) {
-        // The result falls as the price rises.
+        // Sold, the result falls as the price rises; bought, it rises with it.
         const double left = open == 0.0 ? 0.0 : open * (fair - law.quantile(1.0 - probability));
         cover.quantiles.push_back({probability, (cover.sell - fair) + left});
+        if (cover.buy) {
+            const double gained = open == 0.0 ? 0.0 : open * (law.quantile(probability) - fair);
+            cover.buyQuantiles.push_back({probability, (fair - *cover.buy) + gained});
+        }
+    }
+    // Without a deviation the result is zero for certain, which is no loss.
+    if (cover.deviation == 0.0) {
+        cover.buyLossProbability = 0.0;
+        return cover;
+    }
+    // Where the result is zero the price stands so far from F that the charge is used up.
+    cover.lossProbability = law.probabilityAbove(fair + (cover.sell - fair) / open);
+    if (cover.buy) {
+        cover.buyLossProbability = law.probabilityBelow(fair - (fair - *cover.buy) / open);
     }
     return cover;
 }
@@ -89,6 +117,16 @@ outcome::Outcome<HedgeCover> hedgeCover(const forward::Market& market, const Hed
             "", "not-finite",
             "Growth and volatility this high over so long a time give no number: take them smaller, or a "
             "nearer maturity."};
+    }
+    result.onQuantity.sell = asked.quantity * (result.asked.sell - result.fair);
+    result.onQuantity.deviation = asked.quantity * result.asked.deviation;
+    if (result.asked.buy) {
+        result.onQuantity.buy = asked.quantity * (result.fair - *result.asked.buy);
+    }
+    if (!std::isfinite(result.onQuantity.sell) || !std::isfinite(result.onQuantity.deviation)) {
+        return outcome::Fault{
+            "/quantity", "not-finite",
+            "On this quantity the figures are too large to be numbers: take a smaller one."};
     }
     if (!result.asked.buy) {
         return outcome::Fault{

@@ -150,6 +150,44 @@ outcome::Outcome<SimulatedPart> partOf(const Market& market, const Deal& deal, c
     return part;
 }
 
+/// The ends of the bins, one more than there are.
+std::vector<double> edgesOf(const Bins& bins) {
+    std::vector<double> edges;
+    for (std::size_t i = 0; i < bins.count; ++i) {
+        edges.push_back(bins.low +
+                        (bins.high - bins.low) * static_cast<double>(i) / static_cast<double>(bins.count));
+    }
+    edges.push_back(bins.high);
+    return edges;
+}
+
+/// How many of `paths` outcomes the law of D(settlement) puts between neighbouring edges; nothing where it is
+/// not known or where single outcomes have odds of their own, which a bin holds whole or not at all.
+std::vector<double> lawCountsOf(const discounting::RandomDiscount& random, Date settlement,
+                                const std::vector<double>& edges, long paths) {
+    const auto law = random.law(settlement);
+    if (!law || !law.value()->isContinuous()) {
+        return {};
+    }
+    std::vector<double> counts;
+    double below = law.value()->probabilityAtMost(numeric::log(edges.front()));
+    for (std::size_t i = 1; i < edges.size(); ++i) {
+        const double upTo = law.value()->probabilityAtMost(numeric::log(edges[i]));
+        counts.push_back(static_cast<double>(paths) * std::max(0.0, upTo - below));
+        below = upTo;
+    }
+    return counts;
+}
+
+/// Nothing where there is no error to measure by.
+std::optional<double> errorsApart(double estimate, double closedForm, const std::optional<double>& error) {
+    if (!error || !(*error > 0.0)) {
+        return std::nullopt;
+    }
+    const double apart = (estimate - closedForm) / *error;
+    return std::isfinite(apart) ? std::optional(apart) : std::nullopt;
+}
+
 // ---- the fan
 // ---------------------------------------------------------------------------------------------------
 
@@ -197,13 +235,38 @@ RateFan exactFan(const discounting::RandomDiscount& random, const discounting::N
     return fan;
 }
 
+/// Paths that are looked at: through the fan's dates.
+outcome::Outcome<Simulation> fanSimulation(const discounting::Curve& curve,
+                                           const discounting::SimulationPlan& plan,
+                                           const std::vector<Date>& ends) {
+    const Payments payments{ends, std::vector<double>(ends.size(), 0.0), ends.size() - 1, 0.0};
+    return Simulation::make(curve, payments, plan, {});
+}
+
+/// So few paths show how far they spread where their first number is evenly spread.
+discounting::SimulationPlan drawnPlan(std::uint64_t seed) {
+    return {discounting::SimulationMethod::quasi, 2 * discounting::scramblings * drawnPaths, seed};
+}
+
+/// The average rate of each step of one path, from its ln D at the ends of the steps.
+std::vector<double> ratesOf(const std::vector<std::vector<double>>& logs, std::size_t path, Date asOf,
+                            const std::vector<Date>& ends) {
+    std::vector<double> rates;
+    Date from = asOf;
+    double before = 0.0;
+    for (std::size_t i = 0; i < ends.size(); ++i) {
+        rates.push_back((before - logs[i][path]) / dates::years(from, ends[i]));
+        before = logs[i][path];
+        from = ends[i];
+    }
+    return rates;
+}
+
 /// From the first paths of the plan's own random numbers: the order statistic of each probability.
 outcome::Outcome<RateFan> simulatedFan(const discounting::Curve& curve, std::uint64_t seed,
                                        const std::vector<Date>& ends) {
-    const Payments payments{ends, std::vector<double>(ends.size(), 0.0), ends.size() - 1, 0.0};
-    const discounting::SimulationPlan plan{discounting::SimulationMethod::pseudo,
-                                           2 * static_cast<long>(fanPaths), seed};
-    const auto simulation = Simulation::make(curve, payments, plan, {});
+    const auto simulation = fanSimulation(
+        curve, {discounting::SimulationMethod::pseudo, 2 * static_cast<long>(fanPaths), seed}, ends);
     if (!simulation) {
         return simulation.faults();
     }
@@ -244,17 +307,24 @@ outcome::Outcome<RateFan> fanOf(const discounting::Curve& curve, Date settlement
     }
     RateFan whole = std::move(fan).value();
     whole.probabilities.assign(fanProbabilities.begin(), fanProbabilities.end());
+    if (const auto simulation = fanSimulation(curve, drawnPlan(seed), ends)) {
+        const std::vector<std::vector<double>> logs =
+            simulation.value().firstPaths(static_cast<std::size_t>(drawnPaths));
+        for (std::size_t path = 0; path < static_cast<std::size_t>(drawnPaths); ++path) {
+            whole.drawn.push_back(ratesOf(logs, path, curve.asOf(), ends));
+        }
+    }
     return whole;
 }
 
 // ---- the whole
 // -------------------------------------------------------------------------------------------------
 
-std::vector<ForwardReckoned> reckonings(const Market& market, const Deal& deal,
+std::vector<ForwardReckoned> reckonings(const Deal& deal, const forward::RandomView& view,
                                         const discounting::SimulationEstimate& estimate, double quantity) {
     const double fair = deal.fair.forward;
     const auto row = [&](const char* code, double forward) {
-        ForwardReckoned reckoned{code, std::nullopt, std::nullopt, std::nullopt};
+        ForwardReckoned reckoned{code, std::nullopt, std::nullopt, std::nullopt, std::nullopt};
         if (std::isfinite(forward)) {
             reckoned.forward = forward;
             reckoned.difference = forward - fair;
@@ -262,9 +332,12 @@ std::vector<ForwardReckoned> reckonings(const Market& market, const Deal& deal,
         }
         return reckoned;
     };
-    const auto view = forward::randomView(market, deal.schedule, deal.fair);
-    return {row("closed-form", fair), row("simulated", estimate.price),
-            row("average-rate", view->averageRateForward), row("path-by-path", estimate.meanRatio)};
+    ForwardReckoned simulated = row("simulated", estimate.price);
+    if (estimate.priceError) {
+        simulated.errorOnQuantity = quantity * *estimate.priceError;
+    }
+    return {row("closed-form", fair), std::move(simulated), row("average-rate", view.averageRateForward),
+            row("path-by-path", estimate.meanRatio)};
 }
 
 /// What stands against the parts as they were handed in; their places are `/parts/…`.
@@ -305,7 +378,7 @@ outcome::Outcome<Simulated> wholeOf(const Market& market, const SimulationAsked&
     std::sort(parts.begin(), parts.end(),
               [](const SimulatedPart& one, const SimulatedPart& other) { return one.from < other.from; });
     Simulated result;
-    result.counts.assign(deal.bins.count + 2, 0);
+    BinCounts counts(deal.bins.count + 2, 0);
     std::vector<long> indices;
     std::vector<BlockSums> sums;
     for (const SimulatedPart& part : parts) {
@@ -314,9 +387,12 @@ outcome::Outcome<Simulated> wholeOf(const Market& market, const SimulationAsked&
             indices.push_back(block++);
             sums.push_back(one);
         }
-        for (std::size_t bin = 0; bin < result.counts.size(); ++bin) {
-            result.counts[bin] += part.counts[bin];
+        for (std::size_t bin = 0; bin < counts.size(); ++bin) {
+            counts[bin] += part.counts[bin];
         }
+    }
+    for (const std::int64_t count : counts) {
+        result.counts.push_back(static_cast<double>(count) / static_cast<double>(discounting::countsAPath));
     }
     result.estimate = deal.simulation.estimate(indices, sums);
     if (result.estimate.priceError) {
@@ -324,11 +400,19 @@ outcome::Outcome<Simulated> wholeOf(const Market& market, const SimulationAsked&
         result.interval95 = {result.estimate.price - reach, result.estimate.price + reach};
     }
     result.closedForm = {deal.fair.settlementFactor, deal.fair.forward};
+    result.apart = {
+        errorsApart(result.estimate.factor, result.closedForm.factor, result.estimate.factorError),
+        errorsApart(result.estimate.price, result.closedForm.forward, result.estimate.priceError)};
     result.pathBias = market.funding.curve->random()->pathBias();
     result.blocksDone = static_cast<long>(sums.size());
     result.blocks = deal.simulation.plan().blocks();
     result.bins = deal.bins;
-    result.forwards = reckonings(market, deal, result.estimate, asked.quantity);
+    result.edges = edgesOf(deal.bins);
+    result.lawCounts = lawCountsOf(*market.funding.curve->random(), deal.schedule.settlement, result.edges,
+                                   result.estimate.paths);
+    const auto view = forward::randomView(market, deal.schedule, deal.fair);
+    result.averageRateFactor = view->averageRateFactor;
+    result.forwards = reckonings(deal, *view, result.estimate, asked.quantity);
     result.notices = std::move(deal.notices);
     if (discounting::isCarriedByFew(*market.funding.curve->random(), deal.schedule.settlement,
                                     asked.plan.paths)) {

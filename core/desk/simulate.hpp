@@ -42,8 +42,16 @@ struct FactorAndForward {
 struct ForwardReckoned {
     std::string code; ///< `closed-form`, `simulated`, `average-rate`, `path-by-path`
     std::optional<double> forward;
-    std::optional<double> difference; ///< from the closed form, a unit
-    std::optional<double> onQuantity; ///< the difference times the quantity
+    std::optional<double> difference;      ///< from the closed form, a unit
+    std::optional<double> onQuantity;      ///< the difference times the quantity
+    std::optional<double> errorOnQuantity; ///< the standard error times the quantity, where simulated
+};
+
+/// How far the estimate lies from the closed form, in standard errors; none where there is no error to
+/// measure by.
+struct ErrorsApart {
+    std::optional<double> factor;
+    std::optional<double> forward;
 };
 
 /// The average short rate over a step of time, as it spreads over the paths.
@@ -57,6 +65,7 @@ struct RateFan {
     long paths = 0;
     std::vector<double> probabilities;
     std::vector<RateStep> steps;
+    std::vector<std::vector<double>> drawn; ///< some single paths' rates, one a step, to be looked at
 };
 
 /// What random discounting comes to by simulation, beside the closed form.
@@ -65,12 +74,17 @@ struct Simulated {
     discounting::SimulationEstimate estimate;
     std::optional<income::TwoWay<double>> interval95; ///< of the forward, around the estimate: low, high
     FactorAndForward closedForm;
+    ErrorsApart apart;
+    double averageRateFactor = 0.0; ///< e^(E[ln D(T_s)]), beside the closed form
     double pathBias =
         0.0; ///< relative bound of how far the mean factor can be off however many paths there are
     long blocksDone = 0;
     long blocks = 0;
     discounting::Bins bins;
-    discounting::BinCounts counts;
+    std::vector<double> counts; ///< outcomes below the bins, in each, above them, in paths by their weights
+    std::vector<double> edges;  ///< of the bins, one more than there are
+    std::vector<double> lawCounts; ///< how many of so many paths the law puts into each bin, where it is
+                                   ///< known and has no single points
     std::vector<ForwardReckoned> forwards;
     std::optional<RateFan> fan;
     outcome::Notices notices;
@@ -81,6 +95,8 @@ struct Simulated {
 inline constexpr double mostSimulationWork = 1e10;
 /// How many outcomes of D(T_s) are told apart.
 inline constexpr std::size_t simulationBins = 40;
+/// How many single paths a fan draws: a power of two.
+inline constexpr long drawnPaths = 8;
 
 /// Simulates the fair forward: spot and every distribution that counts are discounted along the same paths.
 /// All blocks, or the parts handed in that together hold each block at most once (`overlap`, `out-of-range`).

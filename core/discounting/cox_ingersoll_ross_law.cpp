@@ -38,6 +38,7 @@ class IntegratedRateLaw final : public LogLaw {
         return -integralQuantile(1.0 - probability, probability);
     }
 
+    [[nodiscard]] bool isContinuous() const override { return true; }
     [[nodiscard]] double work() const override { return 200.0; }
 
   private:

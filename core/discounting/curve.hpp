@@ -42,6 +42,8 @@ class LogLaw {
     /// single points a sum of probabilities that misses by no more than `probabilityRounding` reaches it all
     /// the same.
     [[nodiscard]] virtual double quantile(double probability) const = 0;
+    /// Whether no single outcome has odds of its own.
+    [[nodiscard]] virtual bool isContinuous() const { return false; }
     /// How long one `probabilityAtMost` takes, in units of a normal law's (about 0.1 µs); mixtures refuse to
     /// grow without end.
     [[nodiscard]] virtual double work() const { return 1.0; }

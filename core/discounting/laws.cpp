@@ -21,6 +21,7 @@ class NormalLaw final : public LogLaw {
     [[nodiscard]] double quantile(double probability) const override {
         return mean_ + deviation_ * numeric::normalQuantile(probability);
     }
+    [[nodiscard]] bool isContinuous() const override { return true; }
 
   private:
     double mean_;
@@ -177,6 +178,10 @@ class MixtureLaw final : public LogLaw {
         return high;
     }
 
+    [[nodiscard]] bool isContinuous() const override {
+        return std::all_of(parts_.begin(), parts_.end(),
+                           [](const LogLawPtr& part) { return part->isContinuous(); });
+    }
     [[nodiscard]] double work() const override {
         double sum = 0.0;
         for (const LogLawPtr& part : parts_) {

@@ -75,6 +75,7 @@ class NormalPaths final : public PathMaker {
           reflection_(directionOf(meanReversion, years, target)) {}
 
     [[nodiscard]] std::size_t numbers() const override { return 2 * steps_.size() - 1; }
+    [[nodiscard]] bool firstIsUnbounded() const override { return true; }
     [[nodiscard]] double work() const override { return 2.0 * static_cast<double>(steps_.size()); }
 
     void make(const std::uint32_t* words, std::size_t count, double* logFactors) const override {

@@ -19,6 +19,9 @@ class PathMaker {
     virtual ~PathMaker() = default;
     /// How many random words a path takes; the first matter most.
     [[nodiscard]] virtual std::size_t numbers() const = 0;
+    /// Whether the first number's effect has no bound at the ends of its range, as a normal number's has
+    /// none: evenly spread points then do best where they lie closer together there, each weighing less.
+    [[nodiscard]] virtual bool firstIsUnbounded() const { return false; }
     /// How many values one path has to work out, roughly: what its time is proportional to.
     [[nodiscard]] virtual double work() const = 0;
     /// The first `count` paths of a tile; `words` evenly spread over all 32-bit words make paths spread as

@@ -43,9 +43,23 @@ long scramblingOf(long block) {
     return block % scramblings;
 }
 
-/// What a mean over terms tells of itself.
+/// A point that lies where the word says, set closer to the ends: u = 3v² − 2v³, worked out from the nearer
+/// end, so that complements stay complements.
+struct Stretched {
+    std::uint32_t word = 0;
+    double weight = 1.0; ///< du/dv
+};
+Stretched stretched(std::uint32_t word) {
+    constexpr std::uint32_t middle = 1U << 31U;
+    const std::uint32_t fromEnd = word < middle ? word : ~word;
+    const double v = (static_cast<double>(fromEnd) + 0.5) * 0x1p-32;
+    const auto moved = static_cast<std::uint32_t>(v * v * (3.0 - 2.0 * v) * 0x1p32);
+    return {word < middle ? moved : ~moved, 6.0 * v * (1.0 - v)};
+}
+
+/// What a mean over pairs tells of itself.
 struct Spread {
-    double terms = 0.0;
+    double weight = 0.0;
     double factor = 0.0; ///< means
     double value = 0.0;
 };
@@ -111,6 +125,7 @@ bool isCarriedByFew(const RandomDiscount& random, Date u, long paths) {
 struct Simulation::Tile {
     std::vector<std::uint32_t> words;
     std::vector<double> logFactors;
+    std::vector<double> weight;               ///< by path; 0 beyond those that are asked for
     std::vector<double> factor, value, ratio; ///< by path, less what is expected
     BinCounts* counts = nullptr;
 };
@@ -168,6 +183,21 @@ void Simulation::fillWords(long block, long term, Tile& tile) const {
     }
 }
 
+/// The weights of a tile's paths, 1 each, or, where their first number is unbounded and evenly spread, its
+/// points stretched.
+void Simulation::weigh(Tile& tile, std::size_t count) const {
+    std::fill(tile.weight.begin(), tile.weight.end(), 0.0);
+    if (!isQuasi(plan_) || !maker_->firstIsUnbounded()) {
+        std::fill_n(tile.weight.begin(), count, 1.0);
+        return;
+    }
+    for (std::size_t path = 0; path < count; ++path) {
+        const Stretched point = stretched(tile.words[path]);
+        tile.words[path] = point.word;
+        tile.weight[path] = point.weight;
+    }
+}
+
 /// Factor, value and ratio of each path from its ln D; those beyond `count` are 0.
 void Simulation::measure(Tile& tile, std::size_t count) const {
     const double expectedRatio = expectedValue_ / expectedFactor_;
@@ -196,7 +226,8 @@ void Simulation::measure(Tile& tile, std::size_t count) const {
         } else if (factor >= bins_.low) {
             bin = 1 + static_cast<std::size_t>(std::min((factor - bins_.low) * binsPerUnit, last));
         }
-        ++(*tile.counts)[bin];
+        (*tile.counts)[bin] +=
+            static_cast<std::int64_t>(tile.weight[path] * static_cast<double>(countsAPath) + 0.5);
         tile.factor[path] = factor - expectedFactor_;
     }
     for (std::size_t path = count; path < lanes::count * ((count + lanes::count - 1) / lanes::count);
@@ -215,6 +246,7 @@ BlockSums Simulation::block(long index, BinCounts& counts) const {
     Tile tile;
     tile.words.resize(maker_->numbers() * tilePaths);
     tile.logFactors.resize(payments_.dates.size() * tilePaths);
+    tile.weight.resize(tilePaths);
     tile.factor.resize(tilePaths);
     tile.value.resize(tilePaths);
     tile.ratio.resize(tilePaths);
@@ -222,31 +254,36 @@ BlockSums Simulation::block(long index, BinCounts& counts) const {
     std::vector<double> factors(tilePaths, 0.0);
     std::vector<double> values(tilePaths, 0.0);
 
-    LaneSum factor, value, factorSquared, product, valueSquared, ratio;
+    LaneSum weight, factor, value, factorSquared, product, valueSquared, ratio;
     for (long done = 0; done < terms; done += static_cast<long>(tilePaths)) {
         const auto count = static_cast<std::size_t>(std::min(terms - done, static_cast<long>(tilePaths)));
         fillWords(index, first + done, tile);
+        weigh(tile, count);
         maker_->make(tile.words.data(), count, tile.logFactors.data());
         measure(tile, count);
         factors.swap(tile.factor);
         values.swap(tile.value);
         for (std::size_t path = 0; path < count; path += lanes::count) {
-            ratio.add(lanes::load(&tile.ratio[path]));
+            ratio.add(lanes::load(&tile.weight[path]) * lanes::load(&tile.ratio[path]));
         }
         maker_->mirror(tile.words.data(), count, tile.logFactors.data());
         measure(tile, count);
         for (std::size_t path = 0; path < count; path += lanes::count) {
+            const Lanes w = lanes::load(&tile.weight[path]);
             const Lanes x = 0.5 * (lanes::load(&tile.factor[path]) + lanes::load(&factors[path]));
             const Lanes y = 0.5 * (lanes::load(&tile.value[path]) + lanes::load(&values[path]));
-            factor.add(x);
-            value.add(y);
-            factorSquared.add(x * x);
-            product.add(x * y);
-            valueSquared.add(y * y);
-            ratio.add(lanes::load(&tile.ratio[path]));
+            const Lanes wx = w * x;
+            const Lanes wy = w * y;
+            weight.add(w);
+            factor.add(wx);
+            value.add(wy);
+            factorSquared.add(wx * x);
+            product.add(wx * y);
+            valueSquared.add(wy * y);
+            ratio.add(w * lanes::load(&tile.ratio[path]));
         }
     }
-    return {factor.total(),  value.total(),        factorSquared.total(),
+    return {weight.total(),  factor.total(),       value.total(), factorSquared.total(),
             product.total(), valueSquared.total(), ratio.total()};
 }
 
@@ -258,6 +295,7 @@ SimulationEstimate Simulation::estimate(std::span<const long> indices,
     std::vector<Spread> bySet(static_cast<std::size_t>(scramblings));
     for (std::size_t i = 0; i < sums.size(); ++i) {
         const BlockSums& block = sums[i];
+        all.weight += block.weight;
         all.factor += block.factor;
         all.value += block.value;
         all.factorSquared += block.factorSquared;
@@ -267,18 +305,16 @@ SimulationEstimate Simulation::estimate(std::span<const long> indices,
         const long paths = plan_.pathsIn(indices[i]);
         estimate.paths += paths;
         Spread& set = bySet[static_cast<std::size_t>(scramblingOf(indices[i]))];
-        const auto pairs = paths / 2;
-        set.terms += static_cast<double>(pairs);
+        set.weight += block.weight;
         set.factor += block.factor;
         set.value += block.value;
     }
-    const auto paths = static_cast<double>(estimate.paths);
-    const double terms = paths / 2.0;
-    const double factorMean = all.factor / terms;
-    const double valueMean = all.value / terms;
+    const double weight = all.weight;
+    const double factorMean = all.factor / weight;
+    const double valueMean = all.value / weight;
     estimate.factor = expectedFactor_ + factorMean;
     estimate.price = (expectedValue_ + valueMean) / estimate.factor;
-    estimate.meanRatio = expectedValue_ / expectedFactor_ + all.ratio / paths;
+    estimate.meanRatio = expectedValue_ / expectedFactor_ + all.ratio / (2.0 * weight);
 
     // The price moves with the means of factor and value by (dy − price·dx)/factor.
     double factorVariance = 0.0;
@@ -286,10 +322,10 @@ SimulationEstimate Simulation::estimate(std::span<const long> indices,
     double independent = 0.0;
     if (isQuasi(plan_)) {
         for (const Spread& set : bySet) {
-            if (set.terms > 0.0) {
-                const double share = set.terms / terms;
-                const double x = set.factor / set.terms - factorMean;
-                const double y = set.value / set.terms - valueMean;
+            if (set.weight > 0.0) {
+                const double share = set.weight / weight;
+                const double x = set.factor / set.weight - factorMean;
+                const double y = set.value / set.weight - valueMean;
                 independent += 1.0;
                 factorVariance += squareOf(share * x);
                 priceVariance += squareOf(share * (y - estimate.price * x));
@@ -298,10 +334,10 @@ SimulationEstimate Simulation::estimate(std::span<const long> indices,
         factorVariance *= independent / (independent - 1.0);
         priceVariance *= independent / (independent - 1.0);
     } else {
-        independent = terms;
-        const double xx = all.factorSquared / terms - squareOf(factorMean);
-        const double xy = all.product / terms - factorMean * valueMean;
-        const double yy = all.valueSquared / terms - squareOf(valueMean);
+        independent = weight;
+        const double xx = all.factorSquared / weight - squareOf(factorMean);
+        const double xy = all.product / weight - factorMean * valueMean;
+        const double yy = all.valueSquared / weight - squareOf(valueMean);
         factorVariance = xx / (independent - 1.0);
         priceVariance =
             (yy - 2.0 * estimate.price * xy + squareOf(estimate.price) * xx) / (independent - 1.0);

@@ -122,6 +122,69 @@ TEST_SUITE("simulation: desk") {
               Approx(1000.0 * (*result.forwards[2].forward - *result.forwards[0].forward)).epsilon(1e-15));
     }
 
+    TEST_CASE(
+        "beside the estimate: how far apart in errors, the edges of the bins and what the law puts there") {
+        const forward::Market base = plain(forward::AssetKind::share, "2026-12-01", 100.0, 0.0);
+        const auto coxIngersollRoss =
+            discounting::coxIngersollRoss(base.asOf, {0.02, 0.4, 0.03, 0.1}).value();
+        const auto mixture =
+            discounting::scenarios(base.asOf, {{0.5, vasicekOf(base)}, {0.5, vasicekOf(base, 0.01)}}).value();
+        for (const auto& curve : {vasicekOf(base), coxIngersollRoss, mixture}) {
+            auto asked = askedFor("2029-12-03", {discounting::SimulationMethod::pseudo, 1L << 15U, 11});
+            asked.quantity = 250.0;
+            const desk::Simulated result = valueOf(desk::simulate(withFunding(base, curve), asked));
+            CHECK(*result.apart.forward ==
+                  (result.estimate.price - result.closedForm.forward) / *result.estimate.priceError);
+            CHECK(*result.apart.factor ==
+                  (result.estimate.factor - result.closedForm.factor) / *result.estimate.factorError);
+            CHECK(std::fabs(*result.apart.factor) < 4.5);
+            CHECK(*result.forwards[1].errorOnQuantity == 250.0 * *result.estimate.priceError);
+            CHECK_FALSE(result.forwards[0].errorOnQuantity.has_value());
+            CHECK(result.averageRateFactor ==
+                  Approx(std::exp(curve->random()->meanLog(result.schedule.settlement))).epsilon(1e-15));
+            CHECK(result.averageRateFactor < result.closedForm.factor);
+
+            REQUIRE(result.edges.size() == desk::simulationBins + 1);
+            CHECK(result.edges.front() == result.bins.low);
+            CHECK(result.edges.back() == result.bins.high);
+            CHECK(std::is_sorted(result.edges.begin(), result.edges.end()));
+            // The bins hold all but one in a thousand; χ² over them below its 1 in 100,000 quantile (86.6
+            // with 40 degrees of freedom: Wilson and Hilferty's approximation).
+            REQUIRE(result.lawCounts.size() == desk::simulationBins);
+            CHECK(std::accumulate(result.lawCounts.begin(), result.lawCounts.end(), 0.0) ==
+                  Approx(0.999 * static_cast<double>(result.estimate.paths)).epsilon(1e-6));
+            double chiSquared = 0.0;
+            for (std::size_t bin = 0; bin < desk::simulationBins; ++bin) {
+                const double expected = result.lawCounts[bin];
+                const double apart = static_cast<double>(result.counts[bin + 1]) - expected;
+                chiSquared += apart * apart / expected;
+            }
+            CHECK(chiSquared < 86.6);
+        }
+    }
+
+    TEST_CASE("outcomes with odds of their own have no law by bin; a certain rate no errors apart") {
+        const forward::Market base = plain(forward::AssetKind::share, "2026-12-01", 100.0, 0.0);
+        const discounting::SimulationPlan plan{discounting::SimulationMethod::quasi, 64, 1};
+        const auto halfCertain =
+            discounting::scenarios(base.asOf, {{0.5, vasicekOf(base)},
+                                               {0.5, discounting::flat(base.asOf, continuous(0.02), "")}})
+                .value();
+        CHECK(valueOf(desk::simulate(withFunding(base, halfCertain), askedFor("2028-12-01", plan)))
+                  .lawCounts.empty());
+        const desk::Simulated certain =
+            valueOf(desk::simulate(withFunding(base, vasicekOf(base, 0.0)), askedFor("2028-12-01", plan)));
+        CHECK(certain.lawCounts.empty());
+        CHECK_FALSE(certain.apart.factor.has_value());
+        CHECK(certain.fan->drawn.size() == static_cast<std::size_t>(desk::drawnPaths));
+        for (const std::vector<double>& path : certain.fan->drawn) {
+            REQUIRE(path.size() == certain.fan->steps.size());
+            for (std::size_t step = 0; step < path.size(); ++step) {
+                CHECK(path[step] == Approx(certain.fan->steps[step].quantiles[3]).epsilon(1e-9));
+            }
+        }
+    }
+
     TEST_CASE("the fan in closed form is that of simulated paths, and begins at the rate today") {
         const forward::Market market =
             withFunding(plain(forward::AssetKind::share, "2026-12-01", 100.0, 0.0),
@@ -212,6 +275,7 @@ TEST_SUITE("simulation: desk") {
             asked.places = {"/maturity"};
             asked.volatility = row.volatility;
             asked.correlation = row.correlation;
+            asked.quantity = 40.0;
             const desk::FuturesRow made = valueOf(desk::futures(market, asked)).rows.front();
             const double years = dates::years(market.asOf, made.schedule.settlement);
             REQUIRE(years == doctest::Approx(row.years).epsilon(0.006));
@@ -240,6 +304,10 @@ TEST_SUITE("simulation: desk") {
             CHECK(made.covariance == Approx(covariance).epsilon(1e-11));
             CHECK(made.convexity == Approx(convexity).epsilon(1e-11));
             CHECK(made.futures == Approx(made.forward * std::exp(covariance + convexity)).epsilon(1e-13));
+            CHECK(made.difference == Approx(made.futures - made.forward).epsilon(1e-9));
+            CHECK(made.covarianceInPrice == Approx(made.forward * std::expm1(covariance)).epsilon(1e-10));
+            CHECK(made.covarianceInPrice + made.convexityInPrice == Approx(made.difference).epsilon(1e-13));
+            CHECK(made.onQuantity == 40.0 * made.difference);
             if (years == row.years) {
                 CHECK(made.ratio == Approx(row.ratio).epsilon(1e-12));
             }
@@ -362,6 +430,56 @@ TEST_SUITE("simulation: desk") {
                 (std::log(price / cover.expected) + deviationOfLog * deviationOfLog / 2.0) / deviationOfLog;
             CHECK(0.5 * std::erfc(z / std::sqrt(2.0)) == Approx(quantile.probability).epsilon(1e-10));
         }
+        // Bought, the dealer gains where the price rises.
+        const auto bought = [&](double z) {
+            const double price =
+                cover.expected * std::exp(deviationOfLog * z - deviationOfLog * deviationOfLog / 2.0);
+            return (cover.fair - *cover.asked.buy) + 0.6 * (price - cover.fair);
+        };
+        CHECK(integral([&](double z) { return density(z) * bought(z); }, -10.0, 10.0) ==
+              Approx(0.2 * cover.asked.deviation).epsilon(1e-9));
+        for (const desk::ResultQuantile& quantile : cover.asked.buyQuantiles) {
+            const double price = cover.fair + (quantile.result - (cover.fair - *cover.asked.buy)) / 0.6;
+            const double z =
+                (std::log(price / cover.expected) + deviationOfLog * deviationOfLog / 2.0) / deviationOfLog;
+            CHECK(0.5 * std::erfc(-z / std::sqrt(2.0)) == Approx(quantile.probability).epsilon(1e-10));
+        }
+        // The odds of a loss: where the result, halved towards, changes its sign.
+        const auto zeroOf = [](auto f) {
+            double low = -10.0;
+            double high = 10.0;
+            for (int halvings = 0; halvings < 80; ++halvings) {
+                const double middle = (low + high) / 2.0;
+                ((f(middle) < 0.0) == (f(low) < 0.0) ? low : high) = middle;
+            }
+            return low;
+        };
+        CHECK(cover.asked.lossProbability ==
+              Approx(0.5 * std::erfc(zeroOf(result) / std::sqrt(2.0))).epsilon(1e-10));
+        CHECK(*cover.asked.buyLossProbability ==
+              Approx(0.5 * std::erfc(-zeroOf(bought) / std::sqrt(2.0))).epsilon(1e-10));
+    }
+
+    TEST_CASE("hedge cover on the quantity; odds of a loss where nothing is open, or the price is certain") {
+        const forward::Market market = fullShare();
+        const desk::HedgeCover cover =
+            valueOf(desk::hedgeCover(market, {on("2028-12-15"), 0.06, 0.35, 0.4, 0.2, {1.0}, 300.0}));
+        CHECK(cover.onQuantity.sell == 300.0 * (cover.asked.sell - cover.fair));
+        CHECK(*cover.onQuantity.buy == 300.0 * (cover.fair - *cover.asked.buy));
+        CHECK(cover.onQuantity.deviation == 300.0 * cover.asked.deviation);
+        CHECK(cover.shares[0].lossProbability == 0.0);
+        CHECK(*cover.shares[0].buyLossProbability == 0.0);
+        // Without volatility and loading the result is zero for certain, which is no loss.
+        const desk::HedgeCover certain =
+            valueOf(desk::hedgeCover(market, {on("2028-12-15"), 0.06, 0.0, 0.4, 0.0, {}}));
+        CHECK(certain.asked.quantiles.front().result == Approx(0.0).epsilon(1e-12));
+        CHECK(certain.asked.lossProbability == 0.0);
+        CHECK(*certain.asked.buyLossProbability == 0.0);
+        // So large a loading that the result can hardly fall below zero.
+        const desk::HedgeCover dear =
+            valueOf(desk::hedgeCover(market, {on("2027-12-15"), 0.0, 0.3, 0.9, 8.0, {}}));
+        CHECK(dear.asked.lossProbability < 1e-4);
+        CHECK(*dear.asked.buyLossProbability == 0.0);
     }
 
     TEST_CASE("hedge cover: what gives no price is refused or left out") {

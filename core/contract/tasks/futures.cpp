@@ -26,6 +26,12 @@ void writeFigures(Writer& writer, const desk::FuturesRow& row) {
     writer.member("covariance", row.covariance);
     writer.member("convexity", row.convexity);
     writer.endObject();
+    writer.member("difference", row.difference);
+    writer.key("parts").beginObject();
+    writer.member("covariance", row.covarianceInPrice);
+    writer.member("convexity", row.convexityInPrice);
+    writer.endObject();
+    writer.member("onQuantity", row.onQuantity);
 }
 
 void answerFutures(const forward::Market& market, const desk::FuturesAsked& asked, Findings& findings,
@@ -62,6 +68,7 @@ Calculation readFutures(Reader& request) {
     const auto correlation =
         request.required("correlation", "the correlation of the spot price with the short rate")
             .number(correlationRange);
+    asked.quantity = request.number("quantity", positive, 1.0);
     const Value more = request.optional("maturities");
     if (maturity) {
         asked.maturities.push_back(*maturity);

@@ -16,17 +16,24 @@ constexpr Range growthRange{-10.0, 10.0, false, false};
 constexpr Range volatilityRange{0.0, 10.0, false, false};
 constexpr Range loadingRange{0.0, 1000.0, false, false};
 
-void writeCover(Writer& writer, const desk::CoverAt& cover) {
-    writer.member("share", cover.share);
-    writer.member("deviation", cover.deviation);
-    writer.member("sell", cover.sell);
-    writer.member("buy", cover.buy);
-    writeList(writer, "quantiles", cover.quantiles, [&](const desk::ResultQuantile& quantile) {
+void writeQuantiles(Writer& writer, const char* name, const std::vector<desk::ResultQuantile>& quantiles) {
+    writeList(writer, name, quantiles, [&](const desk::ResultQuantile& quantile) {
         writer.beginObject();
         writer.member("probability", quantile.probability);
         writer.member("result", quantile.result);
         writer.endObject();
     });
+}
+
+void writeCover(Writer& writer, const desk::CoverAt& cover) {
+    writer.member("share", cover.share);
+    writer.member("deviation", cover.deviation);
+    writer.member("sell", cover.sell);
+    writer.member("buy", cover.buy);
+    writeQuantiles(writer, "quantiles", cover.quantiles);
+    writer.member("lossProbability", cover.lossProbability);
+    writeQuantiles(writer, "buyQuantiles", cover.buyQuantiles);
+    writer.member("buyLossProbability", cover.buyLossProbability);
 }
 
 void answerHedgeCover(const forward::Market& market, const desk::HedgeCoverAsked& asked, Findings& findings,
@@ -44,6 +51,11 @@ void answerHedgeCover(const forward::Market& market, const desk::HedgeCoverAsked
     writer.member("fair", cover.fair);
     writer.member("expected", cover.expected);
     writeCover(writer, cover.asked);
+    writer.key("onQuantity").beginObject();
+    writer.member("sell", cover.onQuantity.sell);
+    writer.member("buy", cover.onQuantity.buy);
+    writer.member("deviation", cover.onQuantity.deviation);
+    writer.endObject();
     if (!asked.shares.empty()) {
         writeList(writer, "rows", cover.shares, [&](const desk::CoverAt& row) {
             writer.beginObject();
@@ -66,6 +78,7 @@ Calculation readHedgeCover(Reader& request) {
         request.required("volatility", "the volatility of the price, a year").number(volatilityRange);
     const auto share = request.required("share", "the share hedged, from 0 to 1").number(shareRange);
     asked.loading = request.number("loading", loadingRange, 0.0);
+    asked.quantity = request.number("quantity", positive, 1.0);
     request.optional("shares").rows([&](const Value& row, std::size_t /*index*/) {
         if (const auto one = row.number(shareRange)) {
             asked.shares.push_back(*one);

@@ -20,7 +20,9 @@ using discounting::SimulationMethod;
 using forward::Market;
 
 constexpr int largestInteger = std::numeric_limits<int>::max();
-constexpr std::size_t numbersInRow = 6;
+constexpr std::size_t numbersInRow = 7;
+/// Beyond any count of a part that these blocks can make, and whole in a double.
+constexpr Range countRange{0.0, 0x1p50, false, false};
 
 /// No plan has more.
 constexpr int mostBlocks = 10'000;
@@ -61,18 +63,18 @@ std::optional<BlockSums> readSums(const Value& row) {
             const bool isNull = cell.present() && cell.json().kind() == Json::Kind::null;
             if (isNull && index + 1 == numbersInRow) {
                 numbers.push_back(std::numeric_limits<double>::infinity());
-            } else if (const auto number = cell.number(anyNumber)) {
+            } else if (const auto number = cell.number(index == 0 ? positive : anyNumber)) {
                 numbers.push_back(*number);
             }
         },
         numbersInRow);
     if (isList && row.json().size() != numbersInRow) {
-        row.fault("row-length", "A block has six sums.");
+        row.fault("row-length", "A block has seven sums.");
     }
     if (numbers.size() != numbersInRow) {
         return std::nullopt;
     }
-    return BlockSums{numbers[0], numbers[1], numbers[2], numbers[3], numbers[4], numbers[5]};
+    return BlockSums{numbers[0], numbers[1], numbers[2], numbers[3], numbers[4], numbers[5], numbers[6]};
 }
 
 std::optional<desk::SimulatedPart> readPart(const Value& value) {
@@ -87,8 +89,11 @@ std::optional<desk::SimulatedPart> readPart(const Value& value) {
     });
     const Value counts = object.required("counts", "the outcomes by bin");
     counts.rows([&](const Value& cell, std::size_t /*index*/) {
-        if (const auto count = cell.integer(0, largestInteger)) {
-            part.counts.push_back(*count);
+        const auto count = cell.number(countRange);
+        if (count && *count != std::floor(*count)) {
+            cell.fault("not-whole", "An outcome is counted in whole parts of a path.");
+        } else if (count) {
+            part.counts.push_back(static_cast<std::int64_t>(*count));
         }
     });
     if (!from) {
@@ -121,6 +126,7 @@ void writePart(Writer& writer, const desk::SimulatedPart& part) {
     writer.member("from", part.from);
     writeList(writer, "sums", part.sums, [&](const BlockSums& sums) {
         writer.beginList();
+        writer.value(sums.weight);
         writer.value(sums.factor);
         writer.value(sums.value);
         writer.value(sums.factorSquared);
@@ -143,7 +149,7 @@ void writeFactorAndForward(Writer& writer, std::string_view name, const Number& 
 }
 
 void writeHistogram(Writer& writer, const desk::Simulated& result) {
-    const discounting::BinCounts& counts = result.counts;
+    const std::vector<double>& counts = result.counts;
     writer.key("histogram").beginObject();
     writer.member("low", result.bins.low);
     writer.member("high", result.bins.high);
@@ -154,6 +160,10 @@ void writeHistogram(Writer& writer, const desk::Simulated& result) {
     }
     writer.endList();
     writer.member("above", counts.back());
+    writeList(writer, "edges", result.edges, [&](double edge) { writer.value(edge); });
+    if (!result.lawCounts.empty()) {
+        writeList(writer, "law", result.lawCounts, [&](double count) { writer.value(count); });
+    }
     writer.endObject();
 }
 
@@ -171,6 +181,13 @@ void writeFan(Writer& writer, const desk::RateFan& fan) {
         writer.member("to", step.to);
         writeList(writer, "rates", step.quantiles, [&](double rate) { writer.value(rate); });
         writer.endObject();
+    });
+    writeList(writer, "drawn", fan.drawn, [&](const std::vector<double>& path) {
+        writer.beginList();
+        for (const double rate : path) {
+            writer.value(rate);
+        }
+        writer.endList();
     });
     writer.endObject();
 }
@@ -193,6 +210,8 @@ void writeWhole(Writer& writer, const desk::SimulationAsked& asked, const desk::
         writer.endObject();
     }
     writeFactorAndForward(writer, "closedForm", result.closedForm.factor, result.closedForm.forward);
+    writer.member("averageRateFactor", result.averageRateFactor);
+    writeFactorAndForward(writer, "apart", result.apart.factor, result.apart.forward);
     writer.member("pathBias", result.pathBias);
     writeHistogram(writer, result);
     writeList(writer, "forwards", result.forwards, [&](const desk::ForwardReckoned& row) {
@@ -201,6 +220,7 @@ void writeWhole(Writer& writer, const desk::SimulationAsked& asked, const desk::
         writer.member("forward", row.forward);
         writer.member("difference", row.difference);
         writer.member("onQuantity", row.onQuantity);
+        writer.memberIfAny("errorOnQuantity", row.errorOnQuantity);
         writer.endObject();
     });
     if (result.fan) {

@@ -1,4 +1,5 @@
 import { scaleLinear } from 'd3-scale';
+import { line } from 'd3-shape';
 import { useState } from 'preact/hooks';
 import { formatNumber } from '../format';
 import type { SimulateWholeResult } from '../model/answer';
@@ -24,15 +25,17 @@ interface Bin {
   readonly low: number;
   readonly high: number;
   readonly count: number;
+  /** How many the law puts there; null where it is not known. */
+  readonly law: number | null;
 }
 
-function binsOf({ low, high, counts }: Histogram): readonly Bin[] {
-  const edge = scaleLinear().domain([0, counts.length]).range([low, high]);
-  return counts.map((count, i) => ({ low: edge(i), high: edge(i + 1), count }));
+function binsOf({ edges, counts, law }: Histogram): readonly Bin[] {
+  return counts.map((count, i) => ({ low: edges[i] ?? 0, high: edges[i + 1] ?? 0, count, law: law?.[i] ?? null }));
 }
 
-function inWords({ low, high, count }: Bin): string {
-  return `${formatNumber(low, digits)} to ${formatNumber(high, digits)}: ${formatNumber(count)} paths`;
+function inWords({ low, high, count, law }: Bin): string {
+  const closedForm = law === null ? '' : `, by the law ${formatNumber(law, 0)}`;
+  return `${formatNumber(low, digits)} to ${formatNumber(high, digits)}: ${formatNumber(count, 0)} paths${closedForm}`;
 }
 
 function Values({ histogram, bins }: { readonly histogram: Histogram; readonly bins: readonly Bin[] }) {
@@ -45,24 +48,32 @@ function Values({ histogram, bins }: { readonly histogram: Histogram; readonly b
             <th scope="col" class="num">
               Paths
             </th>
+            {histogram.law && (
+              <th scope="col" class="num">
+                By the law
+              </th>
+            )}
           </tr>
         </thead>
         <tbody>
           <tr>
             <th scope="row">below {formatNumber(histogram.low, digits)}</th>
-            <td class="num">{formatNumber(histogram.below)}</td>
+            <td class="num">{formatNumber(histogram.below, 1)}</td>
+            {histogram.law && <td />}
           </tr>
-          {bins.map((bin) => (
-            <tr key={bin.low}>
+          {bins.map((bin, i) => (
+            <tr key={i}>
               <th scope="row">
                 {formatNumber(bin.low, digits)} to {formatNumber(bin.high, digits)}
               </th>
-              <td class="num">{formatNumber(bin.count)}</td>
+              <td class="num">{formatNumber(bin.count, 1)}</td>
+              {bin.law !== null && <td class="num">{formatNumber(bin.law, 1)}</td>}
             </tr>
           ))}
           <tr>
             <th scope="row">above {formatNumber(histogram.high, digits)}</th>
-            <td class="num">{formatNumber(histogram.above)}</td>
+            <td class="num">{formatNumber(histogram.above, 1)}</td>
+            {histogram.law && <td />}
           </tr>
         </tbody>
       </table>
@@ -93,8 +104,9 @@ export function FactorHistogram({ histogram, marks: given, when }: Props) {
   const [chosen, setChosen] = useState<number | null>(null);
   const bins = binsOf(histogram);
   const last = bins.length - 1;
-  const most = Math.max(1, ...bins.map(({ count }) => count));
-  const index = Math.max(0, Math.min(chosen ?? bins.findIndex(({ count }) => count === most), last));
+  const fullest = Math.max(1, ...bins.map(({ count }) => count));
+  const most = Math.max(fullest, ...(histogram.law ?? []));
+  const index = Math.max(0, Math.min(chosen ?? bins.findIndex(({ count }) => count === fullest), last));
   const bin = bins[index];
   if (!bin) return null;
   const values = [histogram.low, histogram.high, ...marks.map(({ value }) => value)];
@@ -111,6 +123,9 @@ export function FactorHistogram({ histogram, marks: given, when }: Props) {
     14,
   );
   const ends = [histogram.low, histogram.high];
+  const lawLine = line<Bin>()
+    .x(({ low, high }) => x((low + high) / 2))
+    .y(({ law }) => y(law ?? 0));
   const step = (event: KeyboardEvent): void => {
     const move = moves[event.key];
     if (!move || event.altKey || event.ctrlKey || event.metaKey) return;
@@ -127,6 +142,7 @@ export function FactorHistogram({ histogram, marks: given, when }: Props) {
     <FigureFrame
       name={`Simulated discount factors to ${when}`}
       beside={<p class="chart-read num">{inWords(bin)}</p>}
+      {...(histogram.law ? { legend: 'Bars: paths as they came up. Line: as many by the closed form’s law.' } : {})}
       table={<Values histogram={histogram} bins={bins} />}
     >
       <div
@@ -150,7 +166,7 @@ export function FactorHistogram({ histogram, marks: given, when }: Props) {
         <svg width={width} height={height} aria-hidden="true">
           {bins.map(({ low, high, count }, i) => (
             <rect
-              key={low}
+              key={i}
               class={i === index ? 'bar chosen' : 'bar'}
               x={x(low)}
               width={Math.max(1, x(high) - x(low) - 1)}
@@ -158,8 +174,9 @@ export function FactorHistogram({ histogram, marks: given, when }: Props) {
               height={y(0) - y(count)}
             />
           ))}
+          {histogram.law && <path class="line line-law" d={lawLine(bins) ?? ''} />}
           {ends.map((value, i) => (
-            <text key={value} class="text" x={x(value)} y={height - 8} text-anchor={i === 0 ? 'start' : 'end'}>
+            <text key={i} class="text" x={x(value)} y={height - 8} text-anchor={i === 0 ? 'start' : 'end'}>
               {formatNumber(value, digits)}
             </text>
           ))}

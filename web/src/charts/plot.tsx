@@ -43,6 +43,8 @@ interface PlotProps {
   readonly lines?: readonly PlotLine[];
   readonly bands?: readonly PlotBand[];
   readonly levels?: readonly PlotLevel[];
+  /** Thin lines to be seen, not read: single paths of what the bands tell of all. */
+  readonly traces?: readonly (readonly number[])[];
   /** Where the cursor rests while nobody moves it. */
   readonly rest?: number;
   /** The least room of the vertical axis, so that rounding is not drawn as mountains. */
@@ -62,10 +64,11 @@ function nearestIndex(xs: readonly number[], x: number): number {
 }
 
 function frameOf(props: PlotProps, width: number, height: number) {
-  const { xs, lines = [], bands = [], levels = [], yText, leastRange = 0 } = props;
+  const { xs, lines = [], bands = [], levels = [], traces = [], yText, leastRange = 0 } = props;
   const ys = [
     ...lines.flatMap(({ values }) => values.filter((value) => value !== null)),
     ...bands.flatMap(({ low, high }) => [...low, ...high]),
+    ...traces.flat(),
     ...levels.map(({ value }) => value),
   ];
   const lowest = Math.min(...ys);
@@ -264,6 +267,9 @@ export function Plot(props: PlotProps) {
               y1={y(level.value)}
               y2={y(level.value)}
             />
+          ))}
+          {(props.traces ?? []).map((values, i) => (
+            <path key={i} class="line line-trace" d={pathOf({ name: '', look: 'main', values })} />
           ))}
           {lines.map((drawn) => (
             <path key={drawn.name} class={`line line-${drawn.look}`} d={pathOf(drawn)} />

@@ -2,7 +2,7 @@ import { scaleLinear } from 'd3-scale';
 import { formatNumber } from '../format';
 import { FigureFrame } from './figure-frame';
 import { thatFit } from './path-geometry';
-import { textWidth } from './text-width';
+import { shortened, textWidth } from './text-width';
 import { useWidth } from './use-width';
 
 const size = 13;
@@ -60,9 +60,9 @@ export function Spots({ name, rows, digits, stale, legend }: Props) {
           {rows.map((each, index) => {
             const y = index * row + row / 2;
             return (
-              <g key={each.name}>
+              <g key={index}>
                 <text class="text ink" x={0} y={y + 4.5}>
-                  {each.name}
+                  {shortened(each.name, left - 16, size)}
                 </text>
                 <line class="grid" x1={left} x2={width} y1={y} y2={y} />
                 {each.other !== null && <circle class="node" cx={x(each.other)} cy={y} r={6} />}

@@ -18,3 +18,11 @@ export function textWidth(text: string, size: number, weight = 400): number {
   widths.set(key, width);
   return width;
 }
+
+/** As much of the text as fits, with a mark where something is left off. */
+export function shortened(text: string, room: number, size: number, weight = 400): string {
+  if (textWidth(text, size, weight) <= room) return text;
+  let kept = text.length - 1;
+  while (kept > 1 && textWidth(`${text.slice(0, kept).trimEnd()}…`, size, weight) > room) --kept;
+  return `${text.slice(0, kept).trimEnd()}…`;
+}

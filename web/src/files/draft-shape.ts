@@ -129,6 +129,7 @@ export const draftShape: Shape = members({
       cover: members(texts('growth', 'volatility', 'share', 'loading')),
       simulation: members({ method: { oneOf: ['quasi', 'pseudo'] }, ...texts('paths', 'seed') }),
       leftOut: { list: text },
+      kept: { added: rows({ name: text, curve }), before: [] },
     }),
     before: emptyAnalysis,
   },

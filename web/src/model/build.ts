@@ -15,6 +15,7 @@ import type {
   FundingDraft,
   InstrumentRow,
   InstrumentsDraft,
+  KeptFunding,
   MarketDraft,
   PillarsDraft,
   QuotedForwardsDraft,
@@ -466,7 +467,11 @@ export interface FundingChoice {
 }
 
 /** Which of the kinds of funding have something typed in them, the one on screen first. */
-export function fundingChoices(deal: DealDraft, writing: Writing): readonly FundingChoice[] {
+export function fundingChoices(
+  deal: DealDraft,
+  kept: readonly KeptFunding[],
+  writing: Writing,
+): readonly FundingChoice[] {
   const { curve: whole } = deal.market.funding;
   const kinds: readonly Pick<CurveDraft, 'kind' | 'model'>[] = [
     { kind: 'flat', model: whole.model },
@@ -476,15 +481,18 @@ export function fundingChoices(deal: DealDraft, writing: Writing): readonly Fund
   ];
   const keyOf = ({ kind, model }: Pick<CurveDraft, 'kind' | 'model'>): string => (kind === 'random' ? model : kind);
   const own = keyOf(whole);
-  return kinds
+  const read = (draft: CurveDraft): Curve =>
+    curve(draft, '/market/funding/curve', new Reader(writing, deal.market.asOf));
+  const standing = kinds
     .map((kind) => ({ ...whole, ...kind }))
     .filter((draft) => keyOf(draft) === own || isTyped(draft))
     .sort((one, other) => Number(keyOf(other) === own) - Number(keyOf(one) === own))
     .map((draft) => ({
       key: keyOf(draft),
       name: fundingInWords(draft),
-      curve: curve(draft, '/market/funding/curve', new Reader(writing, deal.market.asOf)),
+      curve: read(draft),
     }));
+  return [...standing, ...kept.map(({ id, name, curve: draft }) => ({ key: `kept ${id}`, name, curve: read(draft) }))];
 }
 
 function isTyped(draft: CurveDraft): boolean {

@@ -233,6 +233,12 @@ export interface AgreedRow {
   readonly quantity: string;
   readonly maturity: string;
 }
+/** A funding put by, to be compared with others of its own kind too. */
+export interface KeptFunding {
+  readonly id: number;
+  readonly name: string;
+  readonly curve: CurveDraft;
+}
 /** What is asked beyond the quote, of whichever deal is on screen. */
 export interface AnalysisDraft {
   readonly futures: { readonly volatility: string; readonly correlation: string };
@@ -245,6 +251,7 @@ export interface AnalysisDraft {
   readonly simulation: { readonly method: 'quasi' | 'pseudo'; readonly paths: string; readonly seed: string };
   /** Kinds of funding that are not to be compared. */
   readonly leftOut: readonly string[];
+  readonly kept: readonly KeptFunding[];
 }
 /** Everything that is kept, undone and saved. */
 export interface Draft {
@@ -346,6 +353,7 @@ export const emptyAnalysis: AnalysisDraft = {
   cover: { growth: '', volatility: '', share: '', loading: '' },
   simulation: { method: 'quasi', paths: '65536', seed: '1' },
   leftOut: [],
+  kept: [],
 };
 
 /** An id that no row of the list has. */

@@ -5,6 +5,7 @@ export type { AssetKind, Compounding, Curve, Market, Rate } from '../generated/c
 export type Funding = Contract.FundingCurve;
 export type Model = Contract.RandomCurve;
 export type Pillars = Contract.PillarCurve;
+export type SimulateRequest = Contract.SimulateRequest;
 export type MarginUnit = NonNullable<Contract.Margin['unit']>;
 
 /** The page always says who asks and for how much. */

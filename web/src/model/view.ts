@@ -49,6 +49,7 @@ export interface Fault {
 
 /** The quote as it stood before funding was switched, so that the change can be shown; null when nothing was switched. */
 export interface Previous {
+  readonly request: QuoteRequest;
   readonly result: QuoteResult;
   /** What it was, in a few words: `flat`, `curve`, `Vasicek`, … */
   readonly was: string;

@@ -180,7 +180,7 @@ export function RandomDiscount({ request, result }: Props) {
           </details>
         </>
       )}
-      <SimulationView request={request} result={result} />
+      <SimulationView request={request} />
     </div>
   );
 }

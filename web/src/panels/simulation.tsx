@@ -10,20 +10,18 @@ import {
   formatPercent,
   formatSigned,
   formatSignedMoney,
+  precisionOf,
   timeOf,
 } from '../format';
 import { readNumber } from '../input/quantities';
 import type { RateFan, SimulateWholeResult } from '../model/answer';
 import { format } from '../model/view';
-import type { QuoteRequest, QuoteResult } from '../model/view';
-import { pricePrecision, unitName } from '../quote/words';
+import type { QuoteRequest } from '../model/view';
+import { unitName } from '../quote/words';
 import { begin, goOn, run, stop, type Question, type Run } from '../simulation/run';
 import { coreKind } from '../store/signals';
 
-interface Props {
-  readonly request: QuoteRequest;
-  readonly result: QuoteResult;
-}
+type Method = NonNullable<Question['method']>;
 
 const pathChoices = ['4096', '16384', '65536', '262144', '1048576', '4194304'];
 
@@ -34,7 +32,7 @@ const forwardNames: Readonly<Record<SimulateWholeResult['forwards'][number]['cod
   'path-by-path': 'path by path, then averaged: no price',
 };
 
-function questionOf({ market, inquiry }: QuoteRequest, method: string, paths: number, seed: number): Question {
+function questionOf({ market, inquiry }: QuoteRequest, method: Method, paths: number, seed: number): Question {
   const { maturity, roll, quantity } = inquiry;
   return {
     format: 'forwright/1',
@@ -102,12 +100,19 @@ function Controls({ shown, same, question }: { shown: Run | null; same: boolean;
   );
 }
 
-function SideBySide({ request, result, whole }: Props & { readonly whole: SimulateWholeResult }) {
-  const digits = pricePrecision(request, result).between + 4;
-  const { currency } = request.market.asset;
+/** What a run came to, told in its own currency and on its own quantity. */
+interface Ran {
+  readonly asked: Question;
+  readonly whole: SimulateWholeResult;
+  /** Decimals of a forward. */
+  readonly digits: number;
+}
+
+function SideBySide({ asked, whole, digits }: Ran) {
+  const { currency } = asked.market.asset;
   return (
     <div class="frame" role="region" aria-label="The forward reckoned in four ways" tabIndex={0}>
-      <table class="table">
+      <table class="table long-names">
         <thead>
           <tr>
             <th scope="col">The forward reckoned</th>
@@ -118,12 +123,12 @@ function SideBySide({ request, result, whole }: Props & { readonly whole: Simula
               Difference
             </th>
             <th scope="col" class="num">
-              On {formatNumber(request.inquiry.quantity)} {unitName(request)}
+              On {formatNumber(asked.quantity)} {unitName(asked)}
             </th>
           </tr>
         </thead>
         <tbody>
-          {whole.forwards.map(({ code, forward, difference, onQuantity }) => (
+          {whole.forwards.map(({ code, forward, difference, onQuantity, errorOnQuantity }) => (
             <tr key={code}>
               <th scope="row">{forwardNames[code]}</th>
               <td class="num strong">{forward === null ? 'beyond numbers' : formatNumber(forward, digits)}</td>
@@ -132,6 +137,7 @@ function SideBySide({ request, result, whole }: Props & { readonly whole: Simula
               </td>
               <td class="num">
                 {onQuantity === null || code === 'closed-form' ? '' : formatSignedMoney(onQuantity, currency)}
+                {errorOnQuantity !== undefined && <small> ± {formatSignificant(errorOnQuantity, 2)}</small>}
               </td>
             </tr>
           ))}
@@ -141,8 +147,7 @@ function SideBySide({ request, result, whole }: Props & { readonly whole: Simula
   );
 }
 
-function Closing({ shown, whole, digits }: { shown: Run; whole: SimulateWholeResult; digits: number }) {
-  const { trail } = shown;
+function Closing({ trail, whole, digits }: Omit<Ran, 'asked'> & { readonly trail: Run['trail'] }) {
   const known = trail.filter(({ low, high }) => low !== null && high !== null);
   if (known.length < 2) return null;
   return (
@@ -169,7 +174,7 @@ function Closing({ shown, whole, digits }: { shown: Run; whole: SimulateWholeRes
 }
 
 function Fan({ fan }: { readonly fan: RateFan }) {
-  const { steps, probabilities, by, paths } = fan;
+  const { steps, probabilities, by, paths, drawn } = fan;
   const middle = steps.map(({ from, to }) => (timeOf(from) + timeOf(to)) / 2);
   const at = (probability: number): readonly number[] => {
     const index = probabilities.findIndex((known) => Math.abs(known - probability) < 1e-9);
@@ -191,24 +196,32 @@ function Fan({ fan }: { readonly fan: RateFan }) {
         { name: '1 in 2', weight: 2, low: at(0.25), high: at(0.75) },
       ]}
       lines={[{ name: 'middle', look: 'main', values: at(0.5) }]}
+      traces={drawn}
       rest={steps.length - 1}
       legend={
         by === 'closed-form'
-          ? 'The short rate averaged over each step, in closed form.'
-          : `The short rate averaged over each step, from ${formatNumber(paths ?? 0)} paths.`
+          ? 'The short rate averaged over each step, in closed form. Thin: single paths.'
+          : `The short rate averaged over each step, from ${formatNumber(paths ?? 0)} paths. Thin: some of them.`
       }
     />
   );
 }
 
-function Outcome({ request, result, shown, stale }: Props & { readonly shown: Run; readonly stale: boolean }) {
-  const whole = shown.result;
+/** How far the simulation lies from the closed form, as a sentence. */
+function apartInWords(apart: number | null): string {
+  if (apart === null) return '';
+  const size = formatNumber(Math.abs(apart), 1);
+  return `, ${size} of its standard errors ${apart < 0 ? 'below' : 'above'} the closed form`;
+}
+
+function Outcome({ shown, stale }: { readonly shown: Run; readonly stale: boolean }) {
+  const { result: whole, asked, trail } = shown;
   if (whole === null) return null;
-  const digits = pricePrecision(request, result).between + 4;
-  const { estimate, standardError, closedForm, interval95, pathBias, histogram, fan } = whole;
+  const { estimate, standardError, closedForm, apart, interval95, pathBias, histogram, fan } = whole;
+  const digits = precisionOf(asked.market.asset.tick, closedForm.forward).between + 4;
   const marks = [
     { name: 'expected', value: closedForm.factor },
-    ...(result.random ? [{ name: 'at average rate', value: result.random.averageRateFactor }] : []),
+    { name: 'at average rate', value: whole.averageRateFactor },
   ];
   return (
     <div class="random" data-stale={stale}>
@@ -229,23 +242,23 @@ function Outcome({ request, result, shown, stale }: Props & { readonly shown: Ru
             <span class="num">{formatNumber(interval95.high, digits)}</span> with 95 % confidence
           </>
         )}
-        .
+        {apartInWords(apart.forward)}.
         {pathBias > 0 && (
           <> The steps of this model’s paths may put the factor off by up to {formatPercent(pathBias, 4)} of itself.</>
         )}
       </p>
-      <SideBySide request={request} result={result} whole={whole} />
+      <SideBySide asked={asked} whole={whole} digits={digits} />
       <div class="pictures">
         <FactorHistogram histogram={histogram} marks={marks} when={formatDate(whole.settlement)} />
         {fan && <Fan fan={fan} />}
-        <Closing shown={shown} whole={whole} digits={digits} />
+        <Closing trail={trail} whole={whole} digits={digits} />
       </div>
     </div>
   );
 }
 
 /** The random discount factor and the forward by simulation, run while one looks on. */
-export function SimulationView({ request, result }: Props) {
+export function SimulationView({ request }: { readonly request: QuoteRequest }) {
   const methodId = useId();
   const pathsId = useId();
   const method = bindDraft('analysis/simulation/method');
@@ -253,7 +266,7 @@ export function SimulationView({ request, result }: Props) {
   const seed = bindDraft('analysis/simulation/seed');
   const seedRead = readNumber(seed.text, 'count', format.value.decimal);
   const shown = run.value;
-  const question = seedRead.ok ? questionOf(request, method.text, Number(paths.text), seedRead.value) : null;
+  const question = seedRead.ok ? questionOf(request, method.text as Method, Number(paths.text), seedRead.value) : null;
   const same = shown !== null && question !== null && shown.question === JSON.stringify(question);
   return (
     <section class="random" aria-label="By simulation">
@@ -295,7 +308,7 @@ export function SimulationView({ request, result }: Props) {
           {fault.message}
         </p>
       ))}
-      {shown !== null && <Outcome request={request} result={result} shown={shown} stale={!same} />}
+      {shown !== null && <Outcome shown={shown} stale={!same} />}
     </section>
   );
 }

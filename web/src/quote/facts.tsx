@@ -1,7 +1,8 @@
 import { formatMoney, formatNumber, formatSigned, formatSignedMoney, formatSignedPercent } from '../format';
 import type { Precision } from '../format';
 import { previous } from '../model/view';
-import type { QuoteRequest, QuoteResult, Side } from '../model/view';
+import type { ComparisonResult, QuoteRequest, QuoteResult, Side } from '../model/view';
+import { useAnswer } from '../store/use-answer';
 import { unitName } from './words';
 
 interface Props {
@@ -58,19 +59,39 @@ function facts({ request, result }: Props, { between }: Precision): Fact[] {
   return list;
 }
 
-/** The change that switching funding made, until the next switch. */
-function Switched({ result, precision }: { readonly result: QuoteResult; readonly precision: Precision }) {
+interface SwitchedProps extends Props {
+  readonly precision: Precision;
+}
+
+/** The change that switching funding made, until the next switch: the core's own comparison of the two. */
+function Switched({ request, result, precision }: SwitchedProps) {
   const before = previous.value;
+  const fundings =
+    before === null
+      ? []
+      : [
+          { name: before.was, curve: before.request.market.funding.curve },
+          { name: before.now, curve: request.market.funding.curve },
+        ];
+  const { result: compared } = useAnswer<ComparisonResult>(
+    before === null
+      ? null
+      : { format: 'forwright/1', task: 'compare', market: request.market, inquiry: request.inquiry, fundings },
+  );
   if (!before) return null;
   const digits = precision.between + 2;
+  const row = compared?.rows[1];
   return (
     <div>
       <dt>
         Fair since {before.was} became {before.now}
       </dt>
       <dd>
-        <b class="num">{formatNumber(result.fair, digits)}</b>{' '}
-        <small class="num">was {formatNumber(before.result.fair, digits)}</small>
+        <b class="num">{row === undefined ? formatNumber(result.fair, digits) : formatSigned(row.change, digits)}</b>{' '}
+        <small class="num">
+          was {formatNumber(before.result.fair, digits)}
+          {row !== undefined && `, ${formatSignedMoney(row.onQuantity, request.market.asset.currency)}`}
+        </small>
       </dd>
     </div>
   );
@@ -88,7 +109,7 @@ export function Facts({ request, result, precision }: Props & { readonly precisi
           </dd>
         </div>
       ))}
-      <Switched result={result} precision={precision} />
+      <Switched request={request} result={result} precision={precision} />
     </dl>
   );
 }

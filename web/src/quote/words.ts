@@ -13,7 +13,7 @@ export function assetName({ market }: QuoteRequest): string {
 }
 
 /** What the quantity counts: shares, index units, units of the base currency, units of a commodity. */
-export function unitName({ market }: QuoteRequest): string {
+export function unitName({ market }: Pick<QuoteRequest, 'market'>): string {
   const { kind, base } = market.asset;
   if (kind === 'share') return 'shares';
   return kind === 'currency-pair' && base ? base : 'units';

@@ -1,7 +1,10 @@
+import { curveWords } from '../cards/words';
 import { Spots } from '../charts/spots';
 import { formatNumber, formatPercent, formatSigned, formatSignedMoney, precisionOf } from '../format';
 import type { ComparisonResult } from '../model/answer';
 import { fundingChoices } from '../model/build';
+import { nextId } from '../model/draft';
+import { fundingInWords } from '../model/funding-words';
 import { format } from '../model/view';
 import { unitName } from '../quote/words';
 import { built } from '../store/calculation';
@@ -11,6 +14,9 @@ import { useAnswer } from '../store/use-answer';
 import { Elsewhere } from './elsewhere';
 
 type Row = ComparisonResult['rows'][number];
+
+/** The contract's limit of a name. */
+const longestName = 200;
 
 function meaning({ random, fitted }: Row): string {
   if (fitted) return 'fitted to a curve: that curve’s forward, whatever its volatility';
@@ -22,7 +28,7 @@ function Table({ rows, digits, stale }: { rows: readonly Row[]; digits: number; 
   const { currency } = request.market.asset;
   return (
     <div class="table-frame" tabIndex={0} role="region" aria-label="The forward by funding" data-stale={stale}>
-      <table class="table">
+      <table class="table long-names">
         <thead>
           <tr>
             <th scope="col">Funding</th>
@@ -51,7 +57,7 @@ function Table({ rows, digits, stale }: { rows: readonly Row[]; digits: number; 
         </thead>
         <tbody>
           {rows.map((row, index) => (
-            <tr key={row.name}>
+            <tr key={index}>
               <th scope="row">
                 {row.name} <small>{meaning(row)}</small>
               </th>
@@ -74,8 +80,9 @@ function Table({ rows, digits, stale }: { rows: readonly Row[]; digits: number; 
 export function Comparison() {
   const { decimal, locale } = format.value;
   const { request } = built.value;
-  const choices = fundingChoices(deal.value, { sign: decimal, locale });
-  const { leftOut } = draft.value.analysis;
+  const { leftOut, kept } = draft.value.analysis;
+  const choices = fundingChoices(deal.value, kept, { sign: decimal, locale });
+  const { curve } = deal.value.market.funding;
   const taken = choices.filter(({ key }, index) => index === 0 || !leftOut.includes(key));
   const { result, errors, stale } = useAnswer<ComparisonResult>(
     coreVersion.value === ''
@@ -120,6 +127,34 @@ export function Comparison() {
           </label>
         ))}
       </fieldset>
+      <div class="row">
+        <button
+          type="button"
+          class="plain"
+          onClick={() => {
+            const name = `${fundingInWords(curve)}: ${curveWords(curve)}`;
+            editDraft('analysis/kept', [...kept, { id: nextId(kept), name: name.slice(0, longestName), curve }]);
+          }}
+        >
+          Put this funding by
+        </button>
+        {kept.length === 0 && <span class="muted">to compare another of its kind with it</span>}
+        {kept.map(({ id, name }) => (
+          <button
+            key={id}
+            type="button"
+            class="quiet"
+            onClick={() =>
+              editDraft(
+                'analysis/kept',
+                kept.filter((other) => other.id !== id),
+              )
+            }
+          >
+            Take out {name}
+          </button>
+        ))}
+      </div>
       {choices.length === 1 && (
         <p class="muted">Only one kind of funding is typed in: each that you fill in under Funding joins it here.</p>
       )}

@@ -2,12 +2,21 @@ import { Outcomes } from '../charts/outcomes';
 import { Plot } from '../charts/plot';
 import { bindDraft } from '../fields/binding';
 import { Field, type FieldProps } from '../fields/field';
-import { formatDate, formatNumber, formatPercent, precisionOf } from '../format';
+import {
+  formatDate,
+  formatMoney,
+  formatNumber,
+  formatPercent,
+  formatSignedMoney,
+  formatSignificant,
+  precisionOf,
+} from '../format';
 import type { Parsed } from '../input/parsed';
 import { readNumber, type NumberKind } from '../input/quantities';
 import type { HedgeCoverResult } from '../model/answer';
 import { format } from '../model/view';
 import type { Fault } from '../model/view';
+import { unitName } from '../quote/words';
 import { built } from '../store/calculation';
 import { coreVersion } from '../store/signals';
 import { useAnswer } from '../store/use-answer';
@@ -33,25 +42,51 @@ function world(share: number): string {
   return 'A part is hedged: the price stands between the two worlds. The hedged part is priced by its hedge, under the pricing measure; the rest by what is expected under the real-world measure, with a charge for its risk.';
 }
 
+/** So many outcomes in a hundred. */
+function odds(probability: number): string {
+  return `${formatSignificant(probability * 100, 2)} in 100`;
+}
+
 function Figures({ result, digits }: { result: HedgeCoverResult; digits: number }) {
-  const rows: readonly (readonly [string, string, string])[] = [
+  const { request } = built.value;
+  const { currency } = request.market.asset;
+  const { onQuantity } = result;
+  const all = `on ${formatNumber(request.inquiry.quantity)} ${unitName(request)}`;
+  const money = (value: number | null): string => (value === null ? '–' : formatSignedMoney(value, currency));
+  type Figure = readonly [name: string, value: string, more: string];
+  const aUnit: readonly Figure[] = [
     ['We sell at', formatNumber(result.sell, digits), 'the client buys'],
     ['We buy at', result.buy === null ? 'no price above zero' : formatNumber(result.buy, digits), 'the client sells'],
     ['Fair, all hedged', formatNumber(result.fair, digits), 'the forward'],
     ['Expected at maturity', formatNumber(result.expected, digits), 'at the growth assumed'],
     ['Deviation of our result', formatNumber(result.deviation, digits), 'a unit'],
   ];
+  const onAll: readonly Figure[] = [
+    ['Selling, over fair', money(onQuantity.sell), all],
+    ['Buying, below fair', money(onQuantity.buy), all],
+    ['Deviation', formatMoney(onQuantity.deviation, currency), all],
+    ['We lose, selling', odds(result.lossProbability), 'at the growth assumed'],
+    [
+      'We lose, buying',
+      result.buyLossProbability === null ? '–' : odds(result.buyLossProbability),
+      'at the growth assumed',
+    ],
+  ];
   return (
-    <dl class="facts">
-      {rows.map(([name, value, more]) => (
-        <div key={name}>
-          <dt>{name}</dt>
-          <dd>
-            <b class="num">{value}</b> <small>{more}</small>
-          </dd>
-        </div>
+    <>
+      {[aUnit, onAll].map((figures) => (
+        <dl class="facts" key={figures === aUnit ? 'a unit' : 'on all'}>
+          {figures.map(([name, value, more]) => (
+            <div key={name}>
+              <dt>{name}</dt>
+              <dd>
+                <b class="num">{value}</b> <small>{more}</small>
+              </dd>
+            </div>
+          ))}
+        </dl>
       ))}
-    </dl>
+    </>
   );
 }
 
@@ -84,6 +119,7 @@ export function Cover() {
           maturity,
           ...(roll === undefined ? {} : { roll }),
           ...typed,
+          quantity: request.inquiry.quantity,
           shares,
         }
       : null,
@@ -148,16 +184,23 @@ export function Cover() {
               levels={[{ name: 'fair, all hedged', value: result.fair }]}
               legend="Line: we sell. Dashed: we buy. Level: the fair forward, where both meet when all is hedged."
             />
-            {result.deviation > 0 && (
-              <Outcomes
-                name="Our result a unit when we sell, where outcomes lie"
-                what="Result a unit"
-                quantiles={result.quantiles.map(({ probability, result: value }) => ({ probability, value }))}
-                marks={[{ name: 'nothing gained or lost', value: 0 }]}
-                digits={digits}
-                fineDigits={digits}
-              />
-            )}
+            {result.deviation > 0 &&
+              [
+                { side: 'sell', quantiles: result.quantiles },
+                { side: 'buy', quantiles: result.buyQuantiles },
+              ]
+                .filter(({ quantiles }) => quantiles.length > 0)
+                .map(({ side, quantiles }) => (
+                  <Outcomes
+                    key={side}
+                    name={`Our result a unit when we ${side}, where outcomes lie`}
+                    what="Result a unit"
+                    quantiles={quantiles.map(({ probability, result: value }) => ({ probability, value }))}
+                    marks={[{ name: 'nothing gained or lost', value: 0 }]}
+                    digits={digits}
+                    fineDigits={digits}
+                  />
+                ))}
           </div>
           <p class="cautions">
             The unhedged part can lose far more than is charged for it: growth and volatility are assumptions, not

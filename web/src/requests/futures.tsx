@@ -5,7 +5,8 @@ import {
   formatDate,
   formatFigures,
   formatNumber,
-  formatPercent,
+  formatSigned,
+  formatSignedMoney,
   formatSignedPercent,
   precisionOf,
   timeOf,
@@ -14,6 +15,7 @@ import { readNumber } from '../input/quantities';
 import type { FuturesResult } from '../model/answer';
 import { format } from '../model/view';
 import type { Fault } from '../model/view';
+import { unitName } from '../quote/words';
 import { built } from '../store/calculation';
 import { draft } from '../store/session';
 import { coreVersion } from '../store/signals';
@@ -30,6 +32,8 @@ function rowsOf({ rows = [], ...own }: FuturesResult): readonly Row[] {
 }
 
 function Table({ rows, digits, own }: { rows: readonly Row[]; digits: number; own: string }) {
+  const { request } = built.value;
+  const { currency } = request.market.asset;
   return (
     <div class="table-frame" tabIndex={0} role="region" aria-label="Futures and forwards by maturity">
       <table class="table">
@@ -51,6 +55,12 @@ function Table({ rows, digits, own }: { rows: readonly Row[]; digits: number; ow
             <th scope="col" class="num">
               From the random factor
             </th>
+            <th scope="col" class="num">
+              Together
+            </th>
+            <th scope="col" class="num">
+              On {formatNumber(request.inquiry.quantity)} {unitName(request)}
+            </th>
           </tr>
         </thead>
         <tbody>
@@ -60,8 +70,15 @@ function Table({ rows, digits, own }: { rows: readonly Row[]; digits: number; ow
               <td class="num">{formatNumber(row.forward, digits)}</td>
               <td class="num strong">{formatNumber(row.futures, digits)}</td>
               <td class="num">{formatFigures(row.ratio, 9)}</td>
-              <td class="num">{formatSignedPercent(row.terms.covariance, 4)}</td>
-              <td class="num">{formatSignedPercent(row.terms.convexity, 4)}</td>
+              <td class="num">
+                {formatSigned(row.parts.covariance, digits)}{' '}
+                <small>{formatSignedPercent(row.terms.covariance, 4)}</small>
+              </td>
+              <td class="num">
+                {formatSigned(row.parts.convexity, digits)} <small>{formatSignedPercent(row.terms.convexity, 4)}</small>
+              </td>
+              <td class="num">{formatSigned(row.difference, digits)}</td>
+              <td class="num">{formatSignedMoney(row.onQuantity, currency)}</td>
             </tr>
           ))}
         </tbody>
@@ -100,6 +117,7 @@ export function Futures() {
           maturity,
           ...(roll === undefined ? {} : { roll }),
           ...typed,
+          quantity: request.inquiry.quantity,
           maturities: more.map((word) => word.maturity),
         }
       : null,
@@ -144,23 +162,25 @@ export function Futures() {
         <div class="random" data-stale={stale}>
           {rows.length > 1 && (
             <Plot
-              name="Future over forward, by cause"
+              name="Future less forward, by cause"
               axis="date"
               xs={rows.map((row) => timeOf(row.maturity))}
               xName="Maturity"
               xText={(x) => formatDate(rows.find((row) => timeOf(row.maturity) === x)?.maturity ?? '')}
-              yText={(value) => formatPercent(value, 3)}
-              leastRange={1e-5}
+              yText={(value) => formatSigned(value, digits)}
+              leastRange={10 ** -digits}
               rest={rows.findIndex((row) => row.maturity === result.maturity)}
               lines={[
-                { name: 'gains’ timing', look: 'main', values: rows.map((row) => row.terms.covariance) },
-                { name: 'random factor', look: 'dashed', values: rows.map((row) => row.terms.convexity) },
+                { name: 'together', look: 'main', values: rows.map((row) => row.difference) },
+                { name: 'gains’ timing', look: 'dashed', values: rows.map((row) => row.parts.covariance) },
+                { name: 'random factor', look: 'dotted', values: rows.map((row) => row.parts.convexity) },
               ]}
               levels={[{ name: 'no difference', value: 0 }]}
-              legend="Line: from gains’ timing. Dashed: from the random factor. Their sum is the logarithm of future over forward."
+              legend="Line: future less forward, a unit. Dashed: what gains’ timing makes of it. Dotted: the random factor."
             />
           )}
           <Table rows={rows} digits={digits} own={result.maturity} />
+          <p class="muted">Small: the same as exponents, whose sum is the logarithm of future over forward.</p>
           <p class="muted">The maturities are those listed under By maturity, and the inquiry’s own.</p>
         </div>
       )}

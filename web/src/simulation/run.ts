@@ -6,11 +6,12 @@
 import { signal } from '@preact/signals';
 import { openCore, type Core } from '../core/open';
 import type { SimulatedPart, SimulatePartResult, SimulateWholeResult } from '../model/answer';
+import type { SimulateRequest } from '../model/request';
 import type { Fault } from '../model/view';
 import { askFor } from '../store/calculation';
 
 /** What a simulation is asked about: the request of the task, without blocks and parts. */
-export type Question = Readonly<Record<string, unknown>>;
+export type Question = Omit<SimulateRequest, 'blocks' | 'parts' | 'fan'> & { readonly quantity: number };
 
 /** How the estimate came nearer. */
 export interface Trail {
@@ -23,7 +24,9 @@ export interface Trail {
 
 export interface Run {
   readonly state: 'running' | 'stopped' | 'done' | 'failed';
-  /** What is simulated, as text, to see whether the sheet has changed since. */
+  /** What is simulated: its figures are told in its own currency and on its own quantity. */
+  readonly asked: Question;
+  /** The same as text, to see whether the sheet has changed since. */
   readonly question: string;
   readonly done: number;
   /** Blocks in all; 0 until the first is worked out. */
@@ -167,8 +170,9 @@ class Simulation {
   }
 
   private tell(state: Run['state']): void {
-    const { text: question, done, count, workers, result, trail, errors } = this;
-    run.value = { state, question, done, count: this.parts.length === 0 ? 0 : count, workers, result, trail, errors };
+    const { question: asked, text: question, done, workers, result, trail, errors } = this;
+    const count = this.parts.length === 0 ? 0 : this.count;
+    run.value = { state, asked, question, done, count, workers, result, trail, errors };
   }
 }
 

@@ -77,18 +77,18 @@ interface Wanted extends Built<QuoteRequest> {
 }
 
 /** What the funding was at the last good answer, to notice when it is switched. */
-let lastQuoted: { readonly market: string; readonly deal: DealDraft; readonly result: QuoteResult } | null = null;
+let lastQuoted: (Pick<Wanted, 'market' | 'deal' | 'request'> & { readonly result: QuoteResult }) | null = null;
 
 function noteSwitch(wanted: Wanted, result: QuoteResult): void {
   const before = lastQuoted;
-  lastQuoted = { market: wanted.market, deal: wanted.deal, result };
+  lastQuoted = { market: wanted.market, deal: wanted.deal, request: wanted.request, result };
   if (before === null || before.market !== wanted.market) {
     beforeSwitch.value = null;
     return;
   }
   const was = fundingInWords(before.deal.market.funding.curve);
   const now = fundingInWords(wanted.deal.market.funding.curve);
-  if (was !== now) beforeSwitch.value = { result: before.result, was, now };
+  if (was !== now) beforeSwitch.value = { request: before.request, result: before.result, was, now };
   else if (before.deal.inquiry !== wanted.deal.inquiry || !sameButFunding(before.deal, wanted.deal))
     beforeSwitch.value = null;
 }
