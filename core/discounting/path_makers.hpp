@@ -44,6 +44,9 @@ template <class NormalCurve>
 inline constexpr double coxIngersollRossStep = 1.0 / 16.0;
 /// How far the mean factor can be off, relative: 5e-5 where 2κθ ≥ σ², so that the rate never reaches 0 (seen:
 /// 2e-6 ± 7e-6), else 1e-3 (seen: 3e-4 ± 1.4e-4 at κ = 0.3, σ = 1 over 10 years).
+/// This is of the mean. How paths spread about it is matched in two moments a step: near the law where the
+/// rate never reaches 0, else no more than near it (a quarter of all paths may lie where the law puts half,
+/// at σ = 10).
 [[nodiscard]] constexpr double coxIngersollRossPathBias(const CoxIngersollRoss& model) {
     const double drift = 2.0 * model.meanReversion * model.longRun;
     return drift >= model.volatility * model.volatility ? 5e-5 : 1e-3;

@@ -244,6 +244,99 @@ TEST_SUITE("simulation: desk") {
                   .sums.size() == 1);
     }
 
+    TEST_CASE(
+        "closed form, quantiles and simulation agree over a grid with its extremes, or what is refused says "
+        "why (seeds 1, 2)") {
+        const forward::Market base = plain(forward::AssetKind::share, "2026-12-01", 100.0, 0.0);
+        std::vector<discounting::CurvePtr> curves;
+        for (const double meanReversion : {0.0, 0.1, 100.0}) {
+            for (const double volatility : {0.0, 0.01, 0.2, 10.0}) {
+                for (const double rate : {-0.3, 0.04}) {
+                    curves.push_back(
+                        discounting::vasicek(base.asOf, {rate, meanReversion, -0.01, volatility}).value());
+                    curves.push_back(
+                        discounting::hullWhite(base.asOf, meanReversion, volatility,
+                                               discounting::flat(base.asOf, continuous(rate), ""))
+                            .value());
+                }
+                for (const double rate : {0.0, 0.04}) {
+                    curves.push_back(
+                        discounting::coxIngersollRoss(base.asOf, {rate, meanReversion, 0.05, volatility})
+                            .value());
+                }
+            }
+        }
+        constexpr std::size_t paths = 4096;
+        std::size_t answered = 0;
+        std::size_t refused = 0;
+        for (const auto& curve : curves) {
+            for (const char* maturity : {"2026-12-02", "2031-12-01", "2076-12-01"}) {
+                CAPTURE(curve->convention());
+                const std::vector<discounting::Parameter> parameters = curve->parameters();
+                CAPTURE(parameters[0].value);
+                CAPTURE(parameters[1].value);
+                CAPTURE(parameters.back().value);
+                CAPTURE(std::string(maturity));
+                const forward::Market market = withFunding(base, curve);
+                const auto outcome = desk::simulate(
+                    market, askedFor(maturity, {discounting::SimulationMethod::quasi, paths, 1}));
+                if (!outcome) {
+                    ++refused;
+                    const outcome::Fault fault = outcome.faults().front();
+                    CHECK(fault.at == "/market/funding/curve");
+                    CHECK(fault.code == "not-finite");
+                    CHECK(fault.message.size() > 20);
+                    continue;
+                }
+                ++answered;
+                const desk::Simulated& result = outcome.value();
+                const double closed = result.closedForm.factor;
+                REQUIRE(std::isfinite(result.closedForm.forward));
+                const bool few =
+                    discounting::isCarriedByFew(*curve->random(), result.schedule.settlement, paths);
+                CHECK(few == std::any_of(result.notices.begin(), result.notices.end(),
+                                         [](const auto& notice) { return notice.code == "rare-paths"; }));
+                if (!few) {
+                    CHECK(std::fabs(result.estimate.factor - closed) <=
+                          5.0 * *result.estimate.factorError + (result.pathBias + 1e-12) * closed);
+                }
+                // Where the short rate of Cox, Ingersoll and Ross can reach 0 the paths are near their law in
+                // its moments only.
+                if (result.pathBias >= 1e-3) {
+                    continue;
+                }
+                // As many of independent paths lie at or below each quantile as it says, to five deviations.
+                const auto simulation = discounting::Simulation::make(
+                    *curve, {{result.schedule.settlement}, {0.0}, 0, 0.0},
+                    {discounting::SimulationMethod::pseudo, 2 * static_cast<long>(paths), 2}, {});
+                const std::vector<double> logs = simulation.value().firstPaths(paths)[0];
+                const std::vector<double> probabilities{0.01, 0.05, 0.25, 0.5, 0.75, 0.95, 0.99};
+                const auto quantiles = curve->random()->quantiles(result.schedule.settlement, probabilities);
+                if (!quantiles) {
+                    CHECK(quantiles.faults().front().code == "not-finite");
+                    continue;
+                }
+                const bool certain =
+                    std::all_of(logs.begin(), logs.end(), [&](double log) { return log == logs.front(); });
+                for (const discounting::Quantile& quantile : quantiles.value()) {
+                    const double log = std::log(quantile.factor);
+                    const double at = log + 1e-11 * (1.0 + std::fabs(log));
+                    const auto below =
+                        std::count_if(logs.begin(), logs.end(), [&](double other) { return other <= at; });
+                    const double share = static_cast<double>(below) / static_cast<double>(paths);
+                    const double deviation = std::sqrt(quantile.probability * (1.0 - quantile.probability) /
+                                                       static_cast<double>(paths));
+                    // One outcome is every quantile.
+                    const double wanted = certain ? 1.0 : quantile.probability;
+                    CHECK(std::fabs(share - wanted) <= 5.0 * deviation + 20.0 * result.pathBias);
+                }
+            }
+        }
+        MESSAGE(answered << " answered, " << refused << " refused");
+        CHECK(answered > 100);
+        CHECK(refused >= 10);
+    }
+
     TEST_CASE("rare paths that carry the mean are told of") {
         const forward::Market base = plain(forward::AssetKind::share, "2026-12-01", 100.0, 0.0);
         const forward::Market market =

@@ -58,6 +58,9 @@ describe.each(everyBrowser)('simulating in %s', (name) => {
       simulated.join(),
     ).toBe(true);
     await person.see('path by path, then averaged: no price');
+    await person.see('of its standard errors');
+    await person.see('by the closed form’s law');
+    await person.see('Thin: single paths');
     await person.see('Where rates may go');
     await person.see('Simulated discount factors');
     // Another sheet: what was simulated is told to be of the one before.
@@ -148,6 +151,42 @@ describe('random discounting in Chromium', () => {
     expect(await labelOf()).toContain('4.50');
   });
 
+  test('a scenario may be random itself, with fields of its own', async () => {
+    await toRandom(person);
+    await chooseModel(person, 'scenarios');
+    const before = await person.prices();
+    await page.raw.waitForSelector('.scenario input[type="radio"][value="random"]');
+    await page.raw.$eval('.scenario input[type="radio"][value="random"]', (radio) => (radio as HTMLElement).click());
+    await page.raw.waitForSelector('.scenario [data-at$="/scenarios/0/curve/r0"]');
+    await page.raw.waitForSelector('.quote[data-stale="true"]');
+    for (const [member, text] of [
+      ['r0', '2'],
+      ['meanReversion', '0.1'],
+      ['longRun', '3'],
+      ['volatility', '1'],
+    ] as const) {
+      await page.type(`.scenario [data-at$="/scenarios/0/curve/${member}"]`, text);
+    }
+    const random = await person.pricesAfter(before);
+    await page.type('.scenario [data-at$="/scenarios/0/curve/volatility"]', '11');
+    await page.raw.waitForSelector('.quote[data-stale="false"]');
+    await person.pricesAfter(random);
+    await page.type('.scenario [data-at$="/scenarios/0/curve/volatility"]', '2000');
+    await page.raw.waitForSelector('.scenario .field-error');
+    await page.type('.scenario [data-at$="/scenarios/0/curve/volatility"]', '1');
+    expect(await person.settled()).toEqual(random);
+  });
+
+  test('switching funding tells its change in money', async () => {
+    await person.press('Funding');
+    const before = await person.prices();
+    await person.press('Flat');
+    await person.pricesAfter(before);
+    await page.raw.waitForFunction(() =>
+      /Fair since Curve became Flat rate\s*[+−][\d.]+\s*was [\d.]+, EUR\s[+−][\d,.]+/.test(document.body.innerText),
+    );
+  });
+
   test('samples that disagree with the market’s curve are told of', async () => {
     await toRandom(person);
     await chooseModel(person, 'samples');
@@ -182,6 +221,36 @@ describe('random discounting in Chromium', () => {
       {},
       rows.length,
     );
+    // One put by is compared with another of its own kind.
+    await page.press('1');
+    await toRandom(person);
+    await page.raw.evaluate(() => (document.activeElement as HTMLElement | null)?.blur());
+    await page.press('2');
+    await person.press('Put this funding by');
+    await person.see('Take out Vasicek: from');
+    await page.press('1');
+    const first = await person.prices();
+    await person.put('Volatility', '3');
+    await person.pricesAfter(first);
+    await page.raw.evaluate(() => (document.activeElement as HTMLElement | null)?.blur());
+    await page.press('2');
+    const fairs = () =>
+      page.raw.$$eval('[aria-label="The forward by funding"] tbody tr', (found) =>
+        found
+          .map((row) => [...row.querySelectorAll('th, td')].map((cell) => cell.textContent?.trim() ?? ''))
+          .filter(([name]) => name?.startsWith('Vasicek'))
+          .map(([, fair]) => fair),
+      );
+    await page.raw.waitForFunction(
+      () =>
+        [...document.querySelectorAll('[aria-label="The forward by funding"] tbody th')].filter((name) =>
+          name.textContent?.startsWith('Vasicek'),
+        ).length === 2,
+    );
+    const [quoted, kept] = await fairs();
+    expect(quoted).not.toBe(kept);
+    await person.press('Take out Vasicek');
+    await page.raw.waitForFunction(() => !document.body.innerText.includes('Take out Vasicek'));
   });
 
   test('a future differs from the forward by two causes, where rates are random', async () => {
@@ -200,6 +269,13 @@ describe('random discounting in Chromium', () => {
         document.querySelector('[aria-label="Futures and forwards by maturity"] tr.total td:nth-of-type(3)')
           ?.textContent !== '1',
     );
+    await page.raw.waitForFunction(() =>
+      /^EUR\s[+−]/.test(
+        document.querySelector('[aria-label="Futures and forwards by maturity"] tr.total td:last-child')?.textContent ??
+          '',
+      ),
+    );
+    await person.see('Future less forward, by cause');
     await person.type('Correlation with the short rate', '2');
     await person.see('1');
     await page.raw.waitForSelector('.field-error');
@@ -218,6 +294,9 @@ describe('random discounting in Chromium', () => {
     await person.type('Hedged', '0');
     await person.see('this is an insurer’s price');
     await person.see('Our result a unit when we sell');
+    await person.see('Our result a unit when we buy');
+    await person.see('We lose, selling');
+    await person.see('on 10,000 shares');
     const slider = await page.raw.waitForSelector('[role="slider"][aria-label^="Price to"]');
     await slider?.focus();
     await page.press('End');

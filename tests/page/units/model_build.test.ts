@@ -1,11 +1,11 @@
 import Ajv from 'ajv/dist/2020';
 import { readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
-import { buildQuote } from '../../../web/src/model/build';
-import { models } from '../../../web/src/model/draft';
+import { buildQuote, fundingChoices } from '../../../web/src/model/build';
+import { emptyCurve, models } from '../../../web/src/model/draft';
 import { dealFrom } from '../../../web/src/model/from-request';
 import { withOtherSign } from '../../../web/src/model/number-texts';
-import type { QuoteRequest } from '../../../web/src/model/request';
+import type { Curve, QuoteRequest } from '../../../web/src/model/request';
 import { demonstrationDraft } from '../../../web/src/store/demonstration';
 import { withValue } from '../../../web/src/store/paths';
 import { readState, writeState } from '../../../web/src/files/state';
@@ -91,6 +91,72 @@ describe('the request that a draft makes', () => {
   test('an empty text leaves its member out', () => {
     const { request } = buildQuote(withValue(share, 'market/spot/offer', ''), british);
     expect(request.market.spot).toEqual({ bid: 48.62 });
+  });
+});
+
+describe('a random curve within a scenario', () => {
+  const model = { kind: 'random', model: 'vasicek', r0: 0.02, meanReversion: 0.1, longRun: 0.03, volatility: 0.012 };
+  const fitted = { kind: 'random', model: 'hull-white', meanReversion: 0.2, volatility: 0.01, fit: 0.025 };
+  const nested = {
+    kind: 'random',
+    model: 'scenarios',
+    scenarios: [
+      { weight: 0.6, curve: model },
+      {
+        weight: 0.4,
+        curve: { kind: 'random', model: 'scenarios', scenarios: [{ weight: 1, curve: fitted }] },
+      },
+    ],
+  } as unknown as Curve;
+
+  test('is brought to texts and back, within a scenario of a scenario too', () => {
+    const file = demonstrationFile('share');
+    const request = { ...file, market: { ...file.market, funding: { curve: nested } } };
+    const { request: made, faults } = buildQuote(dealFrom(request, '.'), british);
+    expect(faults).toEqual([]);
+    validate(made);
+    expect(validate.errors).toBeNull();
+    const curve = made.market.funding.curve as unknown as { scenarios: { curve: object }[] };
+    expect(curve.scenarios[0]?.curve).toEqual(model);
+    const inner = curve.scenarios[1]?.curve as { scenarios: { weight: number; curve: object }[] };
+    expect(inner.scenarios[0]?.weight).toBe(1);
+    expect(inner.scenarios[0]?.curve).toMatchObject({ ...fitted, fit: { rate: 0.025 } });
+  });
+
+  test('is added to scenarios that an earlier version kept with a flat rate or points alone', () => {
+    const kept = JSON.parse(writeState(demonstration, '.'));
+    const row = kept.draft.deals[demonstration.current].market.funding.curve.scenarios.rows[0];
+    const { kind, flat, pillars } = row.curve;
+    row.curve = { kind, flat, pillars };
+    const read = readState(kept, '.');
+    if (!read.ok) throw new Error(read.message);
+    const brought = read.value.deals[demonstration.current]!.market.funding.curve.scenarios.rows[0]!.curve;
+    expect(brought).toEqual({ ...emptyCurve, kind, flat, pillars });
+  });
+
+  test('is refused where it is damaged deep inside', () => {
+    const kept = JSON.parse(writeState(demonstration, '.'));
+    const row = kept.draft.deals[demonstration.current].market.funding.curve.scenarios.rows[0];
+    row.curve.scenarios.rows = [{ id: 1, weight: '1', curve: { ...emptyCurve, kind: 'round' } }];
+    const read = readState(kept, '.');
+    expect(read.ok ? '' : read.message).toContain('/scenarios/rows/0/curve/scenarios/rows/0/curve/kind');
+  });
+});
+
+describe('fundings to compare', () => {
+  test('are all that are typed in, the one on screen first, then those put by', () => {
+    const other = withValue(share.market.funding.curve, 'vasicek/volatility', '3');
+    const kept = [{ id: 4, name: 'Vasicek, wilder', curve: { ...other, kind: 'random', model: 'vasicek' } as const }];
+    const choices = fundingChoices(share, kept, british);
+    expect(choices[0]?.key).toBe(share.market.funding.curve.kind);
+    expect(choices.map(({ key }) => key)).toEqual(expect.arrayContaining(['flat', 'pillars', ...models]));
+    expect(choices.at(-1)).toMatchObject({ key: 'kept 4', name: 'Vasicek, wilder', curve: { volatility: 0.03 } });
+    expect(new Set(choices.map(({ key }) => key)).size).toBe(choices.length);
+  });
+
+  test('leave out what nothing is typed in', () => {
+    const bare = withValue(share, 'market/funding/curve', emptyCurve);
+    expect(fundingChoices(bare, [], british).map(({ key }) => key)).toEqual(['flat']);
   });
 });
 

@@ -37,6 +37,8 @@ const vectorProbe = new Uint8Array([
 /** How long a Worker may take to open before it counts as refused; plain script on a slow machine takes a second. */
 const mostOpeningMilliseconds = 15_000;
 
+const closedWords = 'The core was closed.';
+
 function hasWebAssembly(): boolean {
   return typeof WebAssembly === 'object' && WebAssembly.validate(vectorProbe);
 }
@@ -113,17 +115,27 @@ async function openInWorker({ kind, script, given }: Parts): Promise<Core> {
     waiting.clear();
   };
   let lastId = 0;
+  let closed = false;
   return {
     kind,
     thread: 'worker',
     version,
     answer: (request) =>
       new Promise((done, failed) => {
+        if (closed) {
+          failed(new Error(closedWords));
+          return;
+        }
         const id = ++lastId;
         waiting.set(id, { done, failed });
         worker.postMessage({ id, request });
       }),
-    close: () => worker.terminate(),
+    close: () => {
+      closed = true;
+      worker.terminate();
+      for (const { failed } of waiting.values()) failed(new Error(closedWords));
+      waiting.clear();
+    },
   };
 }
 

@@ -244,7 +244,11 @@ function Outcome({ shown, stale }: { readonly shown: Run; readonly stale: boolea
         )}
         {apartInWords(apart.forward)}.
         {pathBias > 0 && (
-          <> The steps of this model’s paths may put the factor off by up to {formatPercent(pathBias, 4)} of itself.</>
+          <>
+            {' '}
+            The steps of this model’s paths may put the factor off by up to {formatPercent(pathBias, 4)} of itself; how
+            they spread is near the law, not exact.
+          </>
         )}
       </p>
       <SideBySide asked={asked} whole={whole} digits={digits} />

@@ -44,6 +44,10 @@ const askedMilliseconds = 60;
 /** How often the figures are put together while it runs. */
 const shownEachMilliseconds = 150;
 const mostWorkers = 8;
+/** What is being worked out is waited for so long when one stops; then it is given up, to be done again on going on. */
+const stoppingMilliseconds = 400;
+/** How long Workers are kept for another run. */
+const keptMilliseconds = 30_000;
 
 /** The page's own thread and its core need one processor. */
 function workersWanted(): number {
@@ -62,6 +66,18 @@ function openPool(): Promise<readonly Core[]> {
   return pool;
 }
 
+let keeping: ReturnType<typeof setTimeout> | undefined;
+
+function closePool(): void {
+  void pool?.then((cores) => cores.forEach((core) => core.close()));
+  pool = null;
+}
+
+interface Blocks {
+  readonly from: number;
+  readonly to: number;
+}
+
 interface Answer<Result> {
   readonly ok: boolean;
   readonly result: Result;
@@ -72,6 +88,8 @@ interface Answer<Result> {
 class Simulation {
   private readonly parts: SimulatedPart[] = [];
   private next = 0;
+  /** Blocks given up in stopping. */
+  private readonly again: Blocks[] = [];
   private done = 0;
   private count = 1;
   private trail: readonly Trail[] = [];
@@ -90,9 +108,14 @@ class Simulation {
 
   stop(): void {
     this.stopping = true;
+    // Where blocks take long, as they do in plain script, stopping does not.
+    setTimeout(() => {
+      if (this.stopping && this.running && current === this) closePool();
+    }, stoppingMilliseconds);
   }
 
   async goOn(): Promise<void> {
+    clearTimeout(keeping);
     this.stopping = false;
     this.running = true;
     this.tell('running');
@@ -100,7 +123,7 @@ class Simulation {
       const cores = await openPool();
       this.workers = cores.length;
       // The first block says how many there are.
-      if (this.parts.length === 0 && cores[0] !== undefined) await this.work(cores[0], 1);
+      if (this.parts.length === 0 && !this.isStopping() && cores[0] !== undefined) await this.work(cores[0], 1);
       if (this.errors.length === 0) await Promise.all(cores.map((core) => this.workOn(core)));
       // What came in while figures were put together is put together as well.
       while (current === this && (this.showing !== null || this.isBehind())) await this.show();
@@ -108,12 +131,13 @@ class Simulation {
       this.errors = [{ at: '', code: 'stopped', message: 'The simulation stopped and cannot go on in this browser.' }];
     }
     this.running = false;
+    if (current === this) keeping = setTimeout(closePool, keptMilliseconds);
     if (current === this) this.tell(this.errors.length > 0 ? 'failed' : this.done === this.count ? 'done' : 'stopped');
   }
 
   private async workOn(core: Core): Promise<void> {
     let blocks = 1;
-    while (this.next < this.count && !this.stopping && this.errors.length === 0 && current === this) {
+    while (this.isLeft() && !this.stopping && this.errors.length === 0 && current === this) {
       const began = performance.now();
       await this.work(core, blocks);
       const took = performance.now() - began;
@@ -124,10 +148,15 @@ class Simulation {
   }
 
   private async work(core: Core, blocks: number): Promise<void> {
-    const from = this.next;
-    const to = Math.min(from + blocks, Math.max(this.count, 1));
-    this.next = to;
-    const text = await core.answer(JSON.stringify({ ...this.question, blocks: { from, to } }));
+    const { from, to } = this.again.pop() ?? this.following(blocks);
+    let text: string;
+    try {
+      text = await core.answer(JSON.stringify({ ...this.question, blocks: { from, to } }));
+    } catch (reason) {
+      if (!this.stopping) throw reason;
+      this.again.push({ from, to });
+      return;
+    }
     const answer = JSON.parse(text) as Answer<SimulatePartResult>;
     if (!answer.ok) {
       this.errors = answer.errors;
@@ -136,6 +165,20 @@ class Simulation {
     this.parts.push(answer.result.part);
     this.count = answer.result.blocks.count;
     this.done += to - from;
+  }
+
+  private isStopping(): boolean {
+    return this.stopping;
+  }
+
+  private isLeft(): boolean {
+    return this.again.length > 0 || this.next < this.count;
+  }
+
+  private following(blocks: number): Blocks {
+    const from = this.next;
+    this.next = Math.min(from + blocks, Math.max(this.count, 1));
+    return { from, to: this.next };
   }
 
   /** Puts together what is there; the fan, which does not hang on the blocks, only once. */
