@@ -97,6 +97,7 @@ describe('random discounting in Chromium', () => {
     await person.choose('Random numbers', 'pseudo');
     await person.choose('Paths', '4194304');
     await person.press('Simulate');
+    await page.raw.waitForFunction(() => /[1-9][\d,]* paths so far/.test(document.body.innerText));
     await person.press('Stop');
     await person.see('Stopped after');
     const stoppedAt = Number((await figureAfter(page, 'Stopped after ')).replaceAll(',', ''));
@@ -111,6 +112,31 @@ describe('random discounting in Chromium', () => {
     await page.raw.waitForFunction(() => document.body.innerText.includes('paths so far'));
     await person.see('Done: 4,194,304 paths');
     expect(await figureAfter(page, 'Simulated factor ')).toBe(stopped);
+  });
+
+  test('as many Workers as there are processors to spare come to the same digits as one', async () => {
+    const figures: string[] = [];
+    for (const processors of [2, 4]) {
+      await page.raw.evaluateOnNewDocument((count: number) => {
+        Object.defineProperty(navigator, 'hardwareConcurrency', { value: count, configurable: true });
+      }, processors);
+      await page.raw.reload();
+      await person.settled();
+      await toRandom(person);
+      // To the cent its prices are Vasicek's.
+      await person.choose('Model', 'cox-ingersoll-ross');
+      await person.see('Quantiles are right to');
+      await person.choose('Paths', '65536');
+      await person.press('Simulate');
+      await person.see(processors === 2 ? 'Done: 65,536 paths' : 'Done: 65,536 paths, by 3 Workers');
+      const table = await page.raw.$eval(
+        '[aria-label="The forward reckoned in four ways"]',
+        (found) => found.textContent ?? '',
+      );
+      figures.push(`${await figureAfter(page, 'Simulated factor ')} ${table}`);
+      await page.raw.evaluate(() => localStorage.clear());
+    }
+    expect(figures[1]).toBe(figures[0]);
   });
 
   test('prices go on while a simulation runs', async () => {

@@ -33,9 +33,12 @@ function binsOf({ edges, counts, law }: Histogram): readonly Bin[] {
   return counts.map((count, i) => ({ low: edges[i] ?? 0, high: edges[i + 1] ?? 0, count, law: law?.[i] ?? null }));
 }
 
-function inWords({ low, high, count, law }: Bin): string {
-  const closedForm = law === null ? '' : `, by the law ${formatNumber(law, 0)}`;
-  return `${formatNumber(low, digits)} to ${formatNumber(high, digits)}: ${formatNumber(count, 0)} paths${closedForm}`;
+/** Where the bin lies, what came up there, and what the law puts there. */
+function readingsOf({ low, high, count, law }: Bin): readonly string[] {
+  return [
+    `${formatNumber(low, digits)} to ${formatNumber(high, digits)}: ${formatNumber(count, 0)} paths`,
+    ...(law === null ? [] : [`by the law ${formatNumber(law, 0)}`]),
+  ];
 }
 
 function Values({ histogram, bins }: { readonly histogram: Histogram; readonly bins: readonly Bin[] }) {
@@ -141,7 +144,15 @@ export function FactorHistogram({ histogram, marks: given, when }: Props) {
   return (
     <FigureFrame
       name={`Simulated discount factors to ${when}`}
-      beside={<p class="chart-read num">{inWords(bin)}</p>}
+      beside={
+        <p class="chart-read">
+          {readingsOf(bin).map((reading) => (
+            <span key={reading} class="num">
+              {reading}{' '}
+            </span>
+          ))}
+        </p>
+      }
       {...(histogram.law ? { legend: 'Bars: paths as they came up. Line: as many by the closed form’s law.' } : {})}
       table={<Values histogram={histogram} bins={bins} />}
     >
@@ -156,7 +167,7 @@ export function FactorHistogram({ histogram, marks: given, when }: Props) {
         aria-valuemin={0}
         aria-valuemax={last}
         aria-valuenow={index}
-        aria-valuetext={inWords(bin)}
+        aria-valuetext={readingsOf(bin).join(', ')}
         onPointerMove={follow}
         onPointerDown={follow}
         onPointerLeave={() => setChosen(null)}

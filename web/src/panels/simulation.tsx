@@ -147,9 +147,16 @@ function SideBySide({ asked, whole, digits }: Ran) {
   );
 }
 
+/** Decimals that tell two figures so far apart from each other, never fewer than `least`. */
+function decimalsToTell(apart: number, least: number): number {
+  return apart > 0 ? Math.min(12, Math.max(least, 1 - Math.floor(Math.log10(apart)))) : least;
+}
+
 function Closing({ trail, whole, digits }: Omit<Ran, 'asked'> & { readonly trail: Run['trail'] }) {
   const known = trail.filter(({ low, high }) => low !== null && high !== null);
   if (known.length < 2) return null;
+  const ends = known.flatMap(({ low, high }) => [low ?? 0, high ?? 0]);
+  const decimals = decimalsToTell(Math.max(...ends) - Math.min(...ends), digits);
   return (
     <Plot
       name="Closing on the closed form"
@@ -157,7 +164,7 @@ function Closing({ trail, whole, digits }: Omit<Ran, 'asked'> & { readonly trail
       xs={known.map(({ paths }) => paths)}
       xName="Paths"
       xText={(paths) => `${formatNumber(paths, 0)} paths`}
-      yText={(value) => formatNumber(value, digits)}
+      yText={(value) => formatNumber(value, decimals)}
       bands={[
         {
           name: '95 in 100',
@@ -219,6 +226,7 @@ function Outcome({ shown, stale }: { readonly shown: Run; readonly stale: boolea
   if (whole === null) return null;
   const { estimate, standardError, closedForm, apart, interval95, pathBias, histogram, fan } = whole;
   const digits = precisionOf(asked.market.asset.tick, closedForm.forward).between + 4;
+  const decimals = interval95 ? decimalsToTell(interval95.high - interval95.low, digits) : digits;
   const marks = [
     { name: 'expected', value: closedForm.factor },
     { name: 'at average rate', value: whole.averageRateFactor },
@@ -235,11 +243,11 @@ function Outcome({ shown, stale }: { readonly shown: Run; readonly stale: boolea
           </>
         )}
         , in closed form <span class="num">{formatNumber(closedForm.factor, 9)}</span>. Simulated forward{' '}
-        <b class="num">{formatNumber(estimate.forward, digits)}</b>
+        <b class="num">{formatNumber(estimate.forward, decimals)}</b>
         {interval95 && (
           <>
-            , between <span class="num">{formatNumber(interval95.low, digits)}</span> and{' '}
-            <span class="num">{formatNumber(interval95.high, digits)}</span> with 95 % confidence
+            , between <span class="num">{formatNumber(interval95.low, decimals)}</span> and{' '}
+            <span class="num">{formatNumber(interval95.high, decimals)}</span> with 95 % confidence
           </>
         )}
         {apartInWords(apart.forward)}.

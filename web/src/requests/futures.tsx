@@ -66,7 +66,9 @@ function Table({ rows, digits, own }: { rows: readonly Row[]; digits: number; ow
         <tbody>
           {rows.map((row) => (
             <tr key={row.maturity} class={row.maturity === own ? 'total' : undefined}>
-              <th scope="row">{formatDate(row.maturity)}</th>
+              <th scope="row" class="date">
+                {formatDate(row.maturity)}
+              </th>
               <td class="num">{formatNumber(row.forward, digits)}</td>
               <td class="num strong">{formatNumber(row.futures, digits)}</td>
               <td class="num">{formatFigures(row.ratio, 9)}</td>

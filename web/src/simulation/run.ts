@@ -143,7 +143,8 @@ class Simulation {
       const took = performance.now() - began;
       if (took < askedMilliseconds / 2) blocks *= 2;
       else if (took > askedMilliseconds * 2) blocks = Math.max(1, Math.floor(blocks / 2));
-      if (performance.now() - this.lastShown > shownEachMilliseconds) void this.show();
+      const late = performance.now() - this.lastShown > shownEachMilliseconds;
+      if (late || this.done >= 2 * (this.result?.blocks.done ?? 1)) void this.show();
     }
   }
 
