@@ -179,6 +179,26 @@ std::vector<double> lawCountsOf(const discounting::RandomDiscount& random, Date 
     return counts;
 }
 
+/// Counts in parts of a path as whole paths, `paths` in all: what stands up to each bin's end is rounded, so
+/// that no bin is off by more than one. Counts that come to nothing stay so.
+BinCounts wholePaths(const BinCounts& counts, long paths) {
+    double total = 0.0;
+    for (const std::int64_t count : counts) {
+        total += static_cast<double>(count);
+    }
+    BinCounts whole;
+    double upTo = 0.0;
+    std::int64_t before = 0;
+    for (const std::int64_t count : counts) {
+        upTo += static_cast<double>(count);
+        const std::int64_t rounded =
+            total > 0.0 ? std::llround(static_cast<double>(paths) * (upTo / total)) : 0;
+        whole.push_back(rounded - before);
+        before = rounded;
+    }
+    return whole;
+}
+
 /// Nothing where there is no error to measure by.
 std::optional<double> errorsApart(double estimate, double closedForm, const std::optional<double>& error) {
     if (!error || !(*error > 0.0)) {
@@ -391,10 +411,8 @@ outcome::Outcome<Simulated> wholeOf(const Market& market, const SimulationAsked&
             counts[bin] += part.counts[bin];
         }
     }
-    for (const std::int64_t count : counts) {
-        result.counts.push_back(static_cast<double>(count) / static_cast<double>(discounting::countsAPath));
-    }
     result.estimate = deal.simulation.estimate(indices, sums);
+    result.counts = wholePaths(counts, result.estimate.paths);
     if (result.estimate.priceError) {
         const double reach = result.estimate.reach95 * *result.estimate.priceError;
         result.interval95 = {result.estimate.price - reach, result.estimate.price + reach};

@@ -81,8 +81,10 @@ struct Simulated {
     long blocksDone = 0;
     long blocks = 0;
     discounting::Bins bins;
-    std::vector<double> counts; ///< outcomes below the bins, in each, above them, in paths by their weights
-    std::vector<double> edges;  ///< of the bins, one more than there are
+    /// Outcomes below the bins, in each, above them: whole paths, which add up to all; where paths weigh
+    /// unalike, as many as their weights come to.
+    discounting::BinCounts counts;
+    std::vector<double> edges;     ///< of the bins, one more than there are
     std::vector<double> lawCounts; ///< how many of so many paths the law puts into each bin, where it is
                                    ///< known and has no single points
     std::vector<ForwardReckoned> forwards;

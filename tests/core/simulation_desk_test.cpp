@@ -85,6 +85,8 @@ TEST_SUITE("simulation: desk") {
             CHECK(combined.estimate.factor == whole.estimate.factor);
             CHECK(combined.counts == whole.counts);
             CHECK(combined.blocksDone == 32);
+            CHECK(std::accumulate(whole.counts.begin(), whole.counts.end(), std::int64_t{0}) ==
+                  whole.estimate.paths);
             parts.pop_back();
             const desk::Simulated begun = valueOf(desk::combine(market, asked, parts));
             CHECK(begun.blocksDone == 26);

@@ -149,7 +149,7 @@ void writeFactorAndForward(Writer& writer, std::string_view name, const Number& 
 }
 
 void writeHistogram(Writer& writer, const desk::Simulated& result) {
-    const std::vector<double>& counts = result.counts;
+    const discounting::BinCounts& counts = result.counts;
     writer.key("histogram").beginObject();
     writer.member("low", result.bins.low);
     writer.member("high", result.bins.high);

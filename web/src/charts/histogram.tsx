@@ -36,7 +36,7 @@ function binsOf({ edges, counts, law }: Histogram): readonly Bin[] {
 /** Where the bin lies, what came up there, and what the law puts there. */
 function readingsOf({ low, high, count, law }: Bin): readonly string[] {
   return [
-    `${formatNumber(low, digits)} to ${formatNumber(high, digits)}: ${formatNumber(count, 0)} paths`,
+    `${formatNumber(low, digits)} to ${formatNumber(high, digits)}: ${formatNumber(count)} paths`,
     ...(law === null ? [] : [`by the law ${formatNumber(law, 0)}`]),
   ];
 }
@@ -61,7 +61,7 @@ function Values({ histogram, bins }: { readonly histogram: Histogram; readonly b
         <tbody>
           <tr>
             <th scope="row">below {formatNumber(histogram.low, digits)}</th>
-            <td class="num">{formatNumber(histogram.below, 1)}</td>
+            <td class="num">{formatNumber(histogram.below)}</td>
             {histogram.law && <td />}
           </tr>
           {bins.map((bin, i) => (
@@ -69,13 +69,13 @@ function Values({ histogram, bins }: { readonly histogram: Histogram; readonly b
               <th scope="row">
                 {formatNumber(bin.low, digits)} to {formatNumber(bin.high, digits)}
               </th>
-              <td class="num">{formatNumber(bin.count, 1)}</td>
+              <td class="num">{formatNumber(bin.count)}</td>
               {bin.law !== null && <td class="num">{formatNumber(bin.law, 1)}</td>}
             </tr>
           ))}
           <tr>
             <th scope="row">above {formatNumber(histogram.high, digits)}</th>
-            <td class="num">{formatNumber(histogram.above, 1)}</td>
+            <td class="num">{formatNumber(histogram.above)}</td>
             {histogram.law && <td />}
           </tr>
         </tbody>
