@@ -35,8 +35,8 @@ struct IncomeLine {
     std::string effect;     ///< what its treatment does to the price, in a sentence
     double wouldTake = 0.0; ///< cash: what it takes off the forward, or would where it were in the price; 0
                             ///< outside the time of the hedge
-    double units = 0.0;  ///< n(ex); 0 where not counted
-    double factor = 0.0; ///< P(pay), cash only
+    double units = 0.0;     ///< n(ex); 0 where not counted
+    double factor = 0.0;    ///< P(pay), cash only
     double atSettlement =
         0.0; ///< what it takes off the forward; of a proportional one, its part of `Carry::proportional`
 };

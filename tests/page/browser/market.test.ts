@@ -109,4 +109,31 @@ describe('the market in Chromium', () => {
     expect(rows.length).toBe(6);
     for (const row of rows) expect(row[0]).toBe(row[1]);
   });
+
+  test('what is usual in a market fills the sheet, says its source, and an edited figure says so', async () => {
+    await page.press('5');
+    await person.choose('As is usual for', 'shares-uk');
+    await person.see('Finance Act 1986, section 87');
+    expect(await (await person.field('To buy')).evaluate((field) => field.value)).toBe('0.5');
+    await person.put('Settles after', '3');
+    await person.see('Edited since: settlement.');
+    await person.press('Set them again');
+    await page.raw.waitForFunction(() => !document.body.innerText.includes('Edited since'));
+    expect(await (await person.field('Settles after')).evaluate((field) => field.value)).toBe('2');
+  });
+
+  test('a distribution that is passed on to the client is no longer in the price', async () => {
+    const before = await person.prices();
+    await person.press('Income');
+    const summary = await page.raw.waitForSelector('.distribution summary');
+    await summary?.evaluate((line) => (line as HTMLElement).click());
+    await person.choose('It is', 'passed-through');
+    const after = await person.pricesAfter(before);
+    expect(Number(after[0])).toBeGreaterThan(Number(before[0]));
+    await page.raw.$$eval('[role="tab"]', (tabs) =>
+      (tabs.find((tab) => tab.textContent?.startsWith('Income')) as HTMLElement | undefined)?.click(),
+    );
+    await person.see('passed on to the client when it is paid');
+    await person.see('would take');
+  });
 });

@@ -4,6 +4,7 @@ import { Rows, type RowColumn } from '../fields/rows';
 import type { AssetKind } from '../model/request';
 import { market } from '../store/session';
 import { Card, type CardView } from './card';
+import { PresetField } from './preset-field';
 import { said } from './words';
 
 const kindNames: Readonly<Record<AssetKind, string>> = {
@@ -36,6 +37,7 @@ export function ConventionsCard({ alwaysOpen }: CardView) {
       summary={`settles in ${said(asset.lag)} days, ${calendars}, ${tick}`}
       alwaysOpen={alwaysOpen}
     >
+      <PresetField />
       <Field label="Name" path="market/asset/name" kind="text" />
       <div class="field-row">
         <Choice

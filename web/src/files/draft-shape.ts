@@ -81,6 +81,7 @@ const lately = (oneOf: readonly string[]): Shape => ({ added: { oneOf }, before:
 const lateText: Shape = { added: text, before: '' };
 
 const market = members({
+  preset: lateText,
   asOf: text,
   asset: members({
     kind: { oneOf: ['share', 'index', 'currency-pair', 'commodity'] },

@@ -167,6 +167,8 @@ export interface LagRow {
   readonly lag: string;
 }
 export interface MarketDraft {
+  /** Which of the usual ways the sheet was filled with; empty for none. */
+  readonly preset: string;
   readonly asOf: string;
   readonly asset: {
     readonly kind: AssetKind;
@@ -312,6 +314,7 @@ export const emptyDeal: DealDraft = {
     margin: { unit: 'bp-of-spot', amount: '' },
   },
   market: {
+    preset: '',
     asOf: '',
     asset: {
       kind: 'share',

@@ -294,6 +294,7 @@ export function marketFrom(from: Market, sign: DecimalSign): MarketDraft {
   const write = new Writer(sign);
   const spot = both(from.spot);
   return {
+    preset: '',
     asOf: write.date(from.asOf),
     asset: asset(from.asset, write),
     spot: { bid: write.number(spot.bid, 'price'), offer: write.number(spot.offer, 'price') },
