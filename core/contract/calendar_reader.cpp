@@ -15,6 +15,16 @@ std::vector<std::string_view> knownCodes() {
     return codes;
 }
 
+std::string codesOf(const BusinessCalendar& calendar) {
+    Writer writer;
+    writer.beginList();
+    for (const std::string& code : calendar.centres()) {
+        writer.value(code);
+    }
+    writer.endList();
+    return writer.take();
+}
+
 } // namespace
 
 std::vector<std::string> readCentres(const Value& list) {
@@ -45,7 +55,7 @@ std::vector<Date> readDates(const Value& list) {
 }
 
 BusinessCalendar readCalendar(Reader& object, const BusinessCalendar& fallback) {
-    const Value calendars = object.optional("calendars");
+    const Value calendars = object.optional("calendars", codesOf(fallback));
     if (!calendars.present()) {
         for (const std::string_view own : {"holidays", "openDays"}) {
             object.forbid(

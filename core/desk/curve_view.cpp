@@ -38,21 +38,29 @@ std::set<Date> datesOf(const discounting::Curve& curve, Date until) {
     return all;
 }
 
-} // namespace
-
-outcome::Outcome<CurveView> curveView(const discounting::Curve& curve, Date until) {
-    outcome::Review found = curve.review(until + oneDay);
+outcome::Outcome<CurveView> viewAt(const discounting::Curve& curve, const std::set<Date>& dates) {
+    outcome::Review found = curve.review(*dates.rbegin() + oneDay);
     if (!found.faults.empty()) {
         return found.faults;
     }
     // To look past a curve's end is not to price there; that its end is held is seen.
     CurveView view;
-    for (const Date date : datesOf(curve, until)) {
+    for (const Date date : dates) {
         view.points.push_back(pointAt(curve, date));
     }
     view.instruments = curve.instruments();
     view.notices = std::move(found.notices);
     return view;
+}
+
+} // namespace
+
+outcome::Outcome<CurveView> curveView(const discounting::Curve& curve, Date until) {
+    return viewAt(curve, datesOf(curve, until));
+}
+
+outcome::Outcome<CurveView> curveView(const discounting::Curve& curve, const std::vector<Date>& asked) {
+    return viewAt(curve, {asked.begin(), asked.end()});
 }
 
 } // namespace forwright::desk

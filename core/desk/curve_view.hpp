@@ -32,5 +32,8 @@ inline constexpr int mostCurvePoints = 400;
 /// thinned, with both sides of every date at which its forward rate jumps. Refused as the curve's own review
 /// does.
 [[nodiscard]] outcome::Outcome<CurveView> curveView(const discounting::Curve& curve, Date until);
+/// The same at dates asked for, at least one, none before the curve's own, in whatever order.
+[[nodiscard]] outcome::Outcome<CurveView> curveView(const discounting::Curve& curve,
+                                                    const std::vector<Date>& asked);
 
 } // namespace forwright::desk

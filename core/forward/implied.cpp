@@ -15,8 +15,8 @@ constexpr std::size_t mostRows = 200;
 /// A curve through the rows, whose parameters are named by them.
 class ImpliedCurve final : public discounting::Curve {
   public:
-    ImpliedCurve(CurvePtr pillars, std::size_t rows)
-        : Curve(pillars->asOf()), pillars_(std::move(pillars)), rows_(rows) {}
+    ImpliedCurve(CurvePtr pillars, std::vector<Date> ends)
+        : Curve(pillars->asOf()), pillars_(std::move(pillars)), ends_(std::move(ends)) {}
 
     [[nodiscard]] double logFactor(Date u) const override { return pillars_->logFactor(u); }
     [[nodiscard]] std::vector<double> logFactorGradient(Date u) const override {
@@ -35,20 +35,26 @@ class ImpliedCurve final : public discounting::Curve {
             fault.at = "/rows";
         }
         for (outcome::Notice& notice : review.notices) {
-            notice.at = rowAt(rows_ - 1) + "/at";
+            notice.at = rowAt(ends_.size() - 1) + "/at";
         }
         return review;
     }
     [[nodiscard]] std::string convention() const override {
-        return "implied by " + std::to_string(rows_) + (rows_ == 1 ? " forward quoted" : " forwards quoted");
+        return "implied by " + std::to_string(ends_.size()) +
+               (ends_.size() == 1 ? " forward quoted" : " forwards quoted");
     }
+    [[nodiscard]] std::vector<Date> jumps() const override { return ends_; }
 
     [[nodiscard]] static std::string rowAt(std::size_t row) { return "/rows/" + std::to_string(row); }
 
   private:
     CurvePtr pillars_;
-    std::size_t rows_;
+    std::vector<Date> ends_;
 };
+
+/// How much of a miss in ln F is let pass: a forward of 1e9 has its logarithm to 4e-15, and what income takes
+/// off adds to it.
+constexpr double tolerance = 2e-13;
 
 double sideOf(const TwoWay<double>& both, Side side) {
     switch (side) {
@@ -82,7 +88,7 @@ discounting::Condition ofPair(const SideInputs& inputs, const Schedule& schedule
                 byLogs[1] = 1.0;
                 return logs[1] - logs[0] - wanted;
             },
-            1e-14};
+            tolerance};
 }
 
 /// ln(S·P(t_s)·n(h) − Σ g·c·n(ex)·P(pay)) = ln F + ln P(T_s), where n has the yield's factor from u to T in
@@ -92,7 +98,7 @@ discounting::Condition ofYield(const Market& market, const SideInputs& inputs, c
     const auto withoutYield = [&](Date u) {
         return inputs.units.proportionalAfter(u) * inputs.units.feeFactor(u);
     };
-    discounting::Condition condition{{schedule.maturity, schedule.holdFrom}, {}, 1e-14};
+    discounting::Condition condition{{schedule.maturity, schedule.holdFrom}, {}, tolerance};
     std::vector<double> amounts{inputs.spot * inputs.funding->factor(schedule.spot) *
                                 withoutYield(schedule.holdFrom)};
     for (const std::size_t index : inputs.cashRows) {
@@ -184,7 +190,7 @@ outcome::Outcome<CurvePtr> curveOn(const Market& market, const QuotedForwards& q
             "the income until then."};
     }
     return CurvePtr(
-        std::make_shared<ImpliedCurve>(std::get<discounting::Calibrated>(found).curve, rows.size()));
+        std::make_shared<ImpliedCurve>(std::get<discounting::Calibrated>(found).curve, std::move(pillars)));
 }
 
 } // namespace

@@ -165,6 +165,10 @@ class Teller {
                           {"h", from, ""},
                           {"T", schedule_.maturity, ""}};
             step.convention = "exactly one unit is there at maturity";
+            if (market_.income.yieldCurves) {
+                step.convention +=
+                    "; Y from a curve, " + market_.income.yieldCurves->on(inputs_.side)->convention();
+            }
             step.effect = effect;
             return step;
         });
@@ -340,9 +344,21 @@ outcome::Review review(const Market& market, const Schedule& schedule) {
         outcome::append(review.faults, at, std::move(more.faults));
         outcome::append(review.notices, at, std::move(more.notices));
     };
+    // What is to be said of a curve with sides is said of the fair one; no side may be worse.
+    const auto addSides = [&review](const std::string& at, const CurvePtr& bid, const CurvePtr& offer,
+                                    Date end) {
+        for (const CurvePtr& curve : {bid, offer}) {
+            if (review.faults.empty()) {
+                outcome::append(review.faults, at, curve->review(end).faults);
+            }
+        }
+    };
     add(market.at + "/funding/curve", market.funding.curve->review(last));
     if (market.base) {
         add(market.at + "/base/curve", market.base->curve->review(last));
+        if (market.base->sides) {
+            addSides(market.at + "/base/curve", market.base->sides->bid, market.base->sides->offer, last);
+        }
     }
     // The quote does not discount by it, so its end being passed is no matter; that it is a curve at all is.
     if (market.discount != market.funding.curve) {
@@ -354,7 +370,9 @@ outcome::Review review(const Market& market, const Schedule& schedule) {
         }
     };
     if (market.income.yieldCurves) {
-        add(market.at + "/income/yield", market.income.yieldCurves->fair->review(schedule.maturity));
+        const income::YieldCurves& curves = *market.income.yieldCurves;
+        add(market.at + "/income/yield", curves.fair->review(schedule.maturity));
+        addSides(market.at + "/income/yield", curves.bid, curves.offer, schedule.maturity);
     } else {
         addRate("/income/yield", market.income.yield);
     }

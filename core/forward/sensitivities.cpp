@@ -29,6 +29,17 @@ std::vector<Weight> baseWeights(const Schedule& schedule, const Price& price) {
     return {{schedule.spot, -grown}, {schedule.settlement, grown}};
 }
 
+/// The units n(u) hang on P_y(T)/P_y(u).
+std::vector<Weight> yieldWeights(const Market& market, const Schedule& schedule, const Price& price) {
+    const double grown = price.costOfUnits / price.settlementFactor;
+    std::vector<Weight> weights{{schedule.holdFrom, -grown}, {schedule.maturity, grown}};
+    for (const CashInPrice& cash : price.cash) {
+        weights.push_back({market.income.cash[cash.row].ex, cash.atSettlement});
+        weights.push_back({schedule.maturity, -cash.atSettlement});
+    }
+    return weights;
+}
+
 CurveSensitivity toCurve(const discounting::Curve& curve, const std::vector<Weight>& weights,
                          const std::string& at) {
     CurveSensitivity result;
@@ -101,6 +112,10 @@ Sensitivities sensitivities(const Market& market, const Schedule& schedule, cons
     } else {
         result.fee = toUnits(market, schedule, price, [&fair](Date u) { return fair.units.feeSlope(u); });
         result.yield = toUnits(market, schedule, price, [&fair](Date u) { return fair.units.yieldSlope(u); });
+        if (market.income.yieldCurves) {
+            result.yieldCurve = toCurve(*market.income.yieldCurves->fair,
+                                        yieldWeights(market, schedule, price), market.at + "/income/yield");
+        }
         result.cash = toCash(market, fair, price);
     }
     result.day = toDay(market, schedule, price);

@@ -50,6 +50,32 @@ std::vector<json> startingPoints() {
         request["market"]["funding"]["curve"] = curve;
         all.push_back(request);
     }
+    json bootstrapped = shareRequest();
+    bootstrapped["market"]["funding"]["curve"] = read(
+        R"({"kind":"instruments","interpolation":"monotone-cubic","calendars":["EUTA"],"items":[{"type":"deposit","tenor":"3M","rate":0.02},
+        {"type":"fra","start":"3M","end":"6M","rate":0.021},{"type":"overnight-swap","tenor":"2Y","rate":0.024,"payments":"quarterly"}],
+        "turns":[{"from":"2026-12-31","to":"2027-01-04","spread":0.002}]})");
+    all.push_back(bootstrapped);
+    bootstrapped.erase("want");
+    bootstrapped.erase("inquiry");
+    bootstrapped["task"] = "curve";
+    all.push_back(bootstrapped);
+    json quotedPair = pairRequest();
+    quotedPair["market"]["base"]["curve"] = read(
+        R"({"kind":"forwards","quoted":"points","interpolation":"linear-zero","rows":[{"at":"1M","value":{"bid":15.1,"offer":15.9}},{"at":"2027-06-18","value":90}],"against":0.02})");
+    quotedPair["market"]["base"].erase("lendSpread");
+    quotedPair["market"]["base"].erase("borrowSpread");
+    all.push_back(quotedPair);
+    json listed = shareRequest();
+    listed["market"]["income"]["yield"] = read(
+        R"({"kind":"forwards","rows":[{"at":"2027-03-19","value":{"bid":99,"offer":100}},{"at":"1Y","value":99}]})");
+    all.push_back(listed);
+    listed.erase("want");
+    listed.erase("inquiry");
+    listed["task"] = "curve";
+    listed["which"] = "yield";
+    listed["dates"] = json::array({"1M", "2027-06-18"});
+    all.push_back(listed);
     json tenors = read(
         R"({"format":"forwright/1","task":"tenors","maturities":["1W","3M","2027-06-18"],"roll":"following",
         "grid":{"maturity":"1Y","spot":[-0.05,0],"funding":[0,0.01]}})");

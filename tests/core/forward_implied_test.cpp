@@ -1,10 +1,13 @@
 #include "discounting/curves.hpp"
+#include "forward/carry_table.hpp"
 #include "forward/implied.hpp"
 #include "forward/ledger.hpp"
 #include "forward/quote.hpp"
+#include "forward/sensitivities.hpp"
 #include "forward_fixtures.hpp"
 
 #include <cmath>
+#include <utility>
 
 using namespace forwright;
 using namespace forwright::fixtures;
@@ -48,9 +51,140 @@ forward::Quote quoteTo(const forward::Market& market, const forward::Maturity& m
     return valueOf(forward::quote(market, inquiry, false));
 }
 
+/// A pair, a share and a commodity with everything that has two sides, and rows of each.
+std::vector<std::pair<forward::Market, forward::QuotedForwards>> everyMarket() {
+    forward::Market ofPair = pair();
+    ofPair.base.reset();
+    ofPair.hedgeCost = {0.0001, 0.0002};
+    forward::Market share = fullShare();
+    share.income.yield = {};
+    forward::Market ofCommodity = commodity();
+    ofCommodity.income.yield = {};
+    forward::QuotedForwards outrights;
+    outrights.rows = {row("2026-12-10", 1.1002, 1.1004), row("2027-03-03", 1.1046, 1.1049),
+                      row("2027-12-03", 1.1190, 1.1196), row("2029-12-03", 1.1301, 1.1322)};
+    forward::QuotedForwards listed;
+    listed.rows = {row("2027-03-19", 48.1, 48.4), row("2027-06-18", 47.2, 47.9),
+                   row("2028-06-16", 46.8, 48.3)};
+    forward::QuotedForwards deliveries;
+    deliveries.rows = {row("2027-01-20", 452.0, 454.0), row("2027-06-18", 463.0, 466.5)};
+    return {{ofPair, outrights}, {share, listed}, {ofCommodity, deliveries}};
+}
+
+/// The fair forward where the zero rate implied at one row is moved: through pillars of the zero rates.
+double fairWithZeroMoved(forward::Market market, const forward::Schedule& schedule,
+                         const forward::QuotedForwards& quoted, std::size_t moved, double by) {
+    const bool ofPair = market.base.has_value();
+    const auto parameters = (ofPair ? market.base->curve : market.income.yieldCurves->fair)->parameters();
+    discounting::Pillars points;
+    points.interpolation = quoted.interpolation;
+    for (std::size_t i = 0; i < parameters.size(); ++i) {
+        points.pillars.push_back(
+            {std::get<Date>(quoted.rows[i].maturity.at), parameters[i].value + (i == moved ? by : 0.0)});
+    }
+    const discounting::CurvePtr curve = valueOf(discounting::pillars(market.asOf, points));
+    if (ofPair) {
+        market.base = forward::Funding{curve, 0.0, 0.0, std::nullopt};
+    } else {
+        market.income.yieldCurves = income::YieldCurves{curve, curve, curve};
+    }
+    return forward::price(market, schedule, Side::fair).forward;
+}
+
+std::string refused(const forward::Market& market, std::vector<forward::ForwardQuote> rows) {
+    forward::QuotedForwards quoted;
+    quoted.rows = std::move(rows);
+    std::string all;
+    for (const auto& fault : forward::implied(market, quoted, "").faults()) {
+        all += (all.empty() ? "" : " ") + fault.at + " " + fault.code;
+    }
+    return all;
+}
+
 } // namespace
 
 TEST_SUITE("forward: implied by quoted forwards") {
+    TEST_CASE("derivatives by implied zero rates are those of finite differences, each at its row") {
+        for (const auto interpolation : everyInterpolation) {
+            CAPTURE(discounting::nameOf(interpolation));
+            for (auto [market, quoted] : everyMarket()) {
+                CAPTURE(forward::nameOf(market.asset.kind));
+                quoted.interpolation = interpolation;
+                const forward::Market made = withImplied(market, quoted);
+                const forward::Schedule schedule = scheduled(made, on("2027-05-12"));
+                const forward::SideInputs fair = forward::inputsOf(made, schedule, Side::fair);
+                const forward::Price price = forward::price(made, schedule, fair);
+                const forward::Sensitivities found = forward::sensitivities(made, schedule, fair, price);
+                CHECK(found.base.has_value() != found.yieldCurve.has_value());
+                const forward::CurveSensitivity& curve = found.base ? *found.base : *found.yieldCurve;
+                REQUIRE(curve.parameters.size() == quoted.rows.size());
+                if (!found.base) {
+                    CHECK(std::fabs(curve.parallel - found.yield) < 1e-12 * price.forward);
+                }
+                for (std::size_t i = 0; i < curve.parameters.size(); ++i) {
+                    CAPTURE(i);
+                    CHECK(
+                        curve.parameters[i].parameter.at.ends_with("/rows/" + std::to_string(i) + "/value"));
+                    constexpr double step = 1e-5;
+                    const double up = fairWithZeroMoved(made, schedule, quoted, i, step);
+                    const double down = fairWithZeroMoved(made, schedule, quoted, i, -step);
+                    CHECK(std::fabs(curve.parameters[i].change - 1e-4 * (up - down) / (2.0 * step)) <
+                          1e-8 * price.forward);
+                }
+            }
+        }
+    }
+
+    TEST_CASE("the path's table agrees with the price on every side") {
+        for (const auto& [market, quoted] : everyMarket()) {
+            const forward::Market made = withImplied(market, quoted);
+            const forward::Schedule schedule = scheduled(made, on("2027-06-10"));
+            REQUIRE(forward::CarryTable::separates(made));
+            for (const Side side : {Side::fair, Side::bid, Side::offer}) {
+                const forward::CarryTable table(made, schedule, side);
+                CHECK(table.forward(schedule.maturity, schedule.settlement) ==
+                      Approx(forward::price(made, schedule, side).forward).epsilon(1e-12));
+            }
+        }
+    }
+
+    TEST_CASE("prices of any size are met: what is let pass is no more than their logarithms' rounding") {
+        forward::Market large = plain(forward::AssetKind::index, "2026-12-01", 3.7e7, 0.03);
+        large.income.cash = {{"/c/0", day("2027-03-10"), day("2027-03-24"), {9.1e6, 9.1e6, 9.1e6}}};
+        forward::Market small = plain(forward::AssetKind::index, "2026-12-01", 3.7e-7, 0.03);
+        for (const auto& [market, scale] : {std::pair{large, 1e7}, {small, 1e-7}}) {
+            forward::QuotedForwards quoted;
+            for (const char* at : {"2027-01-15", "2027-02-19", "2027-03-19", "2027-06-18"}) {
+                const double price = (quoted.rows.size() < 2 || scale < 1.0 ? 3.71 : 2.83) * scale;
+                quoted.rows.push_back(row(at, price, 1.001 * price));
+            }
+            const forward::Market made = withImplied(market, quoted);
+            for (const forward::ForwardQuote& given : quoted.rows) {
+                CHECK(quoteTo(made, given.maturity).offer.forward ==
+                      Approx(given.value.offer).epsilon(1e-12));
+            }
+        }
+    }
+
+    TEST_CASE("what cannot be is refused and named") {
+        forward::Market market = pair();
+        market.base.reset();
+        CHECK(refused(market, {}) == "/rows empty-list");
+        CHECK(refused(market, std::vector<forward::ForwardQuote>(201, row("2027-03-03", 1.0, 1.0))) ==
+              "/rows too-many-rows");
+        CHECK(refused(market, {row("2027-03-03", 1.2, 1.1)}) == "/rows/0/value bid-above-offer");
+        CHECK(refused(market, {row("2027-03-03", 0.0, 1.1)}) == "/rows/0/value not-positive");
+        CHECK(refused(market, {row("2027-03-03", std::nan(""), 1.1)}) == "/rows/0/value not-positive");
+        CHECK(refused(market, {row("2027-03-03", 1.1, HUGE_VAL)}) == "/rows/0/value not-positive");
+        CHECK(refused(market, {row("2027-03-03", 1.1, 1.1), row("2027-03-03", 1.2, 1.2)}) ==
+              "/rows/1/at not-rising");
+        CHECK(refused(market, {row("2027-03-06", 1.1, 1.1)}) == "/rows/0/at not-a-business-day");
+        forward::Market rich = fullShare();
+        rich.income.yield = {};
+        rich.income.cash[1].amount = {4000.0, 4000.0, 4000.0};
+        CHECK(refused(rich, {row("2027-06-18", 47.0, 48.0)}) == "/rows/0/value no-solution");
+    }
+
     TEST_CASE(
         "both sides of every row come out of the market again, in every interpolation, and ledgers close") {
         forward::Market pair = plain(forward::AssetKind::currencyPair, "2026-12-01", 1.1, 0.04);

@@ -11,7 +11,7 @@ import random
 from datetime import date, timedelta
 from pathlib import Path
 
-from mpmath import diff, exp, floor, ceil, log, mp, mpf, sqrt
+from mpmath import diff, exp, findroot, floor, ceil, log, mp, mpf, sqrt
 
 mp.dps = 50
 AS_OF = date(2026, 12, 1)
@@ -120,6 +120,8 @@ def log_factor(curve, u):
         return log_of_rate(curve, AS_OF, u)
     if curve["kind"] == "pillars":
         return log_of_pillars(curve, u)
+    if curve["kind"] == "instruments":
+        return log_of_instruments(curve, u)
     model, t = curve["model"], years(u)
     if model in ("ho-lee", "hull-white"):
         return log_factor(curve["fit"], u)
@@ -165,6 +167,102 @@ def law(curve, u):
     return mean, sum(p * (x - mean) ** 2 for p, x in all_)
 
 
+# ---- curves from quotes: each pillar in its turn, by a root finder ------------------------------------------------
+
+
+def through(interpolation, times, zeros, t):
+    """ln P through zero rates at times, without the limits of a request's pillars."""
+    if interpolation == "log-linear":
+        return log_linear([(mpf(0), mpf(0)), *((x, -z * x) for x, z in zip(times, zeros))], t)
+    if t <= times[0]:
+        return -zeros[0] * t
+    if t >= times[-1]:
+        return -zeros[-1] * t
+    return -log_linear(list(zip(times, zeros)), t) * t
+
+
+def solved(interpolation, ends, misses):
+    """ln P as a function, every miss in its turn brought to 0; a miss looks no further than its end."""
+    times, zeros = [], []
+    for end, miss in zip(ends, misses):
+        times.append(years(end))
+        zeros.append(findroot(lambda z: miss(lambda u: through(interpolation, times, [*zeros, z], years(u))), mpf("0.02")))
+    return lambda u: through(interpolation, times, zeros, years(u))
+
+
+def after(start, tenor):
+    """Modified following; `start` is no month's last business day."""
+    count, unit = int(tenor[:-1]), tenor[-1]
+    if unit in "DW":
+        return following(start + timedelta(count * (7 if unit == "W" else 1)))
+    months = start.month - 1 + count * (12 if unit == "Y" else 1)
+    day = date(start.year + months // 12, months % 12 + 1, start.day)
+    if following(day).month == day.month:
+        return following(day)
+    while not is_good(day):
+        day -= timedelta(1)
+    return day
+
+
+def fraction(item, start, end):
+    return mpf((end - start).days) / (360 if item["dayCount"] == "ACT/360" else 365)
+
+
+def miss_of(curve, item):
+    spot = settled(AS_OF, curve["spotLag"])
+    rate = mpf(str(item["rate"]))
+
+    def taken(u):
+        return sum(
+            mpf(str(turn["spread"])) * max(mpf(0), min(years(u), years(date.fromisoformat(turn["to"]))) - years(date.fromisoformat(turn["from"])))
+            for turn in curve.get("turns", [])
+        )
+
+    if item["type"] == "overnight-swap":
+        months = {"annual": 12, "semiannual": 6, "quarterly": 3}[item["payments"]]
+        length = int(item["tenor"][:-1]) * 12
+        days = [spot, *(after(spot, f"{m}M") for m in range(months, length + 1, months))]
+        miss = lambda p: p(spot) - p(days[-1]) - rate * sum(fraction(item, s, e) * p(e) for s, e in zip(days, days[1:]))
+    else:
+        start, days = (spot, [after(spot, item["tenor"])]) if item["type"] == "deposit" else (after(spot, item["start"]), [after(spot, item["end"])])
+        miss = lambda p: p(start) - p(days[-1]) * (1 + rate * fraction(item, start, days[-1]))
+    return days[-1], lambda log_of: miss(lambda u: exp(log_of(u) - taken(u))), taken
+
+
+SOLVED = {}
+
+
+def log_of_instruments(curve, u):
+    key = json.dumps(curve)
+    if key not in SOLVED:
+        ends, misses, taken = zip(*(miss_of(curve, item) for item in curve["items"]))
+        SOLVED[key] = solved(curve["interpolation"], ends, misses), taken[0]
+    log_of, taken = SOLVED[key]
+    return log_of(u) - taken(u)
+
+
+def log_of_forwards(market, curve, side, u):
+    """Of a base curve or a yield: the side's own."""
+    key = json.dumps([market, side])
+    if key not in SOLVED:
+        ends = [date.fromisoformat(row["at"]) for row in curve["rows"]]
+
+        def miss_of_row(row, end):
+            return lambda log_of: log(price(market, end, settlement_of(market, end), side, implied=log_of)[0] / on(side, row["value"]))
+
+        SOLVED[key] = solved(curve["interpolation"], ends, [miss_of_row(row, end) for row, end in zip(curve["rows"], ends)])
+    return SOLVED[key](u)
+
+
+def settlement_of(market, maturity):
+    asset = market["asset"]
+    return maturity if asset["kind"] in ("currency-pair", "commodity") else settled(maturity, asset["settlementLag"])
+
+
+def is_implied(curve):
+    return isinstance(curve, dict) and curve.get("kind") == "forwards"
+
+
 # ---- the forward -------------------------------------------------------------------------------------------------
 
 
@@ -187,7 +285,11 @@ def fee_on(side, fee):
     return {**as_rate(bid), "rate": value[side]}
 
 
-def price(market, maturity, settlement, side, log_of=log_factor):
+def price(market, maturity, settlement, side, log_of=log_factor, implied=None):
+    """`implied` stands for what quoted forwards imply while they are solved for."""
+    quoted = market["base"]["curve"] if "base" in market else market.get("income", {}).get("yield", 0)
+    if is_implied(quoted) and implied is None:
+        implied = lambda u: log_of_forwards(market, quoted, side, u)
     asset = market["asset"]
     spot_date = settled(AS_OF, asset["settlementLag"])
     hold = spot_date if asset["kind"] in ("currency-pair", "commodity") else AS_OF
@@ -203,6 +305,9 @@ def price(market, maturity, settlement, side, log_of=log_factor):
     def p(u):
         return factor(market["funding"], u, side == "bid")
 
+    if "base" in market and is_implied(quoted):
+        units = exp(implied(settlement) - implied(spot_date))
+        return spot * p(spot_date) * units / p(settlement), units, spot, p(spot_date), p(settlement), mpf(0)
     if "base" in market:
         units = factor(market["base"], settlement, side == "offer") / factor(market["base"], spot_date, side == "offer")
         return spot * p(spot_date) * units / p(settlement), units, spot, p(spot_date), p(settlement), mpf(0)
@@ -212,7 +317,8 @@ def price(market, maturity, settlement, side, log_of=log_factor):
     end = {"fair": None, "offer": "low", "bid": "high"}[side]
 
     def units_after(u):
-        n = exp(log_of_rate(income.get("yield", 0), u, maturity) + log_of_rate(fee_on(side, market.get("lendingFee", 0)), u, maturity))
+        paid = implied(maturity) - implied(u) if is_implied(quoted) else log_of_rate(income.get("yield", 0), u, maturity)
+        n = exp(paid + log_of_rate(fee_on(side, market.get("lendingFee", 0)), u, maturity))
         for row in income.get("proportional", []):
             if u < date.fromisoformat(row["ex"]) <= maturity and hold < date.fromisoformat(row["ex"]):
                 d = mpf(str(row.get(end, row["fraction"])))
@@ -259,6 +365,35 @@ def some_pillars(quote, interpolation):
         value = round(float(exp(-mpf(zero) * years(day))), 8) if quote == "factor" else round(zero, 4)
         curve["pillars"].append({"at": day.isoformat(), "value": value})
     return curve
+
+
+def some_instruments(interpolation):
+    level = between(0.01, 0.04, 4)
+    rate = lambda: round(level + between(-0.003, 0.003, 4), 4)
+    deposits = [{"type": "deposit", "tenor": tenor, "rate": rate(), "dayCount": "ACT/360"} for tenor in ("1W", "1M", "3M")]
+    agreements = [{"type": "fra", "start": f"{m}M", "end": f"{m + 3}M", "rate": rate(), "dayCount": "ACT/360"} for m in (3, 6)]
+    payments = dice.choice(["annual", "semiannual", "quarterly"])
+    swaps = [{"type": "overnight-swap", "tenor": tenor, "rate": rate(), "dayCount": "ACT/365.FIXED", "payments": payments} for tenor in ("1Y", "2Y", "3Y")]
+    return {
+        "kind": "instruments",
+        "interpolation": interpolation,
+        "spotLag": 2,
+        "items": deposits + agreements + swaps,
+        "turns": [{"from": "2026-12-31", "to": "2027-01-04", "spread": between(-0.01, 0.02, 4)}],
+    }
+
+
+def quoted_forwards(market, interpolation):
+    """Near to what funding alone would make of them."""
+    spot = sum(market["spot"].values()) / 2
+    digits = 5 if market["asset"]["kind"] == "currency-pair" else 2
+    rows = []
+    for day in (date(2026, 12, 21), date(2027, 3, 17), date(2027, 9, 15), date(2028, 9, 20)):
+        mean = spot * float(exp(mpf(between(-0.01, 0.02, 4)) * years(day)))
+        half = spot * between(0.0001, 0.001, 5)
+        rows.append({"at": day.isoformat(), "value": {"bid": round(mean - half, digits), "offer": round(mean + half, digits)}})
+    quoted = {"quoted": "outright"} if market["asset"]["kind"] == "currency-pair" else {}
+    return {"kind": "forwards", "interpolation": interpolation, **quoted, "rows": rows}
 
 
 def some_samples():
@@ -422,8 +557,18 @@ def expectations(request, maturity, settlement):
     return expected
 
 
-def case(kind, name):
-    market = some_market(kind, CURVES[name]())
+def case_of_forwards(kind, interpolation):
+    market = some_market(kind, some_pillars("zero", "log-linear"))
+    curve = quoted_forwards(market, interpolation)
+    if kind == "currency-pair":
+        market["base"] = {"curve": curve}
+    else:
+        market["income"]["yield"] = curve
+    return case(kind, f"quoted forwards, {interpolation}", market)
+
+
+def case(kind, name, made=None):
+    market = made or some_market(kind, CURVES[name]())
     maturity = dice.choice([date(2026, 12, 14), date(2027, 3, 10), date(2027, 6, 18), date(2027, 11, 30), date(2029, 3, 1)])
     lag = market["asset"]["settlementLag"]
     settlement = maturity if kind in ("currency-pair", "commodity") else settled(maturity, lag)
@@ -446,6 +591,12 @@ def case(kind, name):
 def main():
     kinds = ("share", "index", "commodity", "currency-pair")
     cases = [case(kind, name) for kind in kinds for name in CURVES]
+    # What was added later stands at the end, so that the rows above stay as they are.
+    for interpolation in ("log-linear", "linear-zero"):
+        for kind in ("share", "currency-pair"):
+            cases.append(case(kind, f"instruments, {interpolation}", some_market(kind, some_instruments(interpolation))))
+        for kind in kinds:
+            cases.append(case_of_forwards(kind, interpolation))
     rows = ",\n".join("    " + json.dumps(row, ensure_ascii=False) for row in cases)
     about = json.dumps("Every kind of asset under every kind of curve. Written by reckoning.py.")
     Path(__file__).with_name("reckoned.json").write_text(f'{{\n  "about": {about},\n  "cases": [\n{rows}\n  ]\n}}\n', encoding="utf-8")

@@ -91,11 +91,18 @@ void writeQuoted(Writer& writer, const std::vector<desk::RepricedForward>& rows)
     });
 }
 
-void answerCurve(const forward::Market& market, Which which, dates::Date until, Findings& findings,
+/// The dates a curve is looked at: as asked for, or spread up to one.
+struct LookedAt {
+    std::vector<dates::Date> asked;
+    dates::Date until;
+};
+
+void answerCurve(const forward::Market& market, Which which, const LookedAt& dates, Findings& findings,
                  Writer& writer) {
     const discounting::CurvePtr curve = curveOf(market, which);
     const std::string at = market.at + std::string(placeOf(which));
-    const outcome::Outcome<desk::CurveView> view = desk::curveView(*curve, until);
+    const outcome::Outcome<desk::CurveView> view =
+        dates.asked.empty() ? desk::curveView(*curve, dates.until) : desk::curveView(*curve, dates.asked);
     if (!view) {
         outcome::Faults faults;
         outcome::append(faults, at, view.faults());
@@ -123,30 +130,60 @@ void answerCurve(const forward::Market& market, Which which, dates::Date until, 
     writer.endObject();
 }
 
-/// The last date to be looked at, after the market's own.
-std::optional<dates::Date> readUntil(const Value& value, dates::Date asOf) {
-    const auto at =
-        value.present() ? value.dateOrTenor() : std::optional<std::variant<dates::Date, dates::Tenor>>{};
-    if (value.present() && !at) {
-        return std::nullopt;
+constexpr int mostDays = 36'525; ///< about a hundred years
+
+dates::Date dateOf(const std::variant<dates::Date, dates::Tenor>& at, dates::Date asOf) {
+    const auto* tenor = std::get_if<dates::Tenor>(&at);
+    return tenor != nullptr ? dates::addTenor(asOf, *tenor) : std::get<dates::Date>(at);
+}
+
+/// Whether the curve is there on that date; else the fault is told.
+bool isWithin(const Value& value, dates::Date date, dates::Date first) {
+    if (date < first) {
+        value.fault("not-after-as-of", "A curve is looked at from " + dates::toIso(first) + " on; this is " +
+                                           dates::toIso(date) + ".");
+        return false;
     }
-    constexpr dates::Tenor fiveYears{5, dates::TenorUnit::year};
-    dates::Date until = dates::addTenor(asOf, fiveYears);
-    if (at) {
-        const auto* tenor = std::get_if<dates::Tenor>(&*at);
-        until = tenor != nullptr ? dates::addTenor(asOf, *tenor) : std::get<dates::Date>(*at);
-    }
-    if (until <= asOf) {
-        value.fault("not-after-as-of", "A curve is looked at to a day after the market's date, " +
-                                           dates::toIso(asOf) + "; this is " + dates::toIso(until) + ".");
-        return std::nullopt;
-    }
-    if (until >= dates::latest || dates::daysBetween(asOf, until) > 36'525) {
+    if (date >= dates::latest || dates::daysBetween(first, date) > mostDays) {
         value.fault("too-far", "A curve is looked at to 100 years ahead, and to the day before " +
                                    dates::toIso(dates::latest) + ".");
-        return std::nullopt;
+        return false;
     }
-    return until;
+    return true;
+}
+
+/// The last date to be looked at, after the market's own.
+std::optional<dates::Date> readUntil(const Value& value, dates::Date asOf) {
+    constexpr dates::Tenor fiveYears{5, dates::TenorUnit::year};
+    dates::Date until = std::min(dates::addTenor(asOf, fiveYears), dates::latest - std::chrono::days{1});
+    if (value.present()) {
+        const auto at = value.dateOrTenor();
+        if (!at) {
+            return std::nullopt;
+        }
+        until = dateOf(*at, asOf);
+    }
+    return isWithin(value, until, asOf + std::chrono::days{1}) ? std::optional{until} : std::nullopt;
+}
+
+/// The dates asked for; none where the member is not there, nothing where it is at fault.
+std::optional<std::vector<dates::Date>> readAsked(const Value& list, dates::Date asOf) {
+    std::vector<dates::Date> asked;
+    if (!list.present()) {
+        return asked;
+    }
+    const bool isList = list.rows(
+        [&](const Value& row, std::size_t /*index*/) {
+            if (const auto at = row.dateOrTenor(); at && isWithin(row, dateOf(*at, asOf), asOf)) {
+                asked.push_back(dateOf(*at, asOf));
+            }
+        },
+        desk::mostCurvePoints);
+    if (isList && list.json().size() == 0) {
+        list.fault("empty-list", "Give at least one date.");
+    }
+    return isList && !asked.empty() && asked.size() == list.json().size() ? std::optional{std::move(asked)}
+                                                                          : std::nullopt;
 }
 
 } // namespace
@@ -157,9 +194,16 @@ Calculation readCurveTask(Reader& request) {
     const auto which = whichValue.present()
                            ? whichValue.choice({Which::funding, Which::discount, Which::base, Which::yield})
                            : std::optional{Which::funding};
-    const Value untilValue = request.optional("until", quotedText("5Y"));
+    const Value datesValue = request.optional("dates");
+    const Value untilValue =
+        datesValue.present() ? request.optional("until") : request.optional("until", quotedText("5Y"));
     if (!market || !which) {
         return {};
+    }
+    const auto asked = readAsked(datesValue, market->asOf);
+    if (asked && !asked->empty() && untilValue.present()) {
+        request.findings().notice(untilValue.place(), "not-used",
+                                  "The dates asked for are looked at instead.");
     }
     const auto until = readUntil(untilValue, market->asOf);
     if (!curveOf(*market, *which)) {
@@ -169,11 +213,12 @@ Calculation readCurveTask(Reader& request) {
             "asset a curve of its yield.");
         return {};
     }
-    if (!until) {
+    if (!until || !asked) {
         return {};
     }
-    return [market = *market, which = *which, until = *until](Findings& findings, Writer& writer) {
-        answerCurve(market, which, until, findings, writer);
+    return [market = *market, which = *which, dates = LookedAt{*asked, *until}](Findings& findings,
+                                                                                Writer& writer) {
+        answerCurve(market, which, dates, findings, writer);
     };
 }
 

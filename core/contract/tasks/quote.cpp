@@ -173,6 +173,9 @@ void writeSensitivities(Writer& writer, const forward::Sensitivities& sensitivit
     }
     writer.member("fee", sensitivities.fee);
     writer.member("yield", sensitivities.yield);
+    if (sensitivities.yieldCurve) {
+        writeCurve(writer, "yieldCurve", *sensitivities.yieldCurve);
+    }
     writeList(writer, "cash", sensitivities.cash, [&](const forward::CashSensitivity& entry) {
         writeChange(writer, entry.at + "/amount", entry.change);
     });
