@@ -48,6 +48,9 @@ export function ForwardsEditor({ path, at, ofPair }: ForwardsEditorProps) {
         at={`${at}/rows`}
         columns={columns(points)}
       />
+      <p class="field-hint">
+        One figure, under Bid, stands for both sides. Rows copied from a spreadsheet paste into any cell.
+      </p>
       {points && (
         <Field
           label="Points in one"

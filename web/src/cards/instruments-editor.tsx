@@ -2,6 +2,7 @@ import { Choice } from '../fields/choice';
 import { dayCounts, interpolations } from '../fields/conventions';
 import { Field } from '../fields/field';
 import { Rows, type RowColumn } from '../fields/rows';
+import { typed } from '../store/session';
 
 const columns: readonly RowColumn[] = [
   {
@@ -21,6 +22,24 @@ const columns: readonly RowColumn[] = [
     size: 7,
   },
   { name: 'rate', label: 'Rate', unit: '%', holds: 'percent', called: ['rate', 'quote', 'value', 'yield'], size: 7 },
+  {
+    name: 'dayCount',
+    label: 'Day count',
+    holds: 'text',
+    like: /^(ACT\/|30E?\/|BUS\/)/i,
+    called: ['day count', 'daycount', 'basis', 'convention'],
+    size: 8,
+    rare: true,
+  },
+  {
+    name: 'payments',
+    label: 'Pays',
+    holds: 'text',
+    like: /^(annual|semiannual|quarterly|monthly|at-end)$/i,
+    called: ['payments', 'pays', 'frequency'],
+    size: 8,
+    rare: true,
+  },
 ];
 
 const turnColumns: readonly RowColumn[] = [
@@ -39,10 +58,15 @@ const payments = [
 
 /** What the money market quotes; the curve gives each its quote again. */
 export function InstrumentsEditor({ path, at }: { readonly path: string; readonly at: string }) {
+  const ownCalendars = [`${path}/calendars`, `${path}/holidays`, `${path}/openDays`].some(
+    (own) => typed(own).trim() !== '',
+  );
   return (
     <>
       <Rows name="Instruments" rowName="Instrument" path={`${path}/rows`} at={`${at}/items`} columns={columns} />
-      <p class="field-hint">Deposit, FRA or swap; tenors as ON, 3M, 2Y, of a FRA as 3x6.</p>
+      <p class="field-hint">
+        Deposit, FRA or swap; tenors as ON, 3M, 2Y, of a FRA as 3x6. Rows copied from a spreadsheet paste into any cell.
+      </p>
       <div class="field-row">
         <Choice label="Deposits, FRAs" path={`${path}/dayCount`} at={`${at}/dayCount`} options={dayCounts} />
         <Choice label="Swaps" path={`${path}/swapDayCount`} at={`${at}/swapDayCount`} options={dayCounts} />
@@ -65,6 +89,12 @@ export function InstrumentsEditor({ path, at }: { readonly path: string; readonl
         />
         <Field label="Calendars" path={`${path}/calendars`} at={`${at}/calendars`} kind="text" whole />
       </div>
+      {ownCalendars && (
+        <>
+          <Field label="Its holidays" path={`${path}/holidays`} at={`${at}/holidays`} kind="text" whole />
+          <Field label="Its open days" path={`${path}/openDays`} at={`${at}/openDays`} kind="text" whole />
+        </>
+      )}
       <h4>Jumps of the overnight rate</h4>
       <Rows
         name="Jumps of the overnight rate"

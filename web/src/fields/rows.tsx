@@ -11,6 +11,8 @@ export interface RowColumn extends Column {
   readonly unit?: string;
   /** How many figures it usually has. */
   readonly size?: number;
+  /** Shown only where a row has something in it, as pasted or opened rows may. */
+  readonly rare?: boolean;
 }
 
 type Row = Readonly<Record<string, string>> & { readonly id: number };
@@ -44,11 +46,14 @@ function rowFaults(at: string, columns: readonly RowColumn[]): readonly string[]
 }
 
 /** A table of inputs: typing in its last row, which is blank, adds one; rows copied from a spreadsheet paste into any cell. */
-export function Rows({ name, rowName, path, at, columns, before = 0, rest = {} }: RowsProps) {
+export function Rows({ name, rowName, path, at, columns: all, before = 0, rest = {} }: RowsProps) {
   const id = useId();
   const rows = (valueOf(path) ?? []) as readonly Row[];
+  const columns = all.filter(
+    (column) => column.rare !== true || rows.some((row) => (row[column.name] ?? '').trim() !== ''),
+  );
   const indexes = sentIndexes(rows);
-  const shown = [...rows, blankRow(columns, rest, nextId(rows))];
+  const shown = [...rows, blankRow(all, rest, nextId(rows))];
   const listFault = faultAt(at);
 
   const setCell = (index: number, column: string, text: string): void => {
@@ -66,7 +71,7 @@ export function Rows({ name, rowName, path, at, columns, before = 0, rest = {} }
     if (!/[\t\n]/.test(text.trim())) return;
     event.preventDefault();
     const { decimal, locale } = format.peek();
-    const pasted = readRows(text, columns, { locale, after: built.peek().request.market.asOf }, decimal);
+    const pasted = readRows(text, all, { locale, after: built.peek().request.market.asOf }, decimal);
     const first = nextId(rows);
     const added = pasted.map((cells, place) => ({ ...rest, ...cells, id: first + place }));
     const before = rows.slice(0, index).filter((row) => !isBlank(row));
@@ -94,7 +99,7 @@ export function Rows({ name, rowName, path, at, columns, before = 0, rest = {} }
           {shown.map((row, index) => {
             const sent = indexes[index] ?? null;
             const rowAt = sent === null ? '' : `${at}/${sent + before}`;
-            const faults = sent === null ? [] : rowFaults(rowAt, columns);
+            const faults = sent === null ? [] : rowFaults(rowAt, all);
             const faultId = `${id}-${row.id}`;
             return [
               <tr key={row.id}>

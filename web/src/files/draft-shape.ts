@@ -17,12 +17,15 @@ const pillars = members({
   interpolation: { oneOf: ['log-linear', 'linear-zero', 'monotone-cubic'] },
   rows: rows(texts('at', 'value')),
 });
+const laterText: Shape = { added: text, before: '' };
 const instruments: Shape = {
   added: members({
     interpolation: { oneOf: ['log-linear', 'linear-zero', 'monotone-cubic'] },
     ...texts('calendars', 'spotLag', 'dayCount', 'swapDayCount'),
+    holidays: laterText,
+    openDays: laterText,
     payments: { oneOf: ['annual', 'semiannual', 'quarterly', 'monthly', 'at-end'] },
-    rows: rows(texts('type', 'tenor', 'rate')),
+    rows: rows({ ...texts('type', 'tenor', 'rate'), dayCount: laterText, payments: laterText }),
     turns: rows(texts('from', 'to', 'spread')),
   }),
   before: emptyInstruments,

@@ -19,6 +19,7 @@ import type {
   MarketDraft,
   PillarsDraft,
   QuotedForwardsDraft,
+  QuotedRow,
   RateDraft,
   ShortRateDraft,
 } from './draft';
@@ -147,21 +148,32 @@ function twoTenors(text: string): readonly [string, string] | null {
   return [`${start}${(startUnit || endUnit || 'M').toUpperCase()}`, `${end}${(endUnit || 'M').toUpperCase()}`];
 }
 
+/** What a row says for itself, else what is said of its kind. */
+function own(text: string, ofKind: string): string {
+  return text.trim() === '' ? ofKind : text.trim();
+}
+
 function instrument(row: InstrumentRow, draft: InstrumentsDraft, at: string, read: Reader): object | undefined {
   const type = instrumentType(row.type);
   const tenor = row.tenor.trim() === '' ? undefined : row.tenor.trim().toUpperCase();
   const rate = read.number(row.rate, 'percent', `${at}/rate`);
   if (type === 'fra') {
     const both = twoTenors(row.tenor);
-    return members({ type, start: both?.[0] ?? tenor, end: both?.[1], rate, dayCount: draft.dayCount });
+    return members({
+      type,
+      start: both?.[0] ?? tenor,
+      end: both?.[1],
+      rate,
+      dayCount: own(row.dayCount, draft.dayCount),
+    });
   }
   const swap = type === 'overnight-swap';
   return members({
     type,
     tenor,
     rate,
-    dayCount: swap ? draft.swapDayCount : draft.dayCount,
-    payments: swap ? draft.payments : undefined,
+    dayCount: own(row.dayCount, swap ? draft.swapDayCount : draft.dayCount),
+    payments: swap ? own(row.payments, draft.payments) : undefined,
   });
 }
 
@@ -178,6 +190,8 @@ function instruments(draft: InstrumentsDraft, at: string, read: Reader): object 
     interpolation: draft.interpolation,
     ...members({
       calendars: codes(draft.calendars),
+      holidays: read.dateList(draft.holidays, `${at}/holidays`),
+      openDays: read.dateList(draft.openDays, `${at}/openDays`),
       spotLag: read.number(draft.spotLag, 'count', `${at}/spotLag`),
       turns: listOrNothing(turns),
     }),
@@ -290,6 +304,13 @@ function funding(draft: FundingDraft, at: string, read: Reader): Funding {
   };
 }
 
+/** Both sides of a quote; one figure, in the first column, stands for both. */
+function quotedValue(row: QuotedRow, kind: NumberKind, at: string, read: Reader): unknown {
+  if (row.offer.trim() === '' && row.bid.trim() !== '') return read.number(row.bid, kind, at);
+  const [bid, offer] = [read.number(row.bid, kind, `${at}/bid`), read.number(row.offer, kind, `${at}/offer`)];
+  return members({ bid, offer }) ?? {};
+}
+
 /** Forwards that the market quotes, in place of a curve or a yield. */
 function forwards(draft: QuotedForwardsDraft, own: CurveDraft | null, at: string, read: Reader): object {
   const kind = draft.quoted === 'points' && own !== null ? 'plain' : 'price';
@@ -305,11 +326,7 @@ function forwards(draft: QuotedForwardsDraft, own: CurveDraft | null, at: string
         })),
     rows: sent(draft.rows, `${at}/rows`, (row, place) => ({
       ...members({ at: read.maturity(row.at, `${place}/at`) }),
-      value:
-        members({
-          bid: read.number(row.bid, kind, `${place}/value/bid`),
-          offer: read.number(row.offer, kind, `${place}/value/offer`),
-        }) ?? {},
+      value: quotedValue(row, kind, `${place}/value`, read),
     })),
   };
 }

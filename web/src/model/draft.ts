@@ -30,6 +30,9 @@ export interface InstrumentRow {
   /** `3M`, `ON`; of a forward rate agreement `3M-6M` or `3x6`. */
   readonly tenor: string;
   readonly rate: string;
+  /** Its own day count and payments, where they are not those of its kind. */
+  readonly dayCount: string;
+  readonly payments: string;
 }
 export interface TurnRow {
   readonly id: number;
@@ -41,6 +44,8 @@ export interface TurnRow {
 export interface InstrumentsDraft {
   readonly interpolation: Interpolation;
   readonly calendars: string;
+  readonly holidays: string;
+  readonly openDays: string;
   readonly spotLag: string;
   /** Of deposits and forward rate agreements, and of swaps' fixed sides. */
   readonly dayCount: string;
@@ -275,6 +280,8 @@ export const emptyPillars: PillarsDraft = {
 export const emptyInstruments: InstrumentsDraft = {
   interpolation: 'log-linear',
   calendars: '',
+  holidays: '',
+  openDays: '',
   spotLag: '',
   dayCount: 'ACT/360',
   swapDayCount: 'ACT/360',

@@ -57,22 +57,33 @@ type FixedCurve = Exclude<Curve, { kind: 'random' }>;
 
 const instrumentNames = { deposit: 'deposit', fra: 'FRA', 'overnight-swap': 'swap' } as const;
 
-/** The page has one day count for deposits and forward rate agreements and one for swaps: the first of each. */
+/**
+ * The page has one day count for deposits and forward rate agreements and one for swaps, the first of each; others
+ * stand in their rows.
+ */
 function instruments(from: Extract<Curve, { kind: 'instruments' }>, write: Writer): FixedCurveDraft['instruments'] {
   const swap = from.items.find((item) => item.type === 'overnight-swap');
   const other = from.items.find((item) => item.type !== 'overnight-swap');
+  const dayCount = other?.dayCount ?? 'ACT/360';
+  const swapDayCount = swap?.dayCount ?? 'ACT/360';
+  const payments = swap?.payments ?? 'annual';
+  const own = (text: string, ofKind: string): string => (text === ofKind ? '' : text);
   return {
     interpolation: from.interpolation ?? 'log-linear',
     calendars: from.calendars === undefined ? '' : from.calendars.length === 0 ? 'weekends' : from.calendars.join(' '),
+    holidays: (from.holidays ?? []).map(dateToText).join('; '),
+    openDays: (from.openDays ?? []).map(dateToText).join('; '),
     spotLag: write.number(from.spotLag, 'count'),
-    dayCount: other?.dayCount ?? 'ACT/360',
-    swapDayCount: swap?.dayCount ?? 'ACT/360',
-    payments: swap?.payments ?? 'annual',
+    dayCount,
+    swapDayCount,
+    payments,
     rows: from.items.map((item, index) => ({
       id: index + 1,
       type: instrumentNames[item.type],
       tenor: item.type === 'fra' ? `${item.start}-${item.end}` : item.tenor,
       rate: write.number(item.rate, 'percent'),
+      dayCount: own(item.dayCount ?? 'ACT/360', item.type === 'overnight-swap' ? swapDayCount : dayCount),
+      payments: item.type === 'overnight-swap' ? own(item.payments ?? 'annual', payments) : '',
     })),
     turns: (from.turns ?? []).map((turn, index) => ({
       id: index + 1,
@@ -195,7 +206,13 @@ function forwards(from: QuotedForwards, write: Writer): QuotedForwardsDraft {
     against: pair?.against === undefined ? '' : kindOf(pair.against as FixedCurve),
     rows: from.rows.map((row, index) => {
       const { bid, offer } = both<number>(row.value);
-      return { id: index + 1, at: write.date(row.at), bid: write.number(bid, kind), offer: write.number(offer, kind) };
+      const one = typeof row.value === 'number';
+      return {
+        id: index + 1,
+        at: write.date(row.at),
+        bid: write.number(bid, kind),
+        offer: one ? '' : write.number(offer, kind),
+      };
     }),
   };
 }

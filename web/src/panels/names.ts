@@ -34,7 +34,7 @@ function text(value: unknown): string {
 
 function rowName(request: QuoteRequest, pointer: string): string | null {
   const [, list, index] =
-    /\/(pillars|items|turns|meetings|scenarios|cash|proportional)\/(\d+)(?:\/|$)/.exec(pointer) ?? [];
+    /\/(pillars|items|rows|turns|meetings|scenarios|cash|proportional)\/(\d+)(?:\/|$)/.exec(pointer) ?? [];
   if (!list || !index) return null;
   const row = pointer.slice(0, pointer.indexOf(`/${list}/`) + list.length + index.length + 2);
   if (list === 'pillars') return `Pillar ${text(at(request, `${row}/at`))}`;
@@ -46,6 +46,8 @@ function rowName(request: QuoteRequest, pointer: string): string | null {
     const names: Readonly<Record<string, string>> = { deposit: 'Deposit', fra: 'FRA', 'overnight-swap': 'Swap' };
     return `${names[type] ?? type} ${tenor ?? `${start ?? ''}–${end ?? ''}`}`;
   }
+  if (list === 'rows')
+    return `${pointer.includes('/yield/') ? 'Contract' : 'Forward'} ${text(at(request, `${row}/at`))}`;
   if (list === 'turns') return `Jump ${text(at(request, `${row}/from`))}`;
   if (list === 'meetings') return `Meeting ${text(at(request, `${row}/date`))}`;
   if (list === 'scenarios') return `Scenario ${Number(index) + 1}`;

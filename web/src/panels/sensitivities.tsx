@@ -33,13 +33,14 @@ function curveLines(name: string, curve: Curve, request: QuoteRequest, onAll?: n
 
 function linesOf(request: QuoteRequest, { sensitivities, total }: QuoteResult): Line[] {
   if (!sensitivities) return [];
-  const { spot, funding, base, fee, yield: yields, cash, day } = sensitivities;
+  const { spot, funding, base, fee, yield: yields, yieldCurve, cash, day } = sensitivities;
   const lines: Line[] = [{ name: 'Spot', move: '1 up', change: spot }];
   lines.push(...curveLines('Funding', funding, request, total?.fundingBasisPoint));
   if (base) lines.push(...curveLines(`${request.market.asset.base ?? 'Base'} funding`, base, request));
   if (request.market.asset.kind !== 'currency-pair') {
     lines.push({ name: 'Lending fee', move: '1 bp up', change: fee });
-    lines.push({ name: 'Yield', move: '1 bp up', change: yields });
+    if (yieldCurve) lines.push(...curveLines('Implied yield', yieldCurve, request));
+    else lines.push({ name: 'Yield', move: '1 bp up', change: yields });
   }
   lines.push(...cash.map(({ at, change }) => ({ name: placeName(request, at), move: '1 up', change })));
   if (day !== null) {

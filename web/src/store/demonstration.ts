@@ -34,16 +34,16 @@ function demonstrated(request: QuoteRequest, sign: DecimalSign): DealDraft {
     ...draft,
     curve: withEveryKind(draft.curve, currency, sign),
   });
+  const isPair = asset.kind === 'currency-pair';
+  const quoted = forwardsFrom(forwards[asset.kind] as unknown as QuotedForwards, sign);
   return {
     ...deal,
     market: {
       ...market,
       funding: filled(market.funding, asset.currency),
-      base: asset.kind === 'currency-pair' ? filled(market.base, asset.base) : market.base,
-      baseForwards:
-        asset.kind === 'currency-pair'
-          ? forwardsFrom(forwards['currency-pair'] as unknown as QuotedForwards, sign)
-          : market.baseForwards,
+      base: isPair ? filled(market.base, asset.base) : market.base,
+      baseForwards: isPair ? { ...quoted, against: 'pillars' } : market.baseForwards,
+      income: isPair ? market.income : { ...market.income, contracts: quoted },
       discount: { ...market.discount, curve: withEveryKind(market.discount.curve, asset.currency, sign) },
     },
     madeAt: `${day}T${hoursOfUse.from}`,
