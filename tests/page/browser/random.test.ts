@@ -63,6 +63,11 @@ describe.each(everyBrowser)('simulating in %s', (name) => {
     await person.see('Thin: single paths');
     await person.see('Where rates may go');
     await person.see('Simulated discount factors');
+    // The same values as a table, once they are asked for.
+    expect(await page.raw.$('[aria-label="Simulated discount factors, values"]')).toBeNull();
+    await page.raw.$$eval('.chart-values summary', (found) => found.forEach((summary) => summary.click()));
+    await page.raw.waitForSelector('[aria-label="Simulated discount factors, values"]');
+    await person.see('By the law');
     // Another sheet: what was simulated is told to be of the one before.
     await person.choose('Paths', '16384');
     await person.see('simulate again to see it');

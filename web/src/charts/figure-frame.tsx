@@ -1,4 +1,5 @@
 import type { ComponentChildren } from 'preact';
+import { useState } from 'preact/hooks';
 
 interface Props {
   readonly name: string;
@@ -12,6 +13,17 @@ interface Props {
   readonly legend?: string;
 }
 
+/** The values are made once they are asked for: a picture that changes while one looks on has less to do. */
+function Values({ children }: { readonly children: ComponentChildren }) {
+  const [open, setOpen] = useState(false);
+  return (
+    <details class="chart-values" onToggle={(event) => setOpen(event.currentTarget.open)}>
+      <summary>Values</summary>
+      {open && children}
+    </details>
+  );
+}
+
 /** A picture with its name and its values in reach. */
 export function FigureFrame({ name, beside, stale = false, children, table, legend }: Props) {
   return (
@@ -22,12 +34,7 @@ export function FigureFrame({ name, beside, stale = false, children, table, lege
       </figcaption>
       {children}
       {legend && <p class="chart-legend">{legend}</p>}
-      {table && (
-        <details class="chart-values">
-          <summary>Values</summary>
-          {table}
-        </details>
-      )}
+      {table && <Values>{table}</Values>}
     </figure>
   );
 }
