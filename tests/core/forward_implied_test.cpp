@@ -107,7 +107,9 @@ TEST_SUITE("forward: implied by quoted forwards") {
     TEST_CASE("derivatives by implied zero rates are those of finite differences, each at its row") {
         for (const auto interpolation : everyInterpolation) {
             CAPTURE(discounting::nameOf(interpolation));
-            for (auto [market, quoted] : everyMarket()) {
+            for (const auto& each : everyMarket()) {
+                const forward::Market& market = each.first;
+                forward::QuotedForwards quoted = each.second;
                 CAPTURE(forward::nameOf(market.asset.kind));
                 quoted.interpolation = interpolation;
                 const forward::Market made = withImplied(market, quoted);
